@@ -15,6 +15,8 @@ const production = process.env.NODE_ENV === "production";
 
 /** @type {import('next').NextConfig} */
 export default {
+  // A test build must not overwrite the build that is being served.
+  distDir: process.env.FERRULE_DIST_DIR || ".next",
   poweredByHeader: false,
   reactStrictMode: true,
   // Sequelize loads its parts by name at run time and must not be bundled; pg comes with it.
