@@ -16,6 +16,7 @@ export default defineConfig([
       "@typescript-eslint/no-explicit-any": "error",
       "@typescript-eslint/ban-ts-comment": "error",
       "@typescript-eslint/no-unused-vars": ["error", { argsIgnorePattern: "^_", varsIgnorePattern: "^_" }],
+      "import/no-anonymous-default-export": "off",
       eqeqeq: ["error", "always", { null: "ignore" }],
     },
   },

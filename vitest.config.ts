@@ -1,0 +1,41 @@
+import path from "node:path";
+import { defineConfig } from "vitest/config";
+
+const root = import.meta.dirname;
+const resolve = {
+  tsconfigPaths: true,
+  // The marker package throws outside the server bundle, where it has nothing to mark.
+  alias: { "server-only": path.join(root, "node_modules/server-only/empty.js") },
+};
+
+export default defineConfig({
+  resolve,
+  test: {
+    env: { TZ: "UTC", AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: "true" },
+    projects: [
+      {
+        resolve,
+        test: {
+          name: "unit",
+          environment: "node",
+          include: ["tests/{lib,rules,published,property,components,scripts}/**/*.test.{ts,tsx}"],
+          env: { TZ: "UTC", AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: "true" },
+          testTimeout: 30_000,
+        },
+      },
+      {
+        resolve,
+        test: {
+          name: "api",
+          environment: "node",
+          include: ["tests/api/**/*.test.ts"],
+          env: { TZ: "UTC", AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: "true" },
+          globalSetup: ["tests/api/support/services.ts"],
+          setupFiles: ["tests/api/support/ownDatabase.ts"],
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
+      },
+    ],
+  },
+});
