@@ -1,15 +1,30 @@
-/** Where a number or a limit comes from: a table or section of one edition. */
-export interface Citation { edition: string; section: string; confirmation: "read" | "agreed" | "unconfirmed" | "preview" }
+export type { Citation } from "@/lib/code";
+import type { Citation } from "@/lib/code";
+
 /** One line of a worksheet; the screen and the sheet print the same line. */
 export interface Step {
-  symbol: string;
-  /** Formula in letters, for example I × 1.25. */
-  expression: string;
+  readonly symbol: string;
+  /** Formula in letters, for example I × 1.25, or what is looked up. */
+  readonly expression: string;
   /** The same with numbers and units. */
-  substituted: string;
-  result: number;
-  unit: string;
+  readonly substituted: string;
+  /** A number, or a word where the line picks a size or decides. Numbers are not rounded here. */
+  readonly result: number | string;
+  /** Unit of the result, empty for a plain number or a word. */
+  readonly unit: string;
   /** Table or section printed at the right edge. */
-  citation?: string;
+  readonly citation?: string;
 }
-export interface Calculation<Value = number> { value: Value; unit: string; steps: readonly Step[]; citations: readonly Citation[] }
+
+/** What every calculation returns: the value, its unit, the worked steps and the references. */
+export interface Calculation<Value = number> {
+  readonly value: Value;
+  readonly unit: string;
+  readonly steps: readonly Step[];
+  readonly citations: readonly Citation[];
+}
+
+/** A calculation with its further results by name. */
+export interface CalcResult<Value, Detail> extends Calculation<Value> {
+  readonly detail: Detail;
+}

@@ -1,0 +1,15 @@
+export * from "./ampacity";
+export * from "./busbar";
+export * from "./conductor-count";
+export * from "./connection";
+export * from "./equipment-ground";
+export * from "./fault-current";
+export * from "./fill-item";
+export * from "./overcurrent-device";
+export * from "./raceway-fill";
+export * from "./required-ampacity";
+export * from "./string-current";
+export * from "./string-voltage";
+export * from "./voltage-drop";
+export * from "./types";
+export { shown, Worksheet } from "./worksheet";

@@ -1,0 +1,64 @@
+import { checkOneOf } from "@/lib/units";
+import { CodeLookupError } from "./errors";
+import { GROUNDING_SECTIONS } from "./sections/grounding";
+import { LOAD_SECTIONS } from "./sections/loads";
+import { RACEWAY_SECTIONS } from "./sections/raceways";
+import { SOURCE_SECTIONS } from "./sections/sources";
+import { WIRING_SECTIONS } from "./sections/wiring";
+import type { SectionEntry } from "./sections/entry";
+import { EDITIONS, type Citation, type Confirmation, type Edition } from "./types";
+
+/** Section numbers move between editions, meanings do not: every reference goes by its meaning. */
+export const SECTIONS: Readonly<Record<string, SectionEntry>> = {
+  ...WIRING_SECTIONS,
+  ...RACEWAY_SECTIONS,
+  ...GROUNDING_SECTIONS,
+  ...SOURCE_SECTIONS,
+  ...LOAD_SECTIONS,
+};
+
+/** Keys of all meanings. */
+export const MEANINGS: readonly string[] = Object.keys(SECTIONS);
+
+const CACHE = new Map<string, Citation>();
+
+/**
+ * The citation of a meaning in an edition.
+ * @throws CodeLookupError when the meaning is not known or the edition has no such rule.
+ */
+export function cite(meaning: string, edition: Edition): Citation {
+  const key = `${edition} ${meaning}`;
+  const cached = CACHE.get(key);
+  if (cached !== undefined) return cached;
+  checkOneOf("edition", edition, EDITIONS);
+  const entry = Object.hasOwn(SECTIONS, meaning) ? SECTIONS[meaning] : undefined;
+  if (entry === undefined) throw new CodeLookupError("meaning", `"${meaning}" is not a known meaning`);
+  const place = entry.places[edition];
+  if (place === null) throw new CodeLookupError("edition", `${edition} has no rule "${entry.title}"`);
+  const citation: Citation = { meaning, code: entry.code, edition: entry.bookEdition ?? edition, section: place.section, title: entry.title, confirmation: place.confirmation };
+  CACHE.set(key, citation);
+  return citation;
+}
+
+/** The citation, or null where the edition has no such rule. */
+export function citeOrNull(meaning: string, edition: Edition): Citation | null {
+  return SECTIONS[meaning]?.places[edition] === null ? null : cite(meaning, edition);
+}
+
+const NOTES: Readonly<Record<Confirmation, string>> = {
+  read: "",
+  agreed: " (section to be verified)",
+  unconfirmed: " (verify in the adopted book)",
+  preview: " (preview, edition not read)",
+};
+const TEXTS = new Map<Citation, string>();
+
+/** A citation as printed: `NEC 2023 Table 310.16`, with a note where the number was not read in that edition. */
+export function citationText(citation: Citation): string {
+  const cached = TEXTS.get(citation);
+  if (cached !== undefined) return cached;
+  const text = `${citation.code} ${citation.edition} ${citation.section}${NOTES[citation.confirmation]}`;
+  // Citations of `cite` are shared objects, few in number; others are not kept.
+  if (CACHE.get(`${citation.edition} ${citation.meaning}`) === citation) TEXTS.set(citation, text);
+  return text;
+}

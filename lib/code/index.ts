@@ -1,0 +1,14 @@
+export * from "./ampacity";
+export * from "./editions";
+export * from "./errors";
+export * from "./grounding";
+export * from "./impedance";
+export * from "./insulation";
+export * from "./overcurrent";
+export * from "./raceway";
+export * from "./site";
+export * from "./types";
+export { RACEWAY_KINDS, RACEWAY_ARTICLES, type RacewayKind, type RacewayTable } from "./tables/raceway-dimensions";
+export { BURIAL_LOCATIONS, BURIAL_METHODS, type BurialLocation, type BurialMethod } from "./tables/burial-depth";
+export { ESS_LOCATIONS, type EssLocation } from "./tables/ess-limits";
+export { SCREW_CONNECTORS, type ScrewConnector } from "./tables/torque";

@@ -1,0 +1,43 @@
+import { checkNumber, checkOneOf, type ConductorSize } from "@/lib/units";
+import { CodeLookupError } from "./errors";
+import { ADDITIONAL_FUSE_RATINGS, SMALL_CONDUCTOR_ROWS, STANDARD_RATINGS } from "./tables/overcurrent";
+import { EDITIONS, type Edition, type Material } from "./types";
+
+const RANGE = { min: 0, max: 100000, unit: "A" } as const;
+
+/** Standard ratings of an edition in A, smallest first; with the additional fuse ratings where asked. */
+export function standardRatingsA(edition: Edition, fuse = false): readonly number[] {
+  checkOneOf("edition", edition, EDITIONS);
+  if (!fuse) return STANDARD_RATINGS[edition];
+  return [...STANDARD_RATINGS[edition], ...ADDITIONAL_FUSE_RATINGS[edition]].sort((a, b) => a - b);
+}
+
+/** True when a rating in A is a standard rating of the edition. */
+export function isStandardRatingA(ratingA: number, edition: Edition, fuse = false): boolean {
+  return standardRatingsA(edition, fuse).includes(checkNumber("ratingA", ratingA, RANGE));
+}
+
+/**
+ * Smallest standard rating in A that is not below the current.
+ * @throws CodeLookupError above the last standard rating.
+ */
+export function standardRatingAtLeastA(currentA: number, edition: Edition, fuse = false, field = "currentA"): number {
+  checkNumber(field, currentA, RANGE);
+  // 1.25 x 32 must find 40 even where binary arithmetic leaves 40.000000000000004.
+  const found = standardRatingsA(edition, fuse).find((rating) => rating >= currentA - 1e-9);
+  if (found === undefined) throw new CodeLookupError(field, `${currentA} A is above the last standard rating`, "up to 6000 A");
+  return found;
+}
+
+/** Largest standard rating in A that is not above the current, or null below the first. */
+export function standardRatingAtMostA(currentA: number, edition: Edition, fuse = false): number | null {
+  checkNumber("currentA", currentA, RANGE);
+  return standardRatingsA(edition, fuse).findLast((rating) => rating <= currentA + 1e-9) ?? null;
+}
+
+/** Largest overcurrent device in A on a small conductor, 240.4(D), or null where the section sets none. */
+export function smallConductorLimitA(size: ConductorSize, material: Material, edition: Edition): number | null {
+  checkOneOf("edition", edition, EDITIONS);
+  const row = SMALL_CONDUCTOR_ROWS.find((item) => item.size === size && item.materials.includes(material) && item.from <= edition);
+  return row?.maxOcpdA ?? null;
+}
