@@ -20,6 +20,7 @@ export default defineConfig({
           environment: "node",
           include: ["tests/{lib,rules,published,property,components,scripts}/**/*.test.{ts,tsx}"],
           env: { TZ: "UTC", AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: "true" },
+          benchmark: { include: ["tests/bench/**/*.bench.ts"] },
           testTimeout: 30_000,
         },
       },
@@ -34,6 +35,19 @@ export default defineConfig({
           setupFiles: ["tests/api/support/ownDatabase.ts"],
           testTimeout: 30_000,
           hookTimeout: 60_000,
+        },
+      },
+      {
+        // Soak, load, large mutation and kill runs, on the product that scripts/testLong.mjs starts.
+        resolve,
+        test: {
+          name: "long",
+          environment: "node",
+          include: ["tests/long/**/*.test.ts"],
+          env: { TZ: "UTC", AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: "true" },
+          testTimeout: 3_600_000,
+          hookTimeout: 120_000,
+          fileParallelism: false,
         },
       },
     ],

@@ -7,7 +7,7 @@ import path from "node:path";
 import { COMMON_ENV, buildIfNeeded, migrate, seedDemo, startApplication } from "./lib/application.mjs";
 import { keptSecret, readDotEnv } from "./lib/environment.mjs";
 import { ensurePackages } from "./lib/packages.mjs";
-import { identify, isAlive, stop, stopRunning } from "./lib/processes.mjs";
+import { identify, isAlive, stop, stopRunning, watchParent } from "./lib/processes.mjs";
 import { Stop, elapsed, say, step } from "./lib/say.mjs";
 import { startServices } from "./lib/services.mjs";
 
@@ -37,6 +37,8 @@ for (const signal of /** @type {const} */ (["SIGINT", "SIGTERM", "SIGHUP"])) {
     void end(0);
   });
 }
+
+watchParent(() => void end(0));
 
 /** Ends what a killed run left behind; says so when one is still running. @returns {Promise<boolean>} true when one is */
 async function alreadyRunning() {

@@ -42,7 +42,7 @@ export function findPostgres() {
     const onPath = which("pg_ctl");
     if (onPath) places.push(path.dirname(fs.realpathSync(onPath)));
   }
-  return places.map(inspect).filter((found) => found !== null);
+  return [...new Set(places)].map(inspect).filter((found) => found !== null);
 }
 
 /**
@@ -140,6 +140,9 @@ export async function startCluster({ folder, password, temporary = false }) {
     pg(program("pg_ctl"), ["-D", dataFolder, "-m", "fast", "-w", "stop"], { quiet: true });
   }
 
+  const last = readNote(dataFolder);
+  if (last.socketFolder && /^fpg-/.test(path.basename(last.socketFolder))) fs.rmSync(last.socketFolder, { recursive: true, force: true });
+  // Socket paths are limited to about 100 bytes, so the sockets cannot live beside the data.
   const socketFolder = fs.mkdtempSync(path.join(os.tmpdir(), "fpg-"));
   if (isRoot()) spawnSync("chown", [unprivilegedUser(), socketFolder]);
   const logFile = path.join(dataFolder, "server.log");
@@ -149,11 +152,12 @@ export async function startCluster({ folder, password, temporary = false }) {
     ...(temporary ? ["-c fsync=off", "-c full_page_writes=off", "-c synchronous_commit=off"] : []),
   ];
   for (let attempt = 1; ; attempt += 1) {
-    const port = await lastPort(dataFolder, attempt);
+    // The port of the last run while it is free, so that a noted address stays right.
+    const port = attempt === 1 && last.port && (await isFree(last.port)) ? last.port : await freePort();
     const options = [...settings, `-c port=${port}`].join(" ");
     const started = pg(program("pg_ctl"), ["-D", dataFolder, "-l", logFile, "-o", options, "-w", "-t", "60", "start"], { quiet: true });
     if (started.status === 0) {
-      fs.writeFileSync(path.join(dataFolder, "ferrule.port"), String(port));
+      fs.writeFileSync(path.join(dataFolder, NOTE_FILE), JSON.stringify({ port, socketFolder }));
       return new Cluster({ pgCtl: program("pg_ctl"), dataFolder, socketFolder, port, password, temporary });
     }
     if (attempt === 3) {
@@ -164,15 +168,16 @@ export async function startCluster({ folder, password, temporary = false }) {
   }
 }
 
-/** The port of the last run while it is free, so that a noted address stays right. */
-async function lastPort(/** @type {string} */ dataFolder, /** @type {number} */ attempt) {
+/** Beside the data: port and socket folder of the last start. */
+const NOTE_FILE = "ferrule.json";
+
+/** @param {string} dataFolder @returns {{ port?: number, socketFolder?: string }} */
+function readNote(dataFolder) {
   try {
-    const port = Number(fs.readFileSync(path.join(dataFolder, "ferrule.port"), "utf8"));
-    if (attempt === 1 && port > 0 && (await isFree(port))) return port;
+    return JSON.parse(fs.readFileSync(path.join(dataFolder, NOTE_FILE), "utf8"));
   } catch {
-    // First start.
+    return {};
   }
-  return freePort();
 }
 
 /** @param {string} initdb @param {string} dataFolder @param {string} password @param {boolean} temporary */

@@ -162,3 +162,16 @@ export async function waitForHttp(url, timeoutMs, gaveUp = () => false) {
   }
   return false;
 }
+
+/**
+ * Calls back when npm, which started this script, is gone: a signal that ends npm alone is not
+ * passed on to its script.
+ * @param {() => void} whenGone
+ */
+export function watchParent(whenGone) {
+  if (!process.env.npm_lifecycle_event) return;
+  const parent = process.ppid;
+  setInterval(() => {
+    if (process.ppid !== parent) whenGone();
+  }, 500).unref();
+}
