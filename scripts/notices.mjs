@@ -28,7 +28,7 @@ function licenseOf(place, entry) {
 /** @type {Map<string, { name: string, version: string, license: string }>} */
 const packages = new Map();
 for (const [place, entry] of Object.entries(lock.packages)) {
-  if (place === "" || entry.dev || entry.devOptional) continue;
+  if (place === "" || entry.dev || entry.devOptional || entry.extraneous) continue;
   const name = place.slice(place.lastIndexOf("node_modules/") + "node_modules/".length);
   packages.set(`${name}@${entry.version}`, { name, version: entry.version, license: licenseOf(place, entry) });
 }

@@ -19,8 +19,8 @@ export function packagesMatchLock(root) {
     return Object.entries(lock).every(([name, entry]) => {
       if (name === "") return true;
       const present = installed[name];
-      // Parts for other systems are left out by npm.
-      if (!present) return Boolean(entry.optional || entry.devOptional || entry.peer);
+      // Parts for other systems, and entries npm itself calls extraneous, are left out by it.
+      if (!present) return Boolean(entry.optional || entry.devOptional || entry.peer || entry.extraneous);
       return present.version === entry.version;
     });
   } catch {
