@@ -16,6 +16,11 @@ export default defineConfig({
   expect: { timeout: 10_000 },
   forbidOnly: Boolean(process.env["CI"]),
   reporter: [["line"]],
+  projects: [
+    { name: "pages", testIgnore: /\.alone\.spec\.ts$/ },
+    // Tests that kill a process of the product would disturb others: they run after them, one at a time.
+    { name: "alone", testMatch: /\.alone\.spec\.ts$/, dependencies: ["pages"], workers: 1 },
+  ],
   use: {
     baseURL: process.env["FERRULE_BASE_URL"] ?? "http://127.0.0.1:3000",
     viewport: { width: 1600, height: 1000 },
