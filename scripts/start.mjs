@@ -81,8 +81,8 @@ async function printAccounts() {
 }
 
 async function main() {
-  const [major = 0] = process.versions.node.split(".").map(Number);
-  if (major < 20) throw new Stop(`Node.js 20 or newer is needed; this is ${process.versions.node}.`, 2);
+  const [major = 0, minor = 0] = process.versions.node.split(".").map(Number);
+  if (major < 20 || (major === 20 && minor < 12)) throw new Stop(`Node.js 20.12 or newer is needed; this is ${process.versions.node}.`, 2);
   fs.mkdirSync(dataFolder, { recursive: true, mode: 0o755 });
   if (await alreadyRunning()) return false;
   noteRun([]);
