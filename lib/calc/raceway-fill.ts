@@ -36,6 +36,9 @@ export interface RacewayFillDetail {
   readonly jamLikely: boolean;
 }
 
+/** No trade size of the table holds the conductors. */
+export class NoRacewayError extends FieldError {}
+
 /**
  * Fill of a raceway in percent of its inside area, the limit that holds, and the room left.
  * @throws QuantityError or CodeLookupError naming the field. Source: Chapter 9 Tables 1, 4, 5, 5A, 8 and notes; 376.22(A).
@@ -64,7 +67,7 @@ export function racewayFill(input: RacewayFillInput): CalcResult<number, Raceway
 /**
  * Smallest trade size of a kind of conduit or tubing that holds the conductors, with a reserve kept for later ones.
  * @returns the trade size; the detail names the fill with and without the reserve.
- * @throws FieldError when no trade size of the table is large enough.
+ * @throws NoRacewayError when no trade size of the table is large enough.
  */
 export function smallestRaceway(input: {
   readonly edition: Edition; readonly kind: RacewayKind; readonly lengthIn: number; readonly items: readonly FillItem[]; readonly reserve?: readonly FillItem[];
@@ -83,7 +86,7 @@ export function smallestRaceway(input: {
       return sheet.result(tradeSize, "", { fillPct: now.value, fillWithReservePct: withReserve.value, limitPct: withReserve.detail.limitPct });
     }
   }
-  throw new FieldError("items", `no ${input.kind} of the table holds these conductors`, racewayTradeSizes(input.kind).join(", "));
+  throw new NoRacewayError("items", `no ${input.kind} of the table holds these conductors`, racewayTradeSizes(input.kind).join(", "));
 }
 
 function insideArea(sheet: Worksheet, raceway: FilledRaceway): { totalIn2: number; insideDiameterIn: number | null } {
