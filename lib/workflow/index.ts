@@ -1,0 +1,3 @@
+export * from "./letters";
+export * from "./revision";
+export * from "./seal";
