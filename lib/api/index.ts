@@ -1,0 +1,6 @@
+/** Shapes of what browser and server say to each other. */
+export * from "./drawings";
+export * from "./jobs";
+export * from "./people";
+export * from "./problem";
+export * from "./revisions";
