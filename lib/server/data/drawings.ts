@@ -1,0 +1,54 @@
+import "server-only";
+import type { DrawingAnswer, JournalEntry, SaveAnswer } from "@/lib/api";
+import { may } from "@/lib/policy";
+import type { CheckResult } from "@/lib/rules/engine/types";
+import { check } from "@/lib/rules/engine/run";
+import { RULE_SET_VERSION } from "@/lib/rules";
+import type { Drawing } from "@/models";
+import { notFound } from "@/lib/server/http/problem";
+import { jobAccess, type Actor } from "./actor";
+import { database, inTransaction } from "./database";
+import { entriesAfter, writeSave, type Save } from "./journal";
+import { draftLetter } from "./letters";
+
+/** The drawing of a job as it is now, and what the person may do with it. */
+export async function getDrawing(actor: Actor, jobId: string): Promise<DrawingAnswer> {
+  const { job, roles } = await jobAccess(actor, jobId, "drawing.view");
+  const drawing = await database().Drawing.findOne({ where: { jobId } });
+  if (!drawing) throw notFound();
+  return {
+    id: drawing.id, jobId, jobNumber: job.number, jobName: job.name, sequence: drawing.sequence, drawing: drawing.document,
+    revisionLetter: await draftLetter(jobId),
+    may: { edit: may(roles, "drawing.edit"), issue: may(roles, "revision.issue"), seal: may(roles, "revision.seal", "in review") },
+  };
+}
+
+/** Takes a save in: one transaction with the drawing's row locked, so that saves queue up one behind the other. */
+export async function saveDrawing(actor: Actor, drawingId: string, save: Save): Promise<SaveAnswer> {
+  return inTransaction(async (transaction) => {
+    const drawing = await database().Drawing.findByPk(drawingId, { transaction, lock: transaction.LOCK.UPDATE });
+    if (!drawing) throw notFound();
+    await jobAccess(actor, drawing.jobId, "drawing.edit", { transaction });
+    return writeSave(drawing, save, actor, transaction);
+  });
+}
+
+/** Saves after a sequence number, for a page that catches up. */
+export async function savesSince(actor: Actor, drawingId: string, since: number): Promise<{ sequence: number; entries: JournalEntry[] }> {
+  const drawing = await database().Drawing.findByPk(drawingId, { attributes: ["id", "jobId", "sequence"] });
+  if (!drawing) throw notFound();
+  await jobAccess(actor, drawing.jobId, "drawing.view");
+  return { sequence: drawing.sequence, entries: await entriesAfter(drawingId, since) };
+}
+
+/** Counts of the draft's check for lists, kept until the drawing or the rule set changes. */
+export async function draftCounts(drawing: Drawing): Promise<CheckResult["counts"]> {
+  if (drawing.checkCounts && drawing.checkedSequence === drawing.sequence && drawing.checkedRuleSet === RULE_SET_VERSION) return drawing.checkCounts;
+  const { counts } = check(drawing.document);
+  // Not part of anyone's edit: `silent` leaves the time of the last change alone.
+  await database().Drawing.update(
+    { checkCounts: counts, checkedSequence: drawing.sequence, checkedRuleSet: RULE_SET_VERSION },
+    { where: { id: drawing.id, sequence: drawing.sequence }, silent: true },
+  );
+  return counts;
+}

@@ -1,0 +1,188 @@
+import "server-only";
+import { randomUUID } from "node:crypto";
+import { Op, UniqueConstraintError } from "sequelize";
+import type { z } from "zod";
+import type { JobAnswer, JobLine, jobChange, jobInput } from "@/lib/api";
+import { emptyDrawing } from "@/lib/diagram/new";
+import type { Drawing as DrawingDocument, Site } from "@/lib/diagram/schema";
+import { may, type Role } from "@/lib/policy";
+import type { PatchOperation } from "@/lib/rules/engine/types";
+import type { Job, Jurisdiction, Revision } from "@/models";
+import { conflict, notFound, unprocessable } from "@/lib/server/http/problem";
+import { companyAccess, jobAccess, type Actor } from "./actor";
+import { audit } from "./audit";
+import { database, inTransaction } from "./database";
+import { draftCounts } from "./drawings";
+import { writeSave } from "./journal";
+import { jurisdictionAnswer, makeJurisdiction, visibleJurisdiction } from "./jurisdictions";
+import { draftLetter } from "./letters";
+import { waitsFor } from "./waitsFor";
+
+const numberTaken = (error: unknown) =>
+  error instanceof UniqueConstraintError ? conflict("number-taken", "Another job of the company has this number.", { field: "number" }) : error;
+
+/** Makes a job with an empty drawing; who makes it is its administrator, and designer where they design in the company. */
+export async function createJob(actor: Actor, input: z.output<typeof jobInput>): Promise<{ id: string }> {
+  const { Company, Drawing, Job, JobMember } = database();
+  try {
+    return await inTransaction(async (transaction) => {
+      const roles = await companyAccess(actor, input.companyId, "jobs.create", transaction);
+      const company = await Company.findByPk(input.companyId, { transaction, rejectOnEmpty: true });
+      const jurisdiction = "id" in input.jurisdiction
+        ? await visibleJurisdiction(input.jurisdiction.id, input.companyId, transaction)
+        : await makeJurisdiction(actor, input.companyId, input.jurisdiction, transaction);
+      const site: Site = { ...input.site, amendments: jurisdiction.amendments };
+      const document = emptyDrawing(site, {
+        jobName: input.name, jobNumber: input.number, addressLines: input.addressLines, parcel: input.parcel, owner: input.owner,
+        designedBy: roles.includes("designer") ? actor.name : "", checkedBy: "", preparer: input.preparer, contractor: input.contractor || company.name,
+        permitNumber: input.permitNumber, codes: codesLine(site, jurisdiction), scope: input.scope,
+      });
+      const job = await Job.create(
+        { companyId: company.id, number: input.number, name: input.name, jurisdictionId: jurisdiction.id, createdBy: actor.id }, { transaction },
+      );
+      await Drawing.create({ jobId: job.id, document, checkedSequence: null, checkedRuleSet: null, checkCounts: null, updatedBy: actor.id }, { transaction });
+      const own: Role[] = roles.includes("designer") ? ["administrator", "designer"] : ["administrator"];
+      await JobMember.create({ jobId: job.id, userId: actor.id, roles: own }, { transaction });
+      await audit(transaction, actor, { action: "job.create", subject: `jobs/${job.id}`, companyId: company.id, jobId: job.id, detail: { number: job.number } });
+      return { id: job.id };
+    });
+  } catch (error) {
+    throw numberTaken(error);
+  }
+}
+
+function codesLine(site: Site, jurisdiction: Jurisdiction): string {
+  return [`NEC ${site.edition}`, jurisdiction.ordinance].filter(Boolean).join(", ");
+}
+
+const LIST_LIMIT = 500;
+
+/** The register: jobs in which the person has an office role, last changed first. */
+export async function listJobs(actor: Actor): Promise<JobLine[]> {
+  const { Drawing, Job, JobMember, Jurisdiction, Membership, User } = database();
+  const [own, administered] = await Promise.all([
+    JobMember.findAll({ where: { userId: actor.id }, attributes: ["jobId", "roles"] }),
+    Membership.findAll({ where: { userId: actor.id, roles: { [Op.contains]: ["administrator"] } }, attributes: ["companyId"] }),
+  ]);
+  const ownRoles = new Map(own.map((each) => [each.jobId, each.roles]));
+  const companies = administered.map((each) => each.companyId);
+  const jobs = await Job.findAll({
+    where: { [Op.or]: [{ id: [...ownRoles.keys()] }, { companyId: companies }] },
+    include: [
+      { model: Drawing, as: "drawing" }, { model: Jurisdiction, as: "jurisdiction" },
+      { model: JobMember, as: "members", include: [{ model: User, as: "user", attributes: ["id", "name"] }] },
+    ],
+    order: [["updatedAt", "DESC"]], limit: LIST_LIMIT,
+  });
+  const latest = await latestRevisions(jobs.map((job) => job.id));
+  const lines: JobLine[] = [];
+  for (const job of jobs) {
+    const roles: Role[] = [...new Set([...(ownRoles.get(job.id) ?? []), ...(companies.includes(job.companyId) ? ["administrator" as const] : [])])];
+    if (job.drawing && may(roles, "drawing.view")) lines.push(await jobLine(job, roles, latest.get(job.id) ?? null, actor));
+  }
+  return lines;
+}
+
+async function jobLine(job: Job, roles: Role[], revision: Revision | null, actor: Actor): Promise<JobLine> {
+  const { drawing } = job;
+  if (!drawing) throw notFound();
+  const counts = await draftCounts(drawing);
+  const licensees = (job.members ?? []).filter((each) => each.roles.includes("licensee"));
+  const block = drawing.document.sheet.titleBlock;
+  return {
+    id: job.id, number: job.number, name: job.name, place: placeLine(block.addressLines), jurisdiction: job.jurisdiction?.name ?? null,
+    permitNumber: block.permitNumber, revision: revision?.letter ?? null, state: revision?.state ?? "draft", counts, roles,
+    waitsFor: waitsFor({ roles, revision, counts, licensees: licensees.map((each) => ({ id: each.userId, name: each.user?.name ?? "" })), userId: actor.id }),
+    edition: drawing.document.site.edition, addressLines: block.addressLines, parcel: block.parcel,
+    licensees: licensees.map((each) => each.user?.name ?? ""), changedAt: job.updatedAt.toISOString(),
+  };
+}
+
+/** Town of an address: its last part that is no street. */
+const placeLine = (addressLines: string) => addressLines.split(/[\n,]/).map((part) => part.trim()).filter(Boolean)[1] ?? addressLines.trim();
+
+/** Latest revision of each job; of one that was taken to review while another is sealed, the one in review. */
+async function latestRevisions(jobIds: readonly string[]): Promise<Map<string, Revision>> {
+  const rows = await database().Revision.findAll({
+    where: { jobId: [...jobIds] }, attributes: ["id", "jobId", "letter", "issue", "state", "issuedAt", "issuedBy", "returnedAt"], order: [["issuedAt", "ASC"]],
+  });
+  return new Map(rows.map((row) => [row.jobId, row]));
+}
+
+/** One job with its site and what the person may do. */
+export async function getJob(actor: Actor, jobId: string): Promise<JobAnswer> {
+  const { job, roles } = await jobAccess(actor, jobId, "job.view");
+  const { Company, Drawing, Jurisdiction } = database();
+  const [company, drawing, jurisdiction, latest] = await Promise.all([
+    Company.findByPk(job.companyId), Drawing.findOne({ where: { jobId } }),
+    job.jurisdictionId ? Jurisdiction.findByPk(job.jurisdictionId) : null, latestRevisions([jobId]),
+  ]);
+  if (!drawing || !company) throw notFound();
+  const block = drawing.document.sheet.titleBlock;
+  const office = may(roles, "drawing.view");
+  const revision = latest.get(jobId) ?? null;
+  // To the counter a job is what was sealed, not what is being drawn.
+  const shown = office || (revision && may(roles, "revision.view", revision.state)) ? revision : null;
+  return {
+    id: job.id, companyId: job.companyId, companyName: company.name, number: job.number, name: job.name, addressLines: block.addressLines,
+    parcel: block.parcel, owner: block.owner, scope: block.scope, permitNumber: block.permitNumber, preparer: block.preparer, contractor: block.contractor,
+    jurisdiction: jurisdiction && jurisdictionAnswer(jurisdiction), site: drawing.document.site, roles, state: shown?.state ?? "draft",
+    revision: shown?.letter ?? null, nextLetter: await draftLetter(jobId), counts: office ? await draftCounts(drawing) : null,
+    changedAt: job.updatedAt.toISOString(),
+    may: {
+      edit: may(roles, "job.edit"), manageMembers: may(roles, "members.manage"), viewDrawing: office, editDrawing: may(roles, "drawing.edit"),
+      issue: may(roles, "revision.issue"), seal: may(roles, "revision.seal", "in review"),
+    },
+  };
+}
+
+/** Changes job data. What also stands in the drawing is changed there through the journal, in the same transaction. */
+export async function updateJob(actor: Actor, jobId: string, change: z.output<typeof jobChange>): Promise<JobAnswer> {
+  try {
+    await inTransaction(async (transaction) => {
+      const { job } = await jobAccess(actor, jobId, "job.edit", { transaction });
+      const drawing = await database().Drawing.findOne({ where: { jobId }, transaction, lock: transaction.LOCK.UPDATE });
+      if (!drawing) throw notFound();
+      const jurisdiction = change.jurisdictionId ? await visibleJurisdiction(change.jurisdictionId, job.companyId, transaction) : null;
+      const patches = documentChange(drawing.document, change, jurisdiction);
+      if (patches.length > 0) {
+        await writeSave(drawing, { saveId: randomUUID(), baseSequence: drawing.sequence, patches, title: "Change the job's data" }, actor, transaction);
+      }
+      await job.update(
+        { ...(change.number === undefined ? {} : { number: change.number }), ...(change.name === undefined ? {} : { name: change.name }), ...(jurisdiction ? { jurisdictionId: jurisdiction.id } : {}) },
+        { transaction },
+      );
+      await audit(transaction, actor, { action: "job.edit", subject: `jobs/${jobId}`, jobId, detail: { fields: Object.keys(change) } });
+    });
+  } catch (error) {
+    throw numberTaken(error);
+  }
+  return getJob(actor, jobId);
+}
+
+function documentChange(document: DrawingDocument, change: z.output<typeof jobChange>, jurisdiction: Jurisdiction | null): PatchOperation[] {
+  const { number, jurisdictionId: _, site: siteChange, name, ...block } = change;
+  const site = { ...siteChange, ...(jurisdiction ? { amendments: jurisdiction.amendments } : {}) };
+  const codes = jurisdiction || siteChange?.edition
+    ? { codes: codesOf(document, siteChange?.edition ?? document.site.edition, jurisdiction) }
+    : {};
+  const titleBlock = { ...block, ...(name === undefined ? {} : { jobName: name }), ...(number === undefined ? {} : { jobNumber: number }), ...codes };
+  return [
+    ...replacements("/site", document.site, site),
+    ...replacements("/sheet/titleBlock", document.sheet.titleBlock, titleBlock),
+  ];
+}
+
+function codesOf(document: DrawingDocument, edition: string, jurisdiction: Jurisdiction | null): string {
+  if (jurisdiction) return [`NEC ${edition}`, jurisdiction.ordinance].filter(Boolean).join(", ");
+  return document.sheet.titleBlock.codes.replace(/NEC \d{4}/, `NEC ${edition}`);
+}
+
+function replacements(base: string, now: Readonly<Record<string, unknown>>, wanted: Readonly<Record<string, unknown>>): PatchOperation[] {
+  return Object.entries(wanted).flatMap(([field, value]): PatchOperation[] => {
+    if (value === undefined || JSON.stringify(now[field]) === JSON.stringify(value)) return [];
+    if (!(field in now)) throw unprocessable(field, "is no field of the drawing");
+    return [{ op: "test", path: `${base}/${field}`, value: now[field] }, { op: "replace", path: `${base}/${field}`, value }];
+  });
+}
+

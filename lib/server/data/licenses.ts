@@ -1,0 +1,63 @@
+import "server-only";
+import type { z } from "zod";
+import type { LicenseAnswer, licenseInput } from "@/lib/api";
+import type { License } from "@/models";
+import { unprocessable } from "@/lib/server/http/problem";
+import { getBytes, putOnce } from "@/lib/server/storage";
+import type { Actor } from "./actor";
+import { audit } from "./audit";
+import { database, inTransaction } from "./database";
+import { readPngSize } from "./png";
+
+/** Today as a calendar date, UTC. A license that ends today is in force today. */
+export const today = () => new Date().toISOString().slice(0, 10);
+
+function answer(license: License): LicenseAnswer {
+  return {
+    state: license.state, number: license.number, title: license.title, expiresOn: license.expiresOn,
+    sealGraphic: license.sealWidthPx && license.sealHeightPx ? { widthPx: license.sealWidthPx, heightPx: license.sealHeightPx } : null,
+    expired: license.expiresOn < today(),
+  };
+}
+
+export const licenseOf = (userId: string) => database().License.findOne({ where: { userId } });
+
+/** The person's license, or null before it is entered. */
+export async function getLicense(actor: Actor): Promise<LicenseAnswer | null> {
+  const license = await licenseOf(actor.id);
+  return license && answer(license);
+}
+
+/** Enters or changes the person's license. Sealed revisions keep the facts of their day. */
+export async function putLicense(actor: Actor, facts: z.output<typeof licenseInput>): Promise<LicenseAnswer> {
+  return inTransaction(async (transaction) => {
+    const { License } = database();
+    const [license] = await License.findOrCreate({ where: { userId: actor.id }, defaults: { userId: actor.id, ...facts }, transaction });
+    await license.update(facts, { transaction });
+    await audit(transaction, actor, { action: "license.put", subject: `licenses/${license.id}`, detail: { ...facts } });
+    return answer(license);
+  });
+}
+
+/**
+ * Takes the seal graphic, judged by its bytes and not by its name.
+ * @throws Problem 422 when it is no usable PNG or the license is not entered yet
+ */
+export async function putSealGraphic(actor: Actor, bytes: Buffer): Promise<LicenseAnswer> {
+  const size = readPngSize(bytes);
+  if (!(await licenseOf(actor.id))) throw unprocessable("sealGraphic", "enter the license first");
+  const file = await putOnce("seal-graphics", bytes, "image/png");
+  return inTransaction(async (transaction) => {
+    const license = await database().License.findOne({ where: { userId: actor.id }, transaction, lock: transaction.LOCK.UPDATE });
+    if (!license) throw unprocessable("sealGraphic", "enter the license first");
+    await license.update({ sealObjectKey: file.key, sealWidthPx: size.widthPx, sealHeightPx: size.heightPx }, { transaction });
+    await audit(transaction, actor, { action: "license.seal-graphic", subject: `licenses/${license.id}`, detail: { digest: file.digest } });
+    return answer(license);
+  });
+}
+
+/** Bytes of the person's own seal graphic (PNG), or null. */
+export async function sealGraphic(actor: Actor): Promise<Buffer | null> {
+  const license = await licenseOf(actor.id);
+  return license?.sealObjectKey ? getBytes(license.sealObjectKey) : null;
+}
