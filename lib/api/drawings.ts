@@ -28,7 +28,9 @@ export interface DrawingAnswer {
   id: string; jobId: string; jobNumber: string; jobName: string; sequence: number; drawing: Drawing; revisionLetter: string;
   may: { edit: boolean; issue: boolean; seal: boolean };
 }
-/** `rebased` are the saves of others between the base and this one, to be put under the person's own edits. */
-export interface SaveAnswer { sequence: number; rebased: JournalEntry[] }
-/** Body of the 409 answer, beside the problem members. */
-export interface SaveConflict { theirs: JournalEntry[]; yours: PatchOperation[]; overlapping: string[]; sequence: number; drawing: Drawing }
+/** `rebased` are the operations of others between the base and this save, to be put under the person's own edits. */
+export interface SaveAnswer { sequence: number; rebased: PatchOperation[] }
+/** Members of the 409 answer, beside those of every problem. `edits` says who made `theirs`, when and under which name. */
+export interface SaveConflict {
+  theirs: PatchOperation[]; edits: JournalEntry[]; yours: PatchOperation[]; overlapping: string[]; sequence: number; drawing: Drawing;
+}

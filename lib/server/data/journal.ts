@@ -31,6 +31,8 @@ const entry = (row: DrawingPatch): JournalEntry => ({
   sequence: row.sequence, author: row.author?.name ?? "", authorId: row.authorId, at: row.createdAt.toISOString(), title: row.title, patches: row.patches,
 });
 
+const operations = (entries: readonly JournalEntry[]) => entries.flatMap((each) => each.patches);
+
 /**
  * Writes one save into the journal of a drawing whose row is locked by the transaction. Edits that touch nothing that
  * others changed since the base are put on top of theirs; otherwise nothing is written.
@@ -42,13 +44,13 @@ export async function writeSave(drawing: Drawing, save: Save, actor: Actor, tran
   if (before) {
     // The same id from somebody else is not the same save.
     if (before.authorId !== actor.id) throw unprocessable("saveId", "was used by somebody else");
-    return { sequence: before.sequence, rebased: await entriesAfter(drawing.id, before.baseSequence, transaction, before.sequence) };
+    return { sequence: before.sequence, rebased: operations(await entriesAfter(drawing.id, before.baseSequence, transaction, before.sequence)) };
   }
   if (save.baseSequence > drawing.sequence) throw unprocessable("baseSequence", `is ahead of the drawing, which is at ${drawing.sequence}`);
   const theirs = await entriesAfter(drawing.id, save.baseSequence, transaction);
-  const overlapping = overlaps(theirs.flatMap((each) => each.patches), save.patches);
+  const overlapping = overlaps(operations(theirs), save.patches);
   const clash = (paths: readonly string[], detail: string) => conflict("edit-conflict", detail, {
-    theirs, yours: save.patches, overlapping: [...paths], sequence: drawing.sequence, drawing: drawing.document,
+    theirs: operations(theirs), edits: theirs, yours: save.patches, overlapping: [...paths], sequence: drawing.sequence, drawing: drawing.document,
   } satisfies SaveConflict as unknown as Record<string, unknown>);
   if (overlapping.length > 0) throw clash(overlapping, "Somebody changed the same part of the drawing.");
 
@@ -93,5 +95,5 @@ async function commit(
   await audit(transaction, actor, {
     action: "drawing.save", subject: `drawings/${drawing.id}`, jobId: drawing.jobId, detail: { sequence, saveId: save.saveId, title: save.title, operations: save.patches.length },
   });
-  return { sequence, rebased: theirs };
+  return { sequence, rebased: operations(theirs) };
 }

@@ -117,7 +117,7 @@ export async function getRevision(actor: Actor, revisionId: string): Promise<Rev
     voidedAt: revision.voidedAt?.toISOString() ?? null, supersededAt: revision.supersededAt?.toISOString() ?? null,
     digest: revision.digest, ruleSet: revision.ruleSet, drawing: revision.snapshot, check: checked,
     previous: previous && { id: previous.id, letter: previous.letter },
-    seal: seal && {
+    seal: !seal ? null : {
       licensee: seal.licenseeName, title: seal.licenseTitle, licenseState: seal.licenseState, licenseNumber: seal.licenseNumber,
       licenseExpiresOn: seal.licenseExpiresOn, sealCode: seal.sealCode, sealedAt: seal.sealedAt.toISOString(),
     },

@@ -1,0 +1,5 @@
+import { counterJob } from "@/lib/server/data/counter";
+import { handle } from "@/lib/server/http/handle";
+import { jobParams as params } from "@/lib/server/http/params";
+
+export const GET = handle({ params, run: ({ actor, params: { jobId } }) => counterJob(actor, jobId) });

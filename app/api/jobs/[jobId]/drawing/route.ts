@@ -1,0 +1,5 @@
+import { getDrawing } from "@/lib/server/data/drawings";
+import { handle } from "@/lib/server/http/handle";
+import { jobParams as params } from "@/lib/server/http/params";
+
+export const GET = handle({ params, run: ({ actor, params: { jobId } }) => getDrawing(actor, jobId) });

@@ -1,0 +1,5 @@
+import { revisionStatus } from "@/lib/server/data/revisions";
+import { handle } from "@/lib/server/http/handle";
+import { revisionParams as params } from "@/lib/server/http/params";
+
+export const GET = handle({ params, run: ({ actor, params: { revisionId } }) => revisionStatus(actor, revisionId) });
