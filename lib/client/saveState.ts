@@ -13,6 +13,9 @@ export interface Conflict<Document> {
   /** JSON pointers that both changed. */
   readonly overlapping: readonly string[];
   readonly theirs: readonly PatchOperation[];
+  /** Names of the people whose edits these are, and when the last was made. */
+  readonly by: readonly string[];
+  readonly at: string | null;
 }
 
 export type SaveAnswer<Document> =

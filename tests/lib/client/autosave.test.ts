@@ -73,7 +73,7 @@ describe("autosave", () => {
   });
 
   it("stops at a conflict, sends nothing until a person has settled it", async () => {
-    const t = setUp([{ kind: "conflict", conflict: { sequence: 9, drawing: {}, overlapping: ["/v1"], theirs: [] } }]);
+    const t = setUp([{ kind: "conflict", conflict: { sequence: 9, drawing: {}, overlapping: ["/v1"], theirs: [], by: ["B"], at: null } }]);
     t.save.add(change(1));
     await vi.advanceTimersByTimeAsync(QUIET_MS);
     t.save.add(change(2));
