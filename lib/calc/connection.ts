@@ -46,12 +46,12 @@ export function tapWithSource(input: {
   const end = checkNumber("tapOcpdA", input.tapOcpdA, CURRENT);
   const share = tap === "10 ft" ? TAP_SHARE_10_FT : TAP_SHARE_25_FT;
   const byDevices = input.edition === "2023" || input.edition === "2026";
+  const outputs = sum("sourceOutputsA", input.sourceOutputsA);
+  const devices = sum("sourceOcpdsA", input.sourceOcpdsA);
   let base: number;
   if (!byDevices) {
-    const outputs = sum("sourceOutputsA", input.sourceOutputsA);
     base = sheet.number("B", "feeder device + 1.25 × Σ output current", `${shown(feeder)} A + ${CONTINUOUS_FACTOR} × ${shown(outputs)} A`, feeder + CONTINUOUS_FACTOR * outputs, "A", "tap-with-source");
   } else if (tap === "25 ft") {
-    const devices = sum("sourceOcpdsA", input.sourceOcpdsA);
     base = sheet.number("B", "feeder device + Σ source devices", `${shown(feeder)} A + ${shown(devices)} A`, feeder + devices, "A", "tap-with-source");
   } else base = sheet.number("B", "feeder device", "", feeder, "A", "tap-conductors");
   const shareA = sheet.number("S", tap === "10 ft" ? "B / 10" : "B / 3", `${shown(base)} A × ${shown(share)}`, base * share, "A", "tap-conductors");
@@ -74,7 +74,9 @@ export function supplySideConnection(input: {
   const rating = checkNumber("serviceRatingA", input.serviceRatingA, CURRENT);
   const ampacity = checkNumber("serviceAmpacityA", input.serviceAmpacityA, CURRENT);
   const old = input.edition === "2017";
-  const value = old ? sum("sourceOcpdsA", input.sourceOcpdsA) : sum("sourceOutputsA", input.sourceOutputsA);
+  const devices = sum("sourceOcpdsA", input.sourceOcpdsA);
+  const outputs = sum("sourceOutputsA", input.sourceOutputsA);
+  const value = old ? devices : outputs;
   const limitA = old ? rating : ampacity;
   sheet.number("Σ", old ? "sum of the source devices" : "sum of the output currents", "", value, "A", "supply-side");
   const leastSize = old ? null : input.material === "copper" ? SUPPLY_SIDE_MIN_SIZE.copper : SUPPLY_SIDE_MIN_SIZE.aluminum;

@@ -56,10 +56,13 @@ export function dwellingLoadStandard(input: StandardLoadInput): CalcResult<numbe
   const general = generalLoad(sheet, input);
   const lighting = lightingDemand(sheet, general);
   const ranges = rangeDemand(sheet, checkList("rangesVa", input.rangesVa ?? [], 0, RANGE_DEMAND_KW.length));
-  const dryers = checkList("dryersVa", input.dryersVa ?? [], 0, 4).reduce((sum, va, i) => sum + sheet.number("Sd", "max(5000 VA, nameplate)", `${shown(va)} VA`, Math.max(DRYER_MIN_VA, checkNumber(`dryersVa.${i}`, va, VA)), "VA", "load-dryer"), 0);
+  const dryers = checkList("dryersVa", input.dryersVa ?? [], 0, 4).map((va, i) => checkNumber(`dryersVa.${i}`, va, VA)).reduce((sum, va) => sum + sheet.number("Sd", "max(5000 VA, nameplate)", `${shown(va)} VA`, Math.max(DRYER_MIN_VA, va), "VA", "load-dryer"), 0);
   const appliances = applianceLoad(sheet, input.appliances ?? []);
-  const heat = sheet.number("Sh", "larger of heating and cooling", `max(${shown(input.heatVa ?? 0)} VA, ${shown(input.coolingVa ?? 0)} VA)`, Math.max(checkNumber("heatVa", input.heatVa ?? 0, VA), checkNumber("coolingVa", input.coolingVa ?? 0, VA)), "VA", "load-heat-or-cooling");
-  const motor = sheet.number("Sm", "25 % of the largest motor", `${LARGEST_MOTOR_SHARE} × ${shown(input.largestMotorVa ?? 0)} VA`, LARGEST_MOTOR_SHARE * checkNumber("largestMotorVa", input.largestMotorVa ?? 0, VA), "VA", "load-motor");
+  const heating = checkNumber("heatVa", input.heatVa ?? 0, VA);
+  const cooling = checkNumber("coolingVa", input.coolingVa ?? 0, VA);
+  const largestMotor = checkNumber("largestMotorVa", input.largestMotorVa ?? 0, VA);
+  const heat = sheet.number("Sh", "larger of heating and cooling", `max(${shown(heating)} VA, ${shown(cooling)} VA)`, Math.max(heating, cooling), "VA", "load-heat-or-cooling");
+  const motor = sheet.number("Sm", "25 % of the largest motor", `${LARGEST_MOTOR_SHARE} × ${shown(largestMotor)} VA`, LARGEST_MOTOR_SHARE * largestMotor, "VA", "load-motor");
   const other = checkNumber("otherVa", input.otherVa ?? 0, VA);
   const total = sheet.number("S", "sum", "", lighting + ranges + dryers + appliances.demandVa + heat + motor + other, "VA");
   const neutral = sheet.number("Sn", "lighting + 70 % of ranges and dryers + appliances on the neutral", `${shown(lighting)} VA + ${NEUTRAL_COOKING_SHARE} × ${shown(ranges + dryers)} VA + ${shown(appliances.neutralVa)} VA`, lighting + NEUTRAL_COOKING_SHARE * (ranges + dryers) + appliances.neutralVa, "VA", "load-neutral");

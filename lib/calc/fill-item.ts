@@ -31,23 +31,25 @@ export interface SizedItem {
 
 /** Reads the outside measures of each item and writes them into the worksheet. @throws QuantityError or CodeLookupError. */
 export function fillItems(sheet: Worksheet, field: string, items: readonly FillItem[]): readonly SizedItem[] {
-  return items.map((item, index) => {
-    const at = `${field}.${index}`;
-    const count = checkInteger(`${at}.count`, item.count, { min: 0, max: 5000, unit: "conductors" });
-    if (item.outsideDiameterIn !== undefined) {
-      const diameterIn = checkNumber(`${at}.outsideDiameterIn`, item.outsideDiameterIn, { min: 0.01, max: 10, unit: "in" });
-      const label = item.label ?? `item ${index + 1}`;
-      const areaIn2 = sheet.number("a", "π/4 × d²", `${label}: d = ${shown(diameterIn)} in`, circleAreaIn2(diameterIn), "in²", "fill-other-conductors");
-      return { label, count, diameterIn, areaIn2 };
-    }
-    if (item.size === undefined) throw new QuantityError(`${at}.size`, "value is missing: give size and insulation, or the outside diameter");
-    const size = parseConductorSize(item.size, `${at}.size`);
-    if (item.bare !== true && item.insulation === undefined) throw new QuantityError(`${at}.insulation`, "value is missing: give the insulation, or say bare", INSULATIONS.join(", "));
-    const found = item.bare === true
-      ? bareConductorDimensions(size, item.solid)
-      : conductorDimensions(size, checkOneOf(`${at}.insulation`, item.insulation, INSULATIONS), item.compact, item.covered);
-    const label = item.label ?? `${size} ${item.bare === true ? "bare" : item.insulation}`;
-    sheet.number("a", "area of one conductor", label, found.areaIn2, "in²", found.meaning);
-    return { label, count, diameterIn: found.diameterIn, areaIn2: found.areaIn2 };
-  });
+  return items.map((item, index) => sizedItem(sheet, `${field}.${index}`, item, `item ${index + 1}`));
+}
+
+/** Reads the outside measures of one item. @throws QuantityError or CodeLookupError naming the field below `at`. */
+export function sizedItem(sheet: Worksheet, at: string, item: FillItem, name: string): SizedItem {
+  const count = checkInteger(`${at}.count`, item.count, { min: 0, max: 5000, unit: "conductors" });
+  if (item.outsideDiameterIn !== undefined) {
+    const diameterIn = checkNumber(`${at}.outsideDiameterIn`, item.outsideDiameterIn, { min: 0.01, max: 10, unit: "in" });
+    const label = item.label ?? name;
+    const areaIn2 = sheet.number("a", "π/4 × d²", `${label}: d = ${shown(diameterIn)} in`, circleAreaIn2(diameterIn), "in²", "fill-other-conductors");
+    return { label, count, diameterIn, areaIn2 };
+  }
+  if (item.size === undefined) throw new QuantityError(`${at}.size`, "value is missing: give size and insulation, or the outside diameter");
+  const size = parseConductorSize(item.size, `${at}.size`);
+  if (item.bare !== true && item.insulation === undefined) throw new QuantityError(`${at}.insulation`, "value is missing: give the insulation, or say bare", INSULATIONS.join(", "));
+  const found = item.bare === true
+    ? bareConductorDimensions(size, item.solid)
+    : conductorDimensions(size, checkOneOf(`${at}.insulation`, item.insulation, INSULATIONS), item.compact, item.covered);
+  const label = item.label ?? `${size} ${item.bare === true ? "bare" : item.insulation}`;
+  sheet.number("a", "area of one conductor", label, found.areaIn2, "in²", found.meaning);
+  return { label, count, diameterIn: found.diameterIn, areaIn2: found.areaIn2 };
 }

@@ -2,7 +2,7 @@ import { racewayDimensions, racewayTradeSizes, RACEWAY_KINDS, type Edition, type
 import { FILL_NIPPLE, FILL_ONE, FILL_OVER_TWO, FILL_TWO, JAM_RATIO_MAX, JAM_RATIO_MIN, NIPPLE_MAX_LENGTH_IN, ROUND_UP_FROM } from "@/lib/code/tables/raceway-fill";
 import { WIREWAY_FILL } from "@/lib/code/tables/wireway";
 import { checkList, checkNumber, checkOneOf, FieldError, parseTradeSize, type TradeSize } from "@/lib/units";
-import { fillItems, type FillItem, type SizedItem } from "./fill-item";
+import { fillItems, sizedItem, type FillItem, type SizedItem } from "./fill-item";
 import { shown, Worksheet, type CalcResult } from "./worksheet";
 
 /** A circular raceway by kind and trade size, or a wireway by its inside width and height. */
@@ -35,6 +35,8 @@ export interface RacewayFillDetail {
   readonly jamRatio: number | null;
   readonly jamLikely: boolean;
 }
+
+const LENGTH = { min: 0, max: 240000, unit: "in", aboveMin: true } as const;
 
 /** No trade size of the table holds the conductors. */
 export class NoRacewayError extends FieldError {}
@@ -74,6 +76,7 @@ export function smallestRaceway(input: {
 }): CalcResult<TradeSize, { readonly fillPct: number; readonly fillWithReservePct: number; readonly limitPct: number }> {
   const sheet = new Worksheet(input.edition);
   checkOneOf("kind", input.kind, RACEWAY_KINDS);
+  checkNumber("lengthIn", input.lengthIn, LENGTH);
   const items = checkList("items", input.items, 1, 500);
   const all = [...items, ...checkList("reserve", input.reserve ?? [], 0, 100)];
   for (const tradeSize of racewayTradeSizes(input.kind)) {
@@ -92,7 +95,7 @@ export function smallestRaceway(input: {
 function insideArea(sheet: Worksheet, raceway: FilledRaceway): { totalIn2: number; insideDiameterIn: number | null } {
   checkOneOf("raceway.kind", raceway?.kind, [...RACEWAY_KINDS, "metal wireway", "nonmetallic wireway"]);
   if ("tradeSize" in raceway) {
-    checkNumber("raceway.lengthIn", raceway.lengthIn, { min: 0, max: 240000, unit: "in", aboveMin: true });
+    checkNumber("raceway.lengthIn", raceway.lengthIn, LENGTH);
     const row = racewayDimensions(raceway.kind, parseTradeSize(raceway.tradeSize, "raceway.tradeSize"));
     sheet.number("A", "inside area", `${raceway.kind} ${row.tradeSize}`, row.totalAreaIn2, "in²", "raceway-dimensions");
     return { totalIn2: row.totalAreaIn2, insideDiameterIn: row.internalDiameterIn };
@@ -133,8 +136,7 @@ function jam(sheet: Worksheet, insideDiameterIn: number, items: readonly SizedIt
 }
 
 function laterCount(sheet: Worksheet, raceway: FilledRaceway, totalIn2: number, items: readonly SizedItem[], later: FillItem): number {
-  const one = fillItems(sheet, "later", [{ ...later, count: 1 }])[0];
-  if (one === undefined) return 0;
+  const one = sizedItem(sheet, "later", later, "item");
   const count = items.reduce((sum, item) => sum + item.count, 0);
   let best = 0;
   // The limit changes with the count (53, 31, 40 %), so two may fail where three pass: look past the first failure.

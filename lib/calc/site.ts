@@ -15,7 +15,8 @@ export function workingSpace(input: {
   readonly existingDwellingPanelA?: number;
 }): CalcResult<number, { readonly widthIn: number; readonly heightFt: number; readonly headroomExcepted: boolean }> {
   const sheet = new Worksheet(input.edition);
-  const depth = sheet.number("d", "table by voltage to ground and condition", `${shown(input.voltageToGroundV)} V, condition ${input.condition}`, workingSpaceDepthFt(input.voltageToGroundV, input.condition), "ft", "working-space");
+  const tableFt = workingSpaceDepthFt(input.voltageToGroundV, input.condition);
+  const depth = sheet.number("d", "table by voltage to ground and condition", `${shown(input.voltageToGroundV)} V, condition ${input.condition}`, tableFt, "ft", "working-space");
   const width = checkNumber("equipmentWidthIn", input.equipmentWidthIn ?? 0, { min: 0, max: 600, unit: "in" });
   const widthIn = sheet.number("w", "max(30 in, equipment)", `max(${WORKING_SPACE_MIN_WIDTH_IN} in, ${shown(width)} in)`, Math.max(WORKING_SPACE_MIN_WIDTH_IN, width), "in", "working-space-width");
   const height = checkNumber("equipmentHeightFt", input.equipmentHeightFt ?? 0, { min: 0, max: 50, unit: "ft" });

@@ -1,6 +1,6 @@
-import { CodeLookupError, standardRatingAtMostA, type Edition, type Insulation, type Material, type RacewayKind } from "@/lib/code";
+import { CodeLookupError, RACEWAY_KINDS, standardRatingAtMostA, type Edition, type Insulation, type Material, type RacewayKind } from "@/lib/code";
 import { PARALLEL_MIN_SIZE } from "@/lib/code/tables/source-constants";
-import { checkInteger, checkNumber, compareSizes, CONDUCTOR_SIZES, FieldError, type ConductorSize, type TradeSize } from "@/lib/units";
+import { checkInteger, checkNumber, checkOneOf, compareSizes, CONDUCTOR_SIZES, FieldError, type ConductorSize, type TradeSize } from "@/lib/units";
 import { conductorAmpacity, type AmpacityDetail, type RoutePart } from "./ampacity";
 import { equipmentGroundingConductor, sufficientSize } from "./equipment-ground";
 import type { FillItem } from "./fill-item";
@@ -137,6 +137,8 @@ function groundFor(input: CircuitToSize, required: RequiredAmpacityDetail, { siz
 
 function racewayFor(input: CircuitToSize, raceway: NonNullable<CircuitToSize["raceway"]>, size: ConductorSize, groundSize: ConductorSize): CalcResult<TradeSize, unknown> | null {
   const { kind, lengthIn, conductorsPerSet, others = [], reserve } = raceway;
+  checkOneOf("raceway.kind", kind, RACEWAY_KINDS);
+  checkNumber("raceway.lengthIn", lengthIn, { min: 0, max: 240000, unit: "in", aboveMin: true });
   const count = checkInteger("raceway.conductorsPerSet", conductorsPerSet, { min: 1, max: 100, unit: "conductors" });
   try {
     return smallestRaceway({ edition: input.edition, kind, lengthIn, items: [{ count, size, insulation: input.insulation }, { count: 1, size: groundSize, insulation: input.insulation }, ...others], reserve });

@@ -82,7 +82,7 @@ export function convert(value: number, from: Unit, to: Unit, field = "value"): n
   if (typeof value !== "number" || !Number.isFinite(value)) throw new QuantityError(field, "expected a finite number");
   if (!isUnit(from) || !isUnit(to)) throw new QuantityError(field, `unit ${String(isUnit(from) ? to : from)} is not known`, UNITS.join(", "));
   if (dimensionOf(from) !== dimensionOf(to)) {
-    throw new QuantityError(field, `${from} is a ${dimensionOf(from)}, ${to} is a ${dimensionOf(to)}`, unitsOf(dimensionOf(to)).join(", "));
+    throw new QuantityError(field, `${from} measures ${dimensionOf(from)}, ${to} measures ${dimensionOf(to)}`, unitsOf(dimensionOf(to)).join(", "));
   }
   if (from === to) return value;
   if (from === "°F" && to === "°C") return ((value - 32) * 5) / 9;

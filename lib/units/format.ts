@@ -6,8 +6,9 @@ export function roundForShow(value: number, decimals: number): number {
   if (!Number.isFinite(value)) throw new QuantityError("value", "expected a finite number");
   const scale = 10 ** decimals;
   // The relative nudge lets 2.675 round to 2.68 although its nearest double lies just below.
-  const rounded = Math.round(Math.abs(value) * scale * (1 + Number.EPSILON * 4)) / scale;
-  const result = Number.isFinite(rounded) ? rounded : Math.abs(value);
+  const scaled = Math.abs(value) * scale;
+  // From 2^53 on a double holds no fraction that could be rounded.
+  const result = scaled < Number.MAX_SAFE_INTEGER ? Math.round(scaled * (1 + Number.EPSILON * 4)) / scale : Math.abs(value);
   return value < 0 && result !== 0 ? -result : result;
 }
 

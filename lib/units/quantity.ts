@@ -56,7 +56,7 @@ export function parseQuantity(text: unknown, field = "value"): Quantity {
 export function parseIn(text: unknown, unit: Unit, field = "value"): number {
   const quantity = parseQuantity(text, field);
   if (dimensionOf(quantity.unit) !== dimensionOf(unit)) {
-    throw new QuantityError(field, `${quantity.unit} is a ${dimensionOf(quantity.unit)}, not a ${dimensionOf(unit)}`, unitsOf(dimensionOf(unit)).join(", "));
+    throw new QuantityError(field, `${quantity.unit} measures ${dimensionOf(quantity.unit)}, not ${dimensionOf(unit)}`, unitsOf(dimensionOf(unit)).join(", "));
   }
   return convert(quantity.value, quantity.unit, unit, field);
 }
