@@ -4,3 +4,4 @@ export * from "./jobs";
 export * from "./people";
 export * from "./problem";
 export * from "./revisions";
+export * from "./text";

@@ -31,6 +31,18 @@ export function withAcceptances(result: CheckResult, acceptances: readonly Findi
   return { ...result, counts, findings };
 }
 
+/** What of a finding an acceptance rests on: when one of these changes, it has to be accepted anew. */
+const evidence = (finding: Finding) => JSON.stringify([finding.kind, finding.severity, finding.message, finding.fields, finding.steps]);
+
+/**
+ * Findings of a new revision that were accepted in the last sealed one and are still the same in words and numbers.
+ * @returns their keys; the acceptance goes on under its own name and date
+ */
+export function carriedAcceptances(before: CheckResult, now: CheckResult, acceptedKeys: readonly string[]): string[] {
+  const was = new Map(before.findings.map((finding) => [finding.key, evidence(finding)]));
+  return now.findings.filter((finding) => acceptedKeys.includes(finding.key) && was.get(finding.key) === evidence(finding)).map((finding) => finding.key);
+}
+
 /** What sealing depends on. Dates are ISO calendar dates. */
 export interface SealQuestion {
   state: RevisionState;

@@ -46,6 +46,9 @@ export async function writeSave(drawing: Drawing, save: Save, actor: Actor, tran
     if (before.authorId !== actor.id) throw unprocessable("saveId", "was used by somebody else");
     return { sequence: before.sequence, rebased: operations(await entriesAfter(drawing.id, before.baseSequence, transaction, before.sequence)) };
   }
+  // Who accepts a finding is asked in review, under a license; the drawing takes no acceptance from an edit.
+  const accepting = save.patches.findIndex((each) => /^\/acceptances(\/|$)/.test(each.path) && (each.op === "add" || each.op === "replace"));
+  if (accepting !== -1) throw unprocessable(`patches.${accepting}`, "a finding is accepted in review, by a licensee", "acceptance");
   if (save.baseSequence > drawing.sequence) throw unprocessable("baseSequence", `is ahead of the drawing, which is at ${drawing.sequence}`);
   const theirs = await entriesAfter(drawing.id, save.baseSequence, transaction);
   const overlapping = overlaps(operations(theirs), save.patches);

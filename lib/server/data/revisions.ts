@@ -5,7 +5,7 @@ import type { RevisionAnswer, RevisionLine, RevisionStatus, acceptInput, issueIn
 import { drawingDigest } from "@/lib/diagram/canonical";
 import { may, type JobAction, type Role } from "@/lib/policy";
 import { check } from "@/lib/rules/engine/run";
-import { OPEN_STATES, nextState, sealRefusals, type Refusal, type RevisionEvent } from "@/lib/workflow";
+import { OPEN_STATES, carriedAcceptances, nextState, sealRefusals, type Refusal, type RevisionEvent } from "@/lib/workflow";
 import type { Job, License, Revision, SheetSet } from "@/models";
 import { conflict, notFound, unprocessable } from "@/lib/server/http/problem";
 import { demand, jobAccess, rolesInJob, type Actor } from "./actor";
@@ -54,6 +54,7 @@ export async function issueRevision(actor: Actor, jobId: string, input: z.output
       },
       { transaction },
     );
+    await carryAcceptances(revision, transaction);
     await Job.update({ updatedAt: new Date() }, { where: { id: jobId }, transaction });
     await queueSheets(revision.id, "preview", transaction);
     await audit(transaction, actor, {
@@ -61,6 +62,23 @@ export async function issueRevision(actor: Actor, jobId: string, input: z.output
     });
     return { id: revision.id };
   });
+}
+
+/** What a licensee accepted in the sealed revision stays accepted while words and numbers of the finding stay. */
+async function carryAcceptances(revision: Revision, transaction: Transaction): Promise<void> {
+  const { FindingAcceptance, Revision } = database();
+  const last = await Revision.findOne({
+    where: { jobId: revision.jobId, state: ["sealed", "void"] }, include: [{ model: FindingAcceptance, as: "acceptances" }], transaction,
+  });
+  const accepted = last?.acceptances ?? [];
+  if (!last || accepted.length === 0) return;
+  const keys = carriedAcceptances(last.checkResult, revision.checkResult, accepted.map((each) => each.findingKey));
+  await FindingAcceptance.bulkCreate(
+    accepted.filter((each) => keys.includes(each.findingKey)).map(({ findingKey, reason, acceptedBy, byName, licenseText, acceptedOn }) => ({
+      revisionId: revision.id, findingKey, reason, acceptedBy, byName, licenseText, acceptedOn,
+    })),
+    { transaction },
+  );
 }
 
 /** Revisions of a job that the person may see, newest first. */

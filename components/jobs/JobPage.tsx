@@ -1,0 +1,67 @@
+"use client";
+
+import type { JobAnswer } from "@/lib/api";
+import { ApiProblem } from "@/lib/client/api";
+import { whenWords } from "@/lib/client/dates";
+import { useJob } from "@/lib/client/queries";
+import { BarCell } from "@/components/ui/Bar";
+import { LinkButton } from "@/components/ui/Button";
+import { Caution } from "@/components/ui/Caution";
+import { ErrorNote, Skeleton } from "@/components/ui/Notes";
+import { RedlineCounts } from "@/components/ui/RedlineMark";
+import { StateStamp } from "@/components/ui/StateStamp";
+import { MembersPanel } from "./MembersPanel";
+import { OfficeBar } from "./OfficeBar";
+import { RevisionsPanel } from "./RevisionsPanel";
+import { SheetPicture } from "./SheetPicture";
+import { SitePanel } from "./SitePanel";
+import { paths } from "./paths";
+
+/** One job: where it stands, its revisions, its people, its site. */
+export function JobPage({ jobId }: { jobId: string }) {
+  const job = useJob(jobId);
+  const missing = job.error instanceof ApiProblem && job.error.status === 404;
+  return (
+    <div className="flex min-h-full flex-col">
+      <OfficeBar>{job.data && <BarCell label={`Job ${job.data.number}`}>{job.data.name}</BarCell>}</OfficeBar>
+      <main className="mx-auto w-full max-w-[1480px] flex-1 p-6 phone:p-3">
+        {job.isPending && <Skeleton lines={5} />}
+        {job.isError && <ErrorNote error={job.error} {...(missing ? { title: "There is no such job" } : { onRetry: () => void job.refetch() })} />}
+        {job.data && <Desk job={job.data} />}
+      </main>
+    </div>
+  );
+}
+
+function Desk({ job }: { job: JobAnswer }) {
+  const address = job.addressLines.split("\n").map((part) => part.trim()).filter(Boolean).join(", ");
+  return (
+    <>
+      <div className="mb-5 flex flex-wrap items-end justify-between gap-4">
+        <div className="min-w-0">
+          <p className="font-lettering text-[16px] text-ink2">{job.number}</p>
+          <h1 className="text-[34px] leading-tight font-heading stretch-heading tracking-[-0.015em] narrow:text-title">{job.name}</h1>
+          <p className="mt-1 text-finding text-ink2">{[address, job.parcel && `Parcel ${job.parcel}`].filter(Boolean).join(". ") || "No address yet"}</p>
+        </div>
+        <div className="flex items-center gap-4">
+          <span className="text-text text-ink2">{job.revision ? `Rev ${job.revision}` : "Not issued"}</span>
+          <StateStamp state={job.state} />
+          <RedlineCounts counts={job.counts} />
+          <span className="text-text text-ink2">changed {whenWords(job.changedAt)}</span>
+          {job.may.viewDrawing && <LinkButton href={paths.drawing(job.id)} look="primary">Open the drawing</LinkButton>}
+        </div>
+      </div>
+      <div className="grid grid-cols-[minmax(0,1fr)_440px] items-start gap-5 narrow:grid-cols-[minmax(0,1fr)_340px] phone:grid-cols-1">
+        <div className="grid gap-5">
+          <RevisionsPanel job={job} />
+          <SitePanel job={job} />
+        </div>
+        <div className="grid gap-5">
+          <SheetPicture jobId={job.id} changedAt={job.changedAt} />
+          <MembersPanel job={job} />
+          <Caution />
+        </div>
+      </div>
+    </>
+  );
+}

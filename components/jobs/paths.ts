@@ -1,0 +1,9 @@
+/** Addresses of the pages, in one place. */
+export const paths = {
+  jobs: "/jobs",
+  newJob: "/jobs/new",
+  job: (jobId: string) => `/jobs/${jobId}`,
+  drawing: (jobId: string) => `/jobs/${jobId}/drawing`,
+  revision: (jobId: string, revisionId: string) => `/jobs/${jobId}/revisions/${revisionId}`,
+  counter: (jobId: string) => `/counter/${jobId}`,
+};

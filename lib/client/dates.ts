@@ -1,0 +1,29 @@
+const DAY_MS = 86_400_000;
+const startOfDay = (date: Date) => new Date(date.getFullYear(), date.getMonth(), date.getDate()).getTime();
+const time = new Intl.DateTimeFormat("en-US", { hour: "numeric", minute: "2-digit" });
+const monthDay = new Intl.DateTimeFormat("en-US", { month: "long", day: "numeric" });
+const full = new Intl.DateTimeFormat("en-US", { month: "long", day: "numeric", year: "numeric" });
+const calendar = new Intl.DateTimeFormat("en-US", { month: "long", day: "numeric", year: "numeric", timeZone: "UTC" });
+
+/** When something happened, as a list says it: "10 min ago", "Today, 9:12 AM", "Yesterday", "April 20". */
+export function whenWords(iso: string, now: Date = new Date()): string {
+  const date = new Date(iso);
+  const minutes = Math.floor((now.getTime() - date.getTime()) / 60_000);
+  if (minutes < 1) return "Just now";
+  if (minutes < 60) return `${minutes} min ago`;
+  const days = Math.round((startOfDay(now) - startOfDay(date)) / DAY_MS);
+  if (days === 0) return `Today, ${time.format(date)}`;
+  if (days === 1) return "Yesterday";
+  return date.getFullYear() === now.getFullYear() ? monthDay.format(date) : full.format(date);
+}
+
+/** April 23, 2026, in the reader's zone. */
+export const dateWords = (iso: string): string => full.format(new Date(iso));
+/** April 23, 2026, 2:20 PM. */
+export const momentWords = (iso: string): string => `${full.format(new Date(iso))}, ${time.format(new Date(iso))}`;
+/** A calendar date (2027-12-31) in words; it belongs to no zone. */
+export const calendarWords = (isoDate: string): string => calendar.format(new Date(`${isoDate}T00:00:00Z`));
+/** A file size: 254 kB, 3.1 MB (powers of ten). */
+export function sizeWords(bytes: number): string {
+  return bytes < 1_000_000 ? `${Math.max(1, Math.round(bytes / 1000))} kB` : `${(bytes / 1_000_000).toFixed(1)} MB`;
+}
