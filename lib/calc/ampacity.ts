@@ -17,8 +17,13 @@ export interface RoutePart {
   /** Tag of the raceway, for the working. */
   readonly label?: string;
   readonly kind: RoutePartKind;
-  /** Length along the route, in ft; a raceway of 24 in or less asks for no adjustment. */
+  /** Length of this part along the route, in ft. */
   readonly lengthFt: number;
+  /**
+   * Length of the whole raceway or bundle where this part is only a stretch of it, in ft; left out = this part is all of it.
+   * 24 in or less asks for no adjustment.
+   */
+  readonly racewayLengthFt?: number;
   readonly ambientC: number;
   /** Current-carrying conductors of all circuits at the fullest cross section. */
   readonly currentCarryingCount: number;
@@ -125,21 +130,22 @@ function correctedPart(sheet: Worksheet, input: AmpacityInput, part: RoutePart, 
   const adder = rooftopAdderC(part.rooftopHeightIn ?? null, input.insulation, input.edition, `${field}.rooftopHeightIn`);
   const ambientC = adder === 0 ? outdoorC : sheet.number("Ta", "ambient + rooftop adder", `${shown(outdoorC)} °C + ${adder} °C`, outdoorC + adder, "°C", "rooftop-adder");
   const correctionFactor = sheet.number("Ft", `${ratingC} °C conductor at Ta`, `${label}: ${shown(ambientC)} °C`, ambientCorrectionFactor(ambientC, ratingC, 30, `${field}.ambientC`), "", ratingC > 90 ? "pv-wire-correction" : "ambient-correction");
-  const adjustmentFactor = adjustment(sheet, part, label, lengthFt, count);
+  const wholeFt = part.racewayLengthFt === undefined ? lengthFt : checkNumber(`${field}.racewayLengthFt`, part.racewayLengthFt, { min: lengthFt, max: 20000, unit: "ft" });
+  const adjustmentFactor = adjustment(sheet, part, label, wholeFt, count);
   const ampacityA = sheet.number("Ac", "A × Ft × Fb", `${tableA} A × ${correctionFactor} × ${adjustmentFactor}`, tableA * correctionFactor * adjustmentFactor, "A");
   return { label, lengthFt, ambientC, correctionFactor, adjustmentFactor, ampacityA };
 }
 
 /** Fb of one part: 1 in nipples, in metal wireways to 30 conductors and for open conductors. */
-function adjustment(sheet: Worksheet, part: RoutePart, label: string, lengthFt: number, count: number): number {
+function adjustment(sheet: Worksheet, part: RoutePart, label: string, wholeFt: number, count: number): number {
   if (count <= 3) return 1;
   if (part.kind === "open") return sheet.number("Fb", "conductors not bundled", `${label}: ${count}`, 1, "");
   if (part.kind === "metal wireway" && count <= WIREWAY_UNADJUSTED_CONDUCTORS) {
     return sheet.number("Fb", `metal wireway, not more than ${WIREWAY_UNADJUSTED_CONDUCTORS}`, `${label}: ${count}`, 1, "", "wireway-adjustment");
   }
   const short = part.kind === "raceway" || part.kind === "cable";
-  if (short && lengthFt * 12 <= NIPPLE_MAX_LENGTH_IN) {
-    return sheet.number("Fb", `${NIPPLE_MAX_LENGTH_IN} in or less`, `${label}: ${shown(lengthFt * 12, 1)} in`, 1, "", "bundling-nipple");
+  if (short && wholeFt * 12 <= NIPPLE_MAX_LENGTH_IN + 1e-9) {
+    return sheet.number("Fb", `${NIPPLE_MAX_LENGTH_IN} in or less`, `${label}: ${shown(wholeFt * 12, 1)} in`, 1, "", "bundling-nipple");
   }
   return sheet.number("Fb", "current-carrying conductors", `${label}: ${count}`, bundlingFactor(count), "", "bundling-adjustment");
 }

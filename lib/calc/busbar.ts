@@ -24,8 +24,6 @@ export interface BusbarInput {
   readonly feedThrough?: boolean;
   /** Setting of a listed power control system for this busbar, A. */
   readonly powerControlA?: number | null;
-  /** A licensed engineer has studied this busbar with fault study and load calculation. */
-  readonly engineered?: boolean;
 }
 
 export interface BusbarPath {
@@ -79,7 +77,8 @@ export function busbarCheck(input: BusbarInput): CalcResult<BusbarPathName | "no
   add("feed-through", "busbar-feed-through", null, null, null);
   const setting = input.powerControlA ?? null;
   add("power control", "power-control", setting === null ? false : true, setting === null ? null : checkNumber("powerControlA", setting, current), bus);
-  add("engineered", "busbar-engineered", input.engineered === true, input.engineered === true ? 0 : null, bus);
+  // A study by an engineer is a person's statement: the path is named with its section and never passes by itself.
+  add("engineered", "busbar-engineered", null, null, null);
   const passing = paths.find((path) => path.passes === true);
   const complies = passing !== undefined;
   return sheet.result(passing?.name ?? "none", "", { paths, sourceA: source, complies, undecided: !complies && branches === null && input.feedThrough !== true });

@@ -1,4 +1,4 @@
-import { CodeLookupError, egcSizeForOcpd, MATERIALS, tableAmpacityA, type Edition, type Material } from "@/lib/code";
+import { CodeLookupError, egcSizeForOcpd, MATERIALS, type Edition, type Material } from "@/lib/code";
 import { checkInteger, checkNumber, checkOneOf, circularMils, compareSizes, CONDUCTOR_SIZES, FieldError, parseConductorSize, sizeForCircularMils, type ConductorSize } from "@/lib/units";
 import { conductorAmpacity, type AmpacityInput } from "./ampacity";
 import { shown, Worksheet, type CalcResult } from "./worksheet";
@@ -81,9 +81,8 @@ export function sufficientSize(input: Omit<AmpacityInput, "size"> & { readonly r
 
 function ampacityOrNull(input: AmpacityInput): number | null {
   try {
-    if (input.edition !== "2017") return conductorAmpacity(input).value;
-    const columnC = input.terminalC;
-    return tableAmpacityA(input.size, input.material, columnC) * (input.sets ?? 1);
+    const { value, detail } = conductorAmpacity(input);
+    return input.edition === "2017" ? detail.terminalLimitA : value;
   } catch (error) {
     // Only a size that the table does not hold is passed over; every other fault of the input stands.
     if (error instanceof CodeLookupError && error.field === "size") return null;

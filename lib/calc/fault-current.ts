@@ -35,14 +35,19 @@ export interface FaultCurrentInput {
   readonly sourceXOverR?: number;
   /** Arithmetic method: leave the reactance of the conductors out. */
   readonly resistanceOnly?: boolean;
-  /** Line-to-neutral fault of a center-tapped single-phase source: multiplier on the first current and where it enters. */
+  /**
+   * Line-to-neutral fault: multiplier on the first current and where it enters. 1.5 at a center-tapped single-phase
+   * transformer and 1 at a wye source are common practice, no published source. Worked out by numbers, not vectors.
+   */
   readonly lineToNeutral?: { readonly multiplier: number; readonly enters: "before the first stretch" | "after the first stretch" };
   readonly segments: readonly FaultSegment[];
 }
 
 export interface FaultNode {
   readonly label: string;
-  /** From the utility alone, A. */
+  /** Bolted fault of all ungrounded conductors from the source alone, A: line to line of a single-phase, three-phase of a three-phase system. */
+  readonly boltedA: number;
+  /** Between two lines, A. */
   readonly lineToLineA: number;
   readonly lineToNeutralA: number | null;
   /** With all contributions up to this point, A. */
@@ -74,18 +79,19 @@ export function faultCurrent(input: FaultCurrentInput): CalcResult<number, Fault
   const z = loopV / source.availableA;
   let r = method === "vector" ? z / Math.sqrt(1 + xOverR * xOverR) : z;
   let x = method === "vector" ? r * xOverR : 0;
-  let neutral = input.lineToNeutral === undefined ? null : startNeutral(sheet, input, source.availableA, phases);
+  let neutral = input.lineToNeutral === undefined ? null : startNeutral(sheet, input, source.availableA);
   let contribution = 0;
   const nodes = checkList("segments", input.segments, 0, 100).map((segment, index): FaultNode => {
     const part = segmentImpedance(input, segment, index, phases);
     r += part.r;
     x += part.x;
     const total = Math.hypot(r, x);
-    const lineToLineA = sheet.number("If", method === "vector" ? "V / √(ΣR² + ΣX²)" : "V / ΣZ", `${segment.label}: ${shown(loopV, 1)} V / ${shown(total, 6)} Ω`, loopV / total, "A", "available-fault-current");
-    neutral = neutral === null ? null : nextNeutral(sheet, input, segment, part.neutralOhm, neutral, volts, index);
+    const boltedA = sheet.number("If", method === "vector" ? "V / √(ΣR² + ΣX²)" : "V / ΣZ", `${segment.label}: ${shown(loopV, 1)} V / ${shown(total, 6)} Ω`, loopV / total, "A", "available-fault-current");
+    neutral = neutral === null ? null : nextNeutral(sheet, input, segment, part.neutralOhm, neutral, phases === 3 ? volts / Math.sqrt(3) : volts / 2, index);
     contribution += checkNumber(`segments.${index}.contributionA`, segment.contributionA ?? 0, { min: 0, max: 200000, unit: "A" });
-    const totalA = contribution === 0 ? lineToLineA : sheet.number("ΣI", "If + Σ contributions", `${shown(lineToLineA, 1)} A + ${shown(contribution)} A`, lineToLineA + contribution, "A", "interrupting-rating");
-    return { label: segment.label, lineToLineA, lineToNeutralA: neutral, totalA };
+    const totalA = contribution === 0 ? boltedA : sheet.number("ΣI", "If + Σ contributions", `${shown(boltedA, 1)} A + ${shown(contribution)} A`, boltedA + contribution, "A", "interrupting-rating");
+    const lineToLineA = phases === 3 ? (boltedA * Math.sqrt(3)) / 2 : boltedA;
+    return { label: segment.label, boltedA, lineToLineA, lineToNeutralA: neutral, totalA };
   });
   const last = nodes[nodes.length - 1];
   const convention = [
@@ -130,17 +136,16 @@ function sourceCurrent(sheet: Worksheet, input: FaultCurrentInput, volts: number
   return { availableA, fullLoadA };
 }
 
-function startNeutral(sheet: Worksheet, input: FaultCurrentInput, availableA: number, phases: 1 | 3): number {
-  if (phases !== 1 || input.lineToNeutral === undefined) throw new QuantityError("lineToNeutral", "only for a single-phase center-tapped source", "phases = 1");
+function startNeutral(sheet: Worksheet, input: FaultCurrentInput, availableA: number): number {
+  if (input.lineToNeutral === undefined) throw new QuantityError("lineToNeutral", "value is missing");
   const multiplier = checkNumber("lineToNeutral.multiplier", input.lineToNeutral.multiplier, { min: 1, max: 2, unit: "" });
   checkOneOf("lineToNeutral.enters", input.lineToNeutral.enters, ["before the first stretch", "after the first stretch"]);
   if (input.lineToNeutral.enters !== "before the first stretch") return availableA;
   return sheet.number("I0n", "k × I0", `${multiplier} × ${shown(availableA, 1)} A`, multiplier * availableA, "A");
 }
 
-function nextNeutral(sheet: Worksheet, input: FaultCurrentInput, segment: FaultSegment, ohm: number, previousA: number, volts: number, index: number): number {
-  const halfV = volts / 2;
-  const f = (previousA * ohm) / halfV;
+function nextNeutral(sheet: Worksheet, input: FaultCurrentInput, segment: FaultSegment, ohm: number, previousA: number, neutralV: number, index: number): number {
+  const f = (previousA * ohm) / neutralV;
   const late = index === 0 && input.lineToNeutral?.enters === "after the first stretch" ? input.lineToNeutral.multiplier : 1;
   return sheet.number("Ifn", late === 1 ? "I × 1 / (1 + f)" : "k × I × 1 / (1 + f)", `${segment.label}: ${shown(previousA, 1)} A, f = ${shown(f)}`, (late * previousA) / (1 + f), "A");
 }
@@ -154,7 +159,7 @@ function segmentImpedance(input: FaultCurrentInput, segment: FaultSegment, index
     const c = checkNumber(`${field}.constantC`, segment.constantC, { min: 1, max: 1e6, unit: "" });
     if (input.method === "vector") throw new QuantityError(`${field}.constantC`, "a constant has no angle; the vector method needs size and conduit");
     const cn = checkNumber(`${field}.neutralConstantC`, segment.neutralConstantC ?? c, { min: 1, max: 1e6, unit: "" });
-    return { r: (loop * feet) / (c * sets), x: 0, neutralOhm: (loop * feet) / (cn * sets) };
+    return { r: (loop * feet) / (c * sets), x: 0, neutralOhm: (2 * feet) / (cn * sets) };
   }
   const material = checkOneOf(`${field}.material`, segment.material, MATERIALS);
   const conduit = checkOneOf(`${field}.conduit`, segment.conduit, CONDUIT_MATERIALS);

@@ -20,15 +20,15 @@ export const SECTIONS: Readonly<Record<string, SectionEntry>> = {
 /** Keys of all meanings. */
 export const MEANINGS: readonly string[] = Object.keys(SECTIONS);
 
-const CACHE = new Map<string, Citation>();
+/** One object a meaning and edition, made on first use: citations are asked for on every line of every worksheet. */
+const CACHE: Readonly<Record<Edition, Map<string, Citation>>> = { "2017": new Map(), "2020": new Map(), "2023": new Map(), "2026": new Map() };
 
 /**
  * The citation of a meaning in an edition.
  * @throws CodeLookupError when the meaning is not known or the edition has no such rule.
  */
 export function cite(meaning: string, edition: Edition): Citation {
-  const key = `${edition} ${meaning}`;
-  const cached = CACHE.get(key);
+  const cached = CACHE[edition]?.get(meaning);
   if (cached !== undefined) return cached;
   checkOneOf("edition", edition, EDITIONS);
   const entry = Object.hasOwn(SECTIONS, meaning) ? SECTIONS[meaning] : undefined;
@@ -36,7 +36,7 @@ export function cite(meaning: string, edition: Edition): Citation {
   const place = entry.places[edition];
   if (place === null) throw new CodeLookupError("edition", `${edition} has no rule "${entry.title}"`);
   const citation: Citation = { meaning, code: entry.code, edition: entry.bookEdition ?? edition, section: place.section, title: entry.title, confirmation: place.confirmation };
-  CACHE.set(key, citation);
+  CACHE[edition].set(meaning, citation);
   return citation;
 }
 
@@ -51,14 +51,13 @@ const NOTES: Readonly<Record<Confirmation, string>> = {
   unconfirmed: " (verify in the adopted book)",
   preview: " (preview, edition not read)",
 };
-const TEXTS = new Map<Citation, string>();
+const TEXTS = new WeakMap<Citation, string>();
 
 /** A citation as printed: `NEC 2023 Table 310.16`, with a note where the number was not read in that edition. */
 export function citationText(citation: Citation): string {
   const cached = TEXTS.get(citation);
   if (cached !== undefined) return cached;
   const text = `${citation.code} ${citation.edition} ${citation.section}${NOTES[citation.confirmation]}`;
-  // Citations of `cite` are shared objects, few in number; others are not kept.
-  if (CACHE.get(`${citation.edition} ${citation.meaning}`) === citation) TEXTS.set(citation, text);
+  TEXTS.set(citation, text);
   return text;
 }

@@ -39,7 +39,8 @@ export function checkInteger(field: string, value: unknown, range: NumberRange):
 
 /** One of a fixed list of words. @throws QuantityError naming the field and the list. */
 export function checkOneOf<T extends string | number>(field: string, value: unknown, allowed: readonly T[]): T {
-  const found = allowed.find((item) => item === value);
+  const index = (allowed as readonly unknown[]).indexOf(value);
+  const found = allowed[index];
   if (found === undefined) {
     const reason = value === undefined || value === null ? "value is missing" : `${describe(value)} is not known`;
     throw new QuantityError(field, reason, allowed.join(", "));

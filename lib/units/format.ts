@@ -1,10 +1,12 @@
 import type { Unit } from "./convert";
 import { QuantityError } from "./errors";
 
+const SCALES: readonly number[] = [1, 10, 100, 1e3, 1e4, 1e5, 1e6];
+
 /** Rounds half away from zero to a number of decimals; only for showing, never inside a calculation. */
 export function roundForShow(value: number, decimals: number): number {
   if (!Number.isFinite(value)) throw new QuantityError("value", "expected a finite number");
-  const scale = 10 ** decimals;
+  const scale = SCALES[decimals] ?? 10 ** decimals;
   // The relative nudge lets 2.675 round to 2.68 although its nearest double lies just below.
   const scaled = Math.abs(value) * scale;
   // From 2^53 on a double holds no fraction that could be rounded.
@@ -18,7 +20,10 @@ export function roundForShow(value: number, decimals: number): number {
  */
 export function formatNumber(value: number, decimals = 2, keepZeros = false): string {
   const rounded = roundForShow(value, decimals);
-  const text = keepZeros ? Math.abs(rounded).toFixed(decimals) : String(Math.abs(rounded));
+  const size = Math.abs(rounded);
+  // The usual case without grouping; below 1e-6 a number prints with an exponent and goes the long way.
+  if (!keepZeros && size < 1000 && (size >= 1e-6 || size === 0)) return rounded < 0 ? `−${size}` : `${size}`;
+  const text = keepZeros ? size.toFixed(decimals) : String(size);
   if (text.includes("e")) return rounded < 0 ? `−${text}` : text;
   const [whole = "0", fraction] = text.split(".");
   const grouped = whole.length > 3 ? whole.replace(/\B(?=(\d{3})+$)/g, ",") : whole;

@@ -25,6 +25,7 @@ export const routePart = z.strictObject({
   label: z.string().optional(),
   kind: z.enum(ROUTE_PART_KINDS),
   lengthFt: number("ft"),
+  racewayLengthFt: number("ft, whole raceway where this part is a stretch of it").optional(),
   ambientC: number("°C"),
   currentCarryingCount: count("current-carrying conductors at the fullest cross section"),
   rooftopHeightIn: number("in above a roof in sunlight, null when not on a roof").nullable().optional(),

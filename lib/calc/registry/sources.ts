@@ -35,7 +35,7 @@ export const SOURCE_CALCULATIONS: readonly CalculationEntry[] = [
     name: "busbar-check", title: "Busbar with several sources: every path of the rule", calculate: busbarCheck,
     input: z.strictObject({
       edition, busbarA: number("A"), mainDeviceA: number("A"), sourceOutputsA: amps, branchDevicesA: amps.nullable(), oppositeEnds: z.boolean(), centerFedDwelling: z.boolean().optional(), feedThrough: z.boolean().optional(),
-      powerControlA: number("A").nullable().optional(), engineered: z.boolean().optional(),
+      powerControlA: number("A").nullable().optional(),
     }),
     value: z.enum([...BUSBAR_PATHS, "none"]),
     detail: z.strictObject({
@@ -88,7 +88,7 @@ export const SOURCE_CALCULATIONS: readonly CalculationEntry[] = [
     value: number("A"),
     detail: z.strictObject({
       sourceA: number("A"), fullLoadA: number("A").nullable(), convention: z.string(),
-      nodes: z.array(z.strictObject({ label: z.string(), lineToLineA: number("A"), lineToNeutralA: number("A").nullable(), totalA: number("A") })),
+      nodes: z.array(z.strictObject({ label: z.string(), boltedA: number("A"), lineToLineA: number("A"), lineToNeutralA: number("A").nullable(), totalA: number("A") })),
     }),
     sample: {
       edition: "2023", phases: 1, lineToLineV: 240, source: { kind: "stated", availableA: 10400 }, method: "vector", sourceXOverR: 1.5,
