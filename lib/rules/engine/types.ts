@@ -1,5 +1,6 @@
 import type { Drawing, Edition, ElementRef } from "@/lib/diagram/schema";
 import type { DrawingGraph } from "@/lib/diagram/graph";
+import type { PatchOperation } from "@/lib/diagram/patch";
 import type { StateSpace } from "@/lib/states/types";
 import type { Step } from "@/lib/calc/types";
 
@@ -43,8 +44,7 @@ export interface CheckContext {
   limit: (name: string) => number;
 }
 
-/** RFC 6902 operations that clear a finding. */
-export interface PatchOperation { op: "add" | "remove" | "replace" | "test"; path: string; value?: unknown }
+export type { PatchOperation };
 export interface Suggestion { label: string; also: string; patches: readonly PatchOperation[] }
 
 export interface FindingDraft {
