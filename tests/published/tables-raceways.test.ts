@@ -91,6 +91,10 @@ describe("insulated conductors", () => {
         if (cell === null) continue;
         expect(Math.abs(cell[1] - area(cell[0])), row.size).toBeLessThanOrEqual(slack(cell[0], 0.001, 0.0001));
         expect(cell[0]).toBeGreaterThan(row.bareDiameterIn);
+        // Compacting takes 5 to 11 % off the diameter of the concentric stranded conductor.
+        const compacted = row.bareDiameterIn / bareConductorDimensions(row.size).diameterIn;
+        expect(compacted, row.size).toBeGreaterThan(0.885);
+        expect(compacted, row.size).toBeLessThan(0.95);
         cells += 1;
       }
       if (row.xhhw !== null) expect(row.xhhw[0]).toBeLessThanOrEqual(conductorDimensions(row.size, "XHHW-2").diameterIn + 0.001);
@@ -153,8 +157,9 @@ describe("boxes and bending space, typed from memory of a pocket reference", () 
     const rows = [["8", 1.5], ["6", 1.5], ["4", 2], ["3", 2], ["2", 2.5], ["1", 3], ["1/0", 3.5], ["2/0", 3.5], ["3/0", 4], ["4/0", 4], ["250", 4.5], ["300", 5], ["350", 5], ["400", 6], ["500", 6], ["600", 8], ["700", 8], ["750", 8], ["900", 8], ["1000", 10], ["1250", 10], ["1500", 12], ["2000", 12]] as const;
     for (const [size, inches] of rows) expect(bendingSpaceIn(parseConductorSize(size)), size).toBe(inches);
     expect(bendingSpaceIn("10 AWG")).toBeNull();
-    expect([2, 3, 4].map((wires) => bendingSpaceIn("250 kcmil", wires))).toEqual([6, 8, 10]);
-    expect(bendingSpaceIn("500 kcmil", 5)).toBe(14);
+    const several = [["2/0", [5, 7]], ["4/0", [6, 8]], ["250", [6, 8, 10]], ["350", [8, 10, 12]], ["500", [8, 10, 12, 14]], ["700", [10, 12, 14, 16]], ["900", [12, 14, 16, 18]]] as const;
+    for (const [size, spaces] of several) expect(spaces.map((_, index) => bendingSpaceIn(parseConductorSize(size), index + 2)), size).toEqual(spaces);
+    expect(() => bendingSpaceIn("250 kcmil", 5)).toThrow(/no value for 5 wires/);
     expect(() => bendingSpaceIn("2 AWG", 2)).toThrow(/no value for 2 wires/);
   });
   it("compact aluminum may use the row of the next smaller sizes at terminals", () => {

@@ -52,6 +52,22 @@ describe("ac impedance", () => {
       expect(acImpedance(size, "copper", "pvc")).toEqual({ resistanceOhmPerKft: r, reactanceOhmPerKft: x });
       expect(acImpedance(size, "copper", "steel")).toEqual({ resistanceOhmPerKft: rSteel, reactanceOhmPerKft: xSteel });
     });
+  it("whole columns of R and X, typed from memory of a pocket reference", () => {
+    const columns = {
+      x: [0.058, 0.054, 0.05, 0.052, 0.051, 0.048, 0.047, 0.045, 0.046, 0.044, 0.043, 0.042, 0.041, 0.041, 0.041, 0.04, 0.04, 0.039, 0.039, 0.038, 0.037],
+      xSteel: [0.073, 0.068, 0.063, 0.065, 0.064, 0.06, 0.059, 0.057, 0.057, 0.055, 0.054, 0.052, 0.051, 0.052, 0.051, 0.05, 0.049, 0.048, 0.048, 0.048, 0.046],
+      copper: [3.1, 2, 1.2, 0.78, 0.49, 0.31, 0.25, 0.19, 0.15, 0.12, 0.1, 0.077, 0.062, 0.052, 0.044, 0.038, 0.033, 0.027, 0.023, 0.019, 0.015],
+      copperInAluminum: [3.1, 2, 1.2, 0.78, 0.49, 0.31, 0.25, 0.2, 0.16, 0.13, 0.1, 0.082, 0.067, 0.057, 0.049, 0.043, 0.038, 0.032, 0.028, 0.024, 0.019],
+      copperInSteel: [3.1, 2, 1.2, 0.78, 0.49, 0.31, 0.25, 0.2, 0.16, 0.12, 0.1, 0.079, 0.063, 0.054, 0.045, 0.039, 0.035, 0.029, 0.025, 0.021, 0.018],
+      aluminum: [null, 3.2, 2, 1.3, 0.81, 0.51, 0.4, 0.32, 0.25, 0.2, 0.16, 0.13, 0.1, 0.085, 0.071, 0.061, 0.054, 0.043, 0.036, 0.029, 0.023],
+      aluminumInAluminum: [null, 3.2, 2, 1.3, 0.81, 0.51, 0.41, 0.32, 0.26, 0.21, 0.16, 0.13, 0.11, 0.09, 0.076, 0.066, 0.059, 0.048, 0.041, 0.034, 0.027],
+      aluminumInSteel: [null, 3.2, 2, 1.3, 0.81, 0.51, 0.4, 0.32, 0.25, 0.2, 0.16, 0.13, 0.1, 0.086, 0.072, 0.063, 0.055, 0.045, 0.038, 0.031, 0.025],
+    };
+    expect(AC_IMPEDANCE_ROWS.map((row) => row.reactancePvcAluminum)).toEqual(columns.x);
+    expect(AC_IMPEDANCE_ROWS.map((row) => row.reactanceSteel)).toEqual(columns.xSteel);
+    expect([0, 1, 2].map((k) => AC_IMPEDANCE_ROWS.map((row) => row.copper[k]))).toEqual([columns.copper, columns.copperInAluminum, columns.copperInSteel]);
+    expect([0, 1, 2].map((k) => AC_IMPEDANCE_ROWS.map((row) => row.aluminum[k]))).toEqual([columns.aluminum, columns.aluminumInAluminum, columns.aluminumInSteel]);
+  });
   it("refuses what it does not hold", () => {
     expect(hasAcImpedance("700 kcmil", "copper")).toBe(false);
     expect(() => acImpedance("14 AWG", "aluminum", "pvc")).toThrow(/no aluminum 14 AWG/);
@@ -85,6 +101,11 @@ describe("torque", () => {
     }
     expect(() => defaultTorqueLbfIn("1/0 AWG", "slotted-narrow")).toThrow(/no value/);
   });
+  it("I.1, slotted screws: 20, 25, 35, 35, 40 with a narrow slot; 35, 40, 45, then 50 with a wide one (from memory)", () => {
+    expect((["12 AWG", "8 AWG", "4 AWG", "3 AWG", "2 AWG"] as const).map((size) => defaultTorqueLbfIn(size, "slotted-narrow"))).toEqual([20, 25, 35, 35, 40]);
+    const wide = TORQUE_ROWS.map((row) => row.torqueLbfIn[1]);
+    expect(wide).toEqual([35, 40, 45, 50, 50, 50, 50, 50, 50, 50, 50, 50, 50, null]);
+  });
   it("never falls with size", () => {
     ([0, 1, 2, 3] as const).forEach((column) => {
       let last = 0;
@@ -99,6 +120,7 @@ describe("torque", () => {
   it("I.2 and I.3", () => {
     expect(SOCKET_SCREW_ROWS.map((row) => socketScrewTorqueLbfIn(row.acrossFlatsIn))).toEqual([45, 100, 120, 150, 200, 275, 375, 500, 600]);
     expect(SMALL_SCREW_ROWS.map((row) => smallScrewTorqueLbfIn(row.slotLengthIn, true))).toEqual([9, 12, 12, 12, 12, 15, 20]);
+    expect(SMALL_SCREW_ROWS.map((row) => row.narrowLbfIn)).toEqual([7, 7, 7, 7, 9, null, null]);
     expect(() => smallScrewTorqueLbfIn("9/32", false)).toThrow();
   });
 });
