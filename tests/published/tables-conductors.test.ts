@@ -92,7 +92,7 @@ describe("adjustment, rooftop adder", () => {
   });
   it("adds 33 °C (60 °F) below 7/8 in in 2017 and 2020, below 3/4 in from 2023, never for XHHW-2", () => {
     expect([0.5, 0.8, 0.875, 4].map((h) => rooftopAdderC(h, "THWN-2", "2020"))).toEqual([33, 33, 0, 0]);
-    expect([0.5, 0.74, 0.75, 0.8].map((h) => rooftopAdderC(h, "THWN-2", "2023"))).toEqual([33, 33, 0, 0]);
+    for (const edition of ["2023", "2026"] as const) expect([0.5, 0.74, 0.75, 0.8].map((h) => rooftopAdderC(h, "THWN-2", edition))).toEqual([33, 33, 0, 0]);
     expect(rooftopAdderC(0, "XHHW-2", "2017")).toBe(0);
     expect(rooftopAdderC(null, "THWN-2", "2023")).toBe(0);
     expect(33 * 1.8).toBeCloseTo(60, -1);

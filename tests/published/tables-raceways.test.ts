@@ -10,7 +10,7 @@ import { CONDUCTOR_PROPERTIES } from "@/lib/code/tables/conductor-properties";
 import { RACEWAY_DIMENSIONS, RACEWAY_TABLES } from "@/lib/code/tables/raceway-dimensions";
 import { TYPICAL_PV_WIRE_OD, TYPICAL_USE2_ALUMINUM_OD } from "@/lib/code/tables/typical-diameters";
 import { WIREWAY_FILL, WIREWAY_SPLICE_FILL, WIREWAY_UNADJUSTED_CONDUCTORS } from "@/lib/code/tables/wireway";
-import { FILL_NIPPLE, FILL_ONE, FILL_OVER_TWO, FILL_TWO, NIPPLE_MAX_LENGTH_IN } from "@/lib/code/tables/raceway-fill";
+import { FILL_NIPPLE, FILL_ONE, FILL_OVER_TWO, FILL_TWO, JAM_RATIO_MAX, JAM_RATIO_MIN, NIPPLE_MAX_LENGTH_IN, ROUND_UP_FROM } from "@/lib/code/tables/raceway-fill";
 import { circularMils, parseConductorSize, parseTradeSize } from "@/lib/units";
 
 const area = (diameterIn: number): number => (Math.PI / 4) * diameterIn * diameterIn;
@@ -56,6 +56,7 @@ describe("conduit and tubing", () => {
   });
   it("fill limits 53, 31, 40, 60 % to 24 in; wireway 20 % and 75 %, 30 conductors (from memory)", () => {
     expect([FILL_ONE, FILL_TWO, FILL_OVER_TWO, FILL_NIPPLE, NIPPLE_MAX_LENGTH_IN]).toEqual([0.53, 0.31, 0.4, 0.6, 24]);
+    expect([JAM_RATIO_MIN, JAM_RATIO_MAX, ROUND_UP_FROM]).toEqual([2.8, 3.2, 0.8]);
     expect([WIREWAY_FILL, WIREWAY_SPLICE_FILL, WIREWAY_UNADJUSTED_CONDUCTORS]).toEqual([0.2, 0.75, 30]);
   });
 });
@@ -134,7 +135,9 @@ describe("conductor properties", () => {
       expect((row.copperUncoated * row.circularMils) / 1000, row.size).toBeLessThan(13.1);
       expect((row.aluminum * row.circularMils) / 1000, row.size).toBeGreaterThan(20.6);
       expect((row.aluminum * row.circularMils) / 1000, row.size).toBeLessThan(21.4);
-      expect(row.copperCoated).toBeGreaterThan(row.copperUncoated);
+      // Tinning adds 2.5 to 4 % in large wires and up to 7 % in fine strands.
+      expect(row.copperCoated / row.copperUncoated, row.size).toBeGreaterThan(1.02);
+      expect(row.copperCoated / row.copperUncoated, row.size).toBeLessThan(1.075);
     }
   });
   it("bare area is π/4·d² and larger than the metal", () => {
@@ -143,6 +146,9 @@ describe("conductor properties", () => {
       expect(Math.abs(row.overallAreaIn2 - area(row.overallDiameterIn)), row.size).toBeLessThanOrEqual(slack(row.overallDiameterIn, 0.001, 0.002));
       expect(row.overallAreaIn2).toBeGreaterThan(row.circularMils * 1e-6 * (Math.PI / 4) * 0.97 - 0.0006);
     }
+    const column = (solid: boolean): number[] => CONDUCTOR_PROPERTIES.filter((row) => (row.strands === 1) === solid).map((row) => row.overallAreaIn2);
+    expect(column(true), "solid, typed from memory").toEqual([0.001, 0.002, 0.003, 0.005, 0.008, 0.013]);
+    expect(column(false), "stranded, typed from memory").toEqual([0.002, 0.003, 0.004, 0.006, 0.011, 0.017, 0.027, 0.042, 0.053, 0.067, 0.087, 0.109, 0.137, 0.173, 0.219, 0.26, 0.312, 0.364, 0.416, 0.519, 0.626, 0.73, 0.782, 0.834, 0.94, 1.042, 1.305, 1.566, 1.829, 2.092]);
     expect(bareConductorDimensions("8 AWG", true).areaIn2).toBe(0.013);
     expect(bareConductorDimensions("6 AWG").areaIn2).toBe(0.027);
   });
