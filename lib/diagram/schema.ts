@@ -309,3 +309,8 @@ export const COLLECTIONS = ["equipment", "circuits", "raceways", "bonds", "inter
 export type Collection = (typeof COLLECTIONS)[number];
 /** Names one element of the drawing. */
 export interface ElementRef { collection: Collection; id: string }
+/** Schema of one element of each map. */
+export const ELEMENT_SCHEMAS: Readonly<Record<Collection, z.ZodType>> = {
+  equipment: equipmentSchema, circuits: circuitSchema, raceways: racewaySchema, bonds: bondSchema, interlocks: interlockSchema, sensors: sensorSchema,
+  labels: labelSchema, acceptances: acceptanceSchema, texts: textSchema,
+};
