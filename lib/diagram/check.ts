@@ -35,7 +35,12 @@ export function checkDocument(document: unknown): DocumentFault[] {
   if (key) return [{ path: "", message: `holds the key ${key}, which is not allowed` }];
   const parsed = drawingSchema.safeParse(document);
   if (!parsed.success) {
-    return parsed.error.issues.slice(0, 100).map((issue) => ({ path: pointer(...issue.path.map(String)), message: issue.message }));
+    return parsed.error.issues.slice(0, 100).flatMap((issue) => {
+      const at = issue.path.map(String);
+      // The field that is too much is named, not the thing it stands in.
+      if (issue.code === "unrecognized_keys") return issue.keys.map((extra) => ({ path: pointer(...at, extra), message: "is no field of a drawing" }));
+      return [{ path: pointer(...at), message: issue.message }];
+    });
   }
   const drawing = parsed.data;
   const count = Object.keys(drawing.equipment).length + Object.keys(drawing.circuits).length + Object.keys(drawing.raceways).length;
