@@ -2,7 +2,7 @@ import { z } from "zod";
 import { ROLES, type Role } from "@/lib/policy";
 import { emailAddress, filledLine, newPassword } from "./text";
 
-export const roleList = z.array(z.enum(ROLES)).min(1, "choose at least one role").max(ROLES.length)
+export const roleList = z.array(z.enum(ROLES)).min(1, "need at least one choice").max(ROLES.length)
   .transform((roles) => ROLES.filter((role) => roles.includes(role)));
 
 export const setupInput = z.strictObject({
@@ -21,7 +21,7 @@ export const passwordInput = z.strictObject({ current: z.string().min(1, "is mis
 export type PasswordInput = z.input<typeof passwordInput>;
 
 export const licenseInput = z.strictObject({
-  state: filledLine(60), number: filledLine(40), title: filledLine(80), expiresOn: z.iso.date("write the date as 2027-12-31"),
+  state: filledLine(60), number: filledLine(40), title: filledLine(80), expiresOn: z.iso.date("takes a date such as 2027-12-31"),
 });
 export type LicenseInput = z.input<typeof licenseInput>;
 /** Largest seal graphic, bytes. */

@@ -146,7 +146,7 @@ export async function updateJob(actor: Actor, jobId: string, change: z.output<ty
       const jurisdiction = change.jurisdictionId ? await visibleJurisdiction(change.jurisdictionId, job.companyId, transaction) : null;
       const patches = documentChange(drawing.document, change, jurisdiction);
       if (patches.length > 0) {
-        await writeSave(drawing, { saveId: randomUUID(), baseSequence: drawing.sequence, patches, title: "Change the job's data" }, actor, transaction);
+        await writeSave(drawing, { saveId: randomUUID(), baseSequence: drawing.sequence, patches, title: "Change the job's data", amends: jurisdiction !== null }, actor, transaction);
       }
       await job.update(
         { ...(change.number === undefined ? {} : { number: change.number }), ...(change.name === undefined ? {} : { name: change.name }), ...(jurisdiction ? { jurisdictionId: jurisdiction.id } : {}) },

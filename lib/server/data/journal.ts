@@ -1,6 +1,7 @@
 import "server-only";
 import { Op, type Transaction } from "sequelize";
 import type { JournalEntry, SaveAnswer, SaveConflict } from "@/lib/api";
+import { canonicalJson } from "@/lib/diagram/canonical";
 import { checkDocument } from "@/lib/diagram/check";
 import { PatchError, applyPatches, overlaps } from "@/lib/diagram/patch";
 import type { Drawing as DrawingDocument } from "@/lib/diagram/schema";
@@ -15,7 +16,11 @@ import { markSealAgainstDraft } from "./sheetSets";
 /** A drawing larger than this is no one-line, bytes of JSON. */
 const DOCUMENT_BYTES = 4 * 1024 * 1024;
 
-export interface Save { saveId: string; baseSequence: number; patches: PatchOperation[]; title: string }
+export interface Save {
+  saveId: string; baseSequence: number; patches: PatchOperation[]; title: string;
+  /** The job's jurisdiction was changed: its amendments may come into the drawing. Never set from a request. */
+  amends?: boolean;
+}
 
 /** Journal entries after a sequence number, oldest first. */
 export async function entriesAfter(drawingId: string, sequence: number, transaction?: Transaction, before?: number): Promise<JournalEntry[]> {
@@ -46,9 +51,6 @@ export async function writeSave(drawing: Drawing, save: Save, actor: Actor, tran
     if (before.authorId !== actor.id) throw unprocessable("saveId", "was used by somebody else");
     return { sequence: before.sequence, rebased: operations(await entriesAfter(drawing.id, before.baseSequence, transaction, before.sequence)) };
   }
-  // Who accepts a finding is asked in review, under a license; the drawing takes no acceptance from an edit.
-  const accepting = save.patches.findIndex((each) => /^\/acceptances(\/|$)/.test(each.path) && (each.op === "add" || each.op === "replace"));
-  if (accepting !== -1) throw unprocessable(`patches.${accepting}`, "a finding is accepted in review, by a licensee", "acceptance");
   if (save.baseSequence > drawing.sequence) throw unprocessable("baseSequence", `is ahead of the drawing, which is at ${drawing.sequence}`);
   const theirs = await entriesAfter(drawing.id, save.baseSequence, transaction);
   const overlapping = overlaps(operations(theirs), save.patches);
@@ -60,6 +62,7 @@ export async function writeSave(drawing: Drawing, save: Save, actor: Actor, tran
   const merged = merge(drawing.document, save.patches, (error) => (theirs.length > 0
     ? clash([error.path], "Somebody changed what this edit rests on.")
     : unprocessable(`patches.${error.index}`, error.message, "patch")));
+  refuseProtected(drawing.document, merged, save);
   const wrong = checkDocument(merged);
   if (wrong.length > 0) {
     // Apart, both saves may well be whole: one deletes an end, the other draws a circuit to it.
@@ -72,6 +75,19 @@ export async function writeSave(drawing: Drawing, save: Save, actor: Actor, tran
   }
   if (Buffer.byteLength(JSON.stringify(merged)) > DOCUMENT_BYTES) throw unprocessable("patches", "would make the drawing larger than 4 MB", "document-too-large");
   return commit(drawing, merged, save, theirs, actor, transaction);
+}
+
+/**
+ * Parts of the drawing that decide whether a rule counts are no edits: amendments come from the jurisdiction, and a
+ * finding is accepted in review, under a license.
+ */
+function refuseProtected(before: DrawingDocument, after: DrawingDocument, save: Save): void {
+  const same = (one: unknown, other: unknown) => canonicalJson(one ?? null) === canonicalJson(other ?? null);
+  if (!save.amends && !same(after.site?.amendments, before.site.amendments)) {
+    throw unprocessable("site.amendments", "come with the jurisdiction; choose it on the job's page", "protected");
+  }
+  const kept = Object.entries(after.acceptances ?? {}).every(([id, acceptance]) => same(acceptance, before.acceptances[id]));
+  if (!kept) throw unprocessable("acceptances", "are written in review, by a licensee", "protected");
 }
 
 function merge(document: DrawingDocument, patches: PatchOperation[], refuse: (error: PatchError) => Problem): DrawingDocument {
