@@ -1,6 +1,7 @@
 "use client";
 
 import { zodResolver } from "@hookform/resolvers/zod";
+import { useRouter } from "next/navigation";
 import { signIn } from "next-auth/react";
 import { useState } from "react";
 import { useForm } from "react-hook-form";
@@ -13,6 +14,7 @@ import { Refused } from "@/components/ui/Notes";
 /** First company and its administrator. */
 export function SetupForm() {
   const { register, handleSubmit, setError, formState: { errors, isSubmitting } } = useForm<SetupInput>({ resolver: zodResolver(setupInput) });
+  const router = useRouter();
   const [failure, setFailure] = useState<unknown>(null);
 
   const submit = handleSubmit(async (input) => {
@@ -20,11 +22,10 @@ export function SetupForm() {
     try {
       await api.setUp(input);
       await signIn("credentials", { email: input.email, password: input.password, redirect: false });
-      window.location.assign("/jobs");
-      await new Promise<void>(() => undefined);
+      router.replace("/jobs");
     } catch (error) {
       const field = error instanceof ApiProblem ? error.field : undefined;
-      if (field === "companyName" || field === "name" || field === "email" || field === "password") setError(field, { message: (error as Error).message });
+      if (field === "companyName" || field === "name" || field === "email" || field === "password") setError(field, { message: (error as ApiProblem).fieldMessage });
       else setFailure(error);
     }
   });

@@ -9,7 +9,7 @@ import { returnPath } from "@/lib/client/returnPath";
 import { Button } from "@/components/ui/Button";
 import { TextField } from "@/components/ui/Field";
 
-const schema = z.object({ email: z.string().trim().min(1, "Enter your mail address."), password: z.string().min(1, "Enter your password.") });
+const schema = z.object({ email: z.string().trim().min(1, "is missing"), password: z.string().min(1, "is missing") });
 type Credentials = z.infer<typeof schema>;
 
 /** Address and password. */

@@ -25,7 +25,7 @@ export function JobPage({ jobId }: { jobId: string }) {
     <div className="flex min-h-full flex-col">
       <OfficeBar>{job.data && <BarCell label={`Job ${job.data.number}`}>{job.data.name}</BarCell>}</OfficeBar>
       <main className="mx-auto w-full max-w-[1480px] flex-1 p-6 phone:p-3">
-        {job.isPending && <Skeleton lines={5} />}
+        {job.isPending && <div className="bg-paper"><Skeleton lines={5} /></div>}
         {job.isError && <ErrorNote error={job.error} {...(missing ? { title: "There is no such job" } : { onRetry: () => void job.refetch() })} />}
         {job.data && <Desk job={job.data} />}
       </main>

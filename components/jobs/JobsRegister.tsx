@@ -43,7 +43,7 @@ export function JobsRegister() {
           <svg viewBox="0 0 18 18" className="size-4 shrink-0" aria-hidden="true"><circle cx="7.5" cy="7.5" r="4.8" fill="none" stroke="currentColor" strokeWidth="1.7" /><path d="M11 11L15.5 15.5" stroke="currentColor" strokeWidth="1.7" /></svg>
           <span className="sr-only">Find job, permit or address</span>
           <input ref={find} value={words} onChange={(event) => setWords(event.target.value)} placeholder="Find job, permit or address" className="min-w-0 flex-1 bg-transparent text-body text-ink outline-none placeholder:text-ink2" />
-          <kbd className="border border-rule px-1 text-small stretch-label">Ctrl F</kbd>
+          <kbd className="font-sans border border-rule px-1 text-small stretch-label">Ctrl F</kbd>
         </label>
       </OfficeBar>
       <main className="grid min-h-0 flex-1 grid-cols-[minmax(0,1fr)_462px] gap-5 p-3 narrow:grid-cols-[minmax(0,1fr)_300px] narrow:gap-4 phone:block phone:overflow-y-auto">
@@ -82,7 +82,7 @@ export function JobsRegister() {
   );
 }
 
-const Key = ({ children }: { children: string }) => <kbd className="border border-rule bg-vellum px-1.5 text-label font-strong [&:not(:first-child)]:ml-2">{children}</kbd>;
+const Key = ({ children }: { children: string }) => <kbd className="font-sans border border-rule bg-vellum px-1.5 text-label font-strong [&:not(:first-child)]:ml-2">{children}</kbd>;
 
 /** Arrows choose, Enter opens, N makes a job, Ctrl F finds; never while somebody types or a control has the focus. */
 function useRegisterKeys(

@@ -41,7 +41,7 @@ function JobRow({ job, chosen, onChoose }: { job: JobLine; chosen: boolean; onCh
   return (
     <tr ref={row} className="group cursor-default" aria-current={chosen || undefined} onClick={() => onChoose(job.id)}>
       <td className={`${cell} pl-5 font-lettering text-[16px] ${chosen ? "[box-shadow:inset_5px_0_0_var(--copper)]" : ""}`}>{job.number}</td>
-      <td className={`${cell} max-w-[280px]`}>
+      <td className={`${cell} max-w-[360px] narrow:max-w-[250px]`}>
         <Link href={paths.job(job.id)} className="block truncate text-finding font-finding hover:underline">{job.name}</Link>
         <span className="block truncate text-body text-ink2">{place || "no address yet"}</span>
       </td>

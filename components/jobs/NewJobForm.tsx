@@ -3,20 +3,21 @@
 import { zodResolver } from "@hookform/resolvers/zod";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
-import { useForm, type FieldErrors, type UseFormRegister } from "react-hook-form";
+import { FormProvider, useForm, useWatch } from "react-hook-form";
 import { z } from "zod";
 import { line } from "@/lib/api";
 import type { JurisdictionAnswer } from "@/lib/api";
 import { ApiProblem, api } from "@/lib/client/api";
 import { keys, useChange, useJurisdictions, useMe } from "@/lib/client/queries";
 import { Button, LinkButton } from "@/components/ui/Button";
-import { SelectField, TextArea, TextField } from "@/components/ui/Field";
+import { SelectField, TextField } from "@/components/ui/Field";
 import { ErrorNote, Refused, Skeleton } from "@/components/ui/Notes";
 import { FormSection } from "./FormSection";
 import { OfficeBar } from "./OfficeBar";
+import { PlaceFields } from "./PlaceFields";
 import { SiteFields } from "./SiteFields";
 import { paths } from "./paths";
-import { EMPTY_SITE, placeForm, siteForm, siteOfForm, type SiteForm } from "./siteForm";
+import { EMPTY_SITE, placeForm, siteForm, siteOfForm } from "./siteForm";
 
 const NEW = "new";
 const schema = z.object({ companyId: z.string(), jurisdictionId: z.string().min(1, "Choose the jurisdiction, or enter a new one."), jurisdictionName: line(120), ordinance: line(160), ...placeForm.shape, ...siteForm.shape })
@@ -36,7 +37,7 @@ export function NewJobForm() {
     <div className="flex min-h-full flex-col">
       <OfficeBar />
       <main className="mx-auto w-full max-w-[1120px] p-6 phone:p-3">
-        {(me.isPending || jurisdictions.isPending) && <Skeleton lines={4} />}
+        {(me.isPending || jurisdictions.isPending) && <div className="bg-paper"><Skeleton lines={4} /></div>}
         {jurisdictions.isError && <ErrorNote error={jurisdictions.error} onRetry={() => void jurisdictions.refetch()} />}
         {me.data && companies.length === 0 && <ErrorNote error={null} title="You cannot make jobs" />}
         {me.data && jurisdictions.data && companies.length > 0 && <Sheet companies={companies} jurisdictions={jurisdictions.data.jurisdictions} />}
@@ -49,15 +50,14 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
   const router = useRouter();
   const create = useChange(api.createJob, [keys.jobs, keys.jurisdictions]);
   const [failure, setFailure] = useState<unknown>(null);
-  const { register, handleSubmit, setError, setValue, watch, formState: { errors } } = useForm<Form, unknown, z.output<typeof schema>>({
-    resolver: zodResolver(schema), defaultValues: { ...EMPTY, companyId: companies[0]?.id ?? "" },
-  });
-  const jurisdictionId = watch("jurisdictionId");
+  const form = useForm<Form, unknown, z.output<typeof schema>>({ resolver: zodResolver(schema), defaultValues: { ...EMPTY, companyId: companies[0]?.id ?? "" } });
+  const { control, register, handleSubmit, setError, setValue, formState: { errors } } = form;
+  const jurisdictionId = useWatch({ control, name: "jurisdictionId" });
   const known = jurisdictions.find((each) => each.id === jurisdictionId);
 
-  const submit = handleSubmit(async (form) => {
+  const submit = handleSubmit(async (filled) => {
     setFailure(null);
-    const { companyId, jurisdictionId: id, jurisdictionName, ordinance, number, name, addressLines, parcel, owner, scope, permitNumber, preparer, contractor, ...site } = form;
+    const { companyId, jurisdictionId: id, jurisdictionName, ordinance, number, name, addressLines, parcel, owner, scope, permitNumber, preparer, contractor, ...site } = filled;
     try {
       const { id: jobId } = await create.mutateAsync({
         companyId, number, name, addressLines, parcel, owner, scope, permitNumber, preparer, contractor,
@@ -65,14 +65,15 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
       });
       router.push(paths.job(jobId));
     } catch (error) {
-      if (error instanceof ApiProblem && error.field === "number") setError("number", { message: error.message }, { shouldFocus: true });
-      else if (error instanceof ApiProblem && error.field === "jurisdiction.name") setError("jurisdictionName", { message: error.message }, { shouldFocus: true });
+      if (error instanceof ApiProblem && error.field === "number") setError("number", { message: error.fieldMessage }, { shouldFocus: true });
+      else if (error instanceof ApiProblem && error.field === "jurisdiction.name") setError("jurisdictionName", { message: error.fieldMessage }, { shouldFocus: true });
       else setFailure(error);
     }
   });
 
   const jurisdictionField = register("jurisdictionId");
   return (
+    <FormProvider {...form}>
     <form onSubmit={submit} noValidate className="bg-paper shadow-[0_0_0_1px_var(--rule),2px_3px_0_0_var(--hatch)]">
       <div className="border-b-[1.5px] border-ink px-8 py-6 phone:px-4">
         <h1 className="text-title font-heading stretch-heading">New job</h1>
@@ -86,7 +87,7 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
         )}
         <TextField label="Job number" placeholder="26-040" autoFocus error={errors.number?.message} {...register("number")} />
         <TextField label="Name" placeholder="Place or owner" error={errors.name?.message} {...register("name")} />
-        <PlaceFields register={register as unknown as PlaceRegister} errors={errors as PlaceErrors} />
+        <PlaceFields />
       </FormSection>
       <FormSection title="Jurisdiction" text="Whose code is adopted, and what was amended locally. Amendments of a known jurisdiction come along.">
         <SelectField
@@ -110,7 +111,7 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
         {known && <KnownJurisdiction jurisdiction={known} />}
       </FormSection>
       <FormSection title="Site" text="Temperatures set string voltage and conductor ampacity; the fault current sets interrupting ratings.">
-        <SiteFields register={register as unknown as UseFormRegister<SiteForm>} errors={errors as FieldErrors<SiteForm>} />
+        <SiteFields />
       </FormSection>
       <div className="flex items-center gap-3 border-t border-ink px-8 py-5 phone:px-4">
         <Button type="submit" look="primary" busy={create.isPending}>Make the job</Button>
@@ -118,24 +119,7 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
         <Refused error={failure} />
       </div>
     </form>
-  );
-}
-
-type PlaceRegister = UseFormRegister<z.input<typeof placeForm>>;
-type PlaceErrors = FieldErrors<z.input<typeof placeForm>>;
-
-/** Title-block facts of the site. */
-export function PlaceFields({ register, errors }: { register: PlaceRegister; errors: PlaceErrors }) {
-  return (
-    <>
-      <TextArea label="Address" placeholder={"41 Wicket Lane\nNettlecombe"} error={errors.addressLines?.message} {...register("addressLines")} />
-      <TextArea label="Scope" placeholder="What is built" error={errors.scope?.message} {...register("scope")} />
-      <TextField label="Parcel" error={errors.parcel?.message} {...register("parcel")} />
-      <TextField label="Owner" error={errors.owner?.message} {...register("owner")} />
-      <TextField label="Prepared by" error={errors.preparer?.message} {...register("preparer")} />
-      <TextField label="Contractor" hint="Left empty: your company." error={errors.contractor?.message} {...register("contractor")} />
-      <TextField label="Permit number" placeholder="not yet" error={errors.permitNumber?.message} {...register("permitNumber")} />
-    </>
+    </FormProvider>
   );
 }
 
@@ -145,7 +129,7 @@ function KnownJurisdiction({ jurisdiction }: { jurisdiction: JurisdictionAnswer 
     <div className="col-span-2 border-l-[3px] border-blue pl-3 text-text">
       <p>Adopted: NEC {jurisdiction.edition}{jurisdiction.ordinance && `, ${jurisdiction.ordinance}`}.</p>
       {amendments.map((each) => (
-        <p key={each.citation} className="text-ink2">{each.citation}{each.limit !== null && `: at most ${each.limit} ${each.unit}`}</p>
+        <p key={each.citation} className="text-ink2">{each.citation}</p>
       ))}
     </div>
   );

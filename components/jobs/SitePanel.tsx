@@ -2,7 +2,7 @@
 
 import { zodResolver } from "@hookform/resolvers/zod";
 import { useEffect, useState } from "react";
-import { useForm, type FieldErrors, type UseFormRegister } from "react-hook-form";
+import { FormProvider, useForm } from "react-hook-form";
 import { z } from "zod";
 import type { JobAnswer } from "@/lib/api";
 import { ApiProblem, api } from "@/lib/client/api";
@@ -11,10 +11,10 @@ import { Button } from "@/components/ui/Button";
 import { SelectField, TextField } from "@/components/ui/Field";
 import { Refused } from "@/components/ui/Notes";
 import { FormSection } from "./FormSection";
-import { PlaceFields } from "./NewJobForm";
 import { Panel } from "./Panel";
+import { PlaceFields } from "./PlaceFields";
 import { SiteFields } from "./SiteFields";
-import { placeForm, siteForm, siteFormOf, siteOfForm, type SiteForm } from "./siteForm";
+import { placeForm, siteForm, siteFormOf, siteOfForm } from "./siteForm";
 
 const schema = z.object({ jurisdictionId: z.string(), ...placeForm.shape, ...siteForm.shape });
 type Form = z.input<typeof schema>;
@@ -29,17 +29,16 @@ export function SitePanel({ job }: { job: JobAnswer }) {
   const jurisdictions = useJurisdictions();
   const change = useChange((input: Parameters<typeof api.changeJob>[1]) => api.changeJob(job.id, input), [keys.job(job.id), keys.jobs]);
   const [saved, setSaved] = useState(false);
-  const { register, handleSubmit, reset, setError, formState: { errors, isDirty, dirtyFields } } = useForm<Form, unknown, z.output<typeof schema>>({
-    resolver: zodResolver(schema), defaultValues: formOf(job), disabled: !job.may.edit,
-  });
+  const form = useForm<Form, unknown, z.output<typeof schema>>({ resolver: zodResolver(schema), defaultValues: formOf(job), disabled: !job.may.edit });
+  const { register, handleSubmit, reset, setError, formState: { errors, isDirty, dirtyFields } } = form;
   // Somebody else's change is shown as long as nothing was typed here.
   useEffect(() => {
     if (!isDirty) reset(formOf(job));
   }, [job, isDirty, reset]);
 
-  const submit = handleSubmit(async (form) => {
+  const submit = handleSubmit(async (filled) => {
     setSaved(false);
-    const { jurisdictionId, number, name, addressLines, parcel, owner, scope, permitNumber, preparer, contractor, ...site } = form;
+    const { jurisdictionId, number, name, addressLines, parcel, owner, scope, permitNumber, preparer, contractor, ...site } = filled;
     const place = { number, name, addressLines, parcel, owner, scope, permitNumber, preparer, contractor };
     const touched = <T extends object>(values: T) => Object.fromEntries(Object.entries(values).filter(([field]) => field in dirtyFields)) as Partial<T>;
     const siteChange = touched(siteOfForm(site));
@@ -50,17 +49,18 @@ export function SitePanel({ job }: { job: JobAnswer }) {
       reset(formOf(answer));
       setSaved(true);
     } catch (error) {
-      if (error instanceof ApiProblem && error.field === "number") setError("number", { message: error.message }, { shouldFocus: true });
+      if (error instanceof ApiProblem && error.field === "number") setError("number", { message: error.fieldMessage }, { shouldFocus: true });
     }
   });
 
   return (
     <Panel title="Site and title block" aside={!job.may.edit && <span className="text-label text-ink2">To read; designers and administrators change it</span>}>
+      <FormProvider {...form}>
       <form onSubmit={submit} noValidate>
         <FormSection title="Job" text="Number and name stand on every sheet.">
           <TextField label="Job number" error={errors.number?.message} {...register("number")} />
           <TextField label="Name" error={errors.name?.message} {...register("name")} />
-          <PlaceFields register={register as unknown as Parameters<typeof PlaceFields>[0]["register"]} errors={errors as Parameters<typeof PlaceFields>[0]["errors"]} />
+          <PlaceFields />
         </FormSection>
         <FormSection title="Jurisdiction" text="Its amendments come along when another is chosen.">
           <SelectField label="Authority having jurisdiction" className="col-span-2" {...register("jurisdictionId")}>
@@ -69,14 +69,14 @@ export function SitePanel({ job }: { job: JobAnswer }) {
             {jurisdictions.data?.jurisdictions.map((each) => <option key={each.id} value={each.id}>{each.name}</option>)}
           </SelectField>
           {Object.values(job.site.amendments).map((each) => (
-            <p key={each.citation} className="col-span-2 border-l-[3px] border-blue pl-3 text-text text-ink2">{each.citation}{each.limit !== null && `: at most ${each.limit} ${each.unit}`}</p>
+            <p key={each.citation} className="col-span-2 border-l-[3px] border-blue pl-3 text-text text-ink2">{each.citation}</p>
           ))}
         </FormSection>
         <FormSection title="Site" text="Temperatures set string voltage and conductor ampacity; the fault current sets interrupting ratings.">
-          <SiteFields register={register as unknown as UseFormRegister<SiteForm>} errors={errors as FieldErrors<SiteForm>} />
+          <SiteFields />
         </FormSection>
         {job.may.edit && (
-          <div className="sticky bottom-0 flex items-center gap-3 border-t border-ink bg-paper px-8 py-4 phone:px-4">
+          <div className={`${isDirty ? "sticky bottom-0" : ""} flex items-center gap-3 border-t border-ink bg-paper px-8 py-4 phone:px-4`}>
             <Button type="submit" look="primary" disabled={!isDirty} busy={change.isPending}>Save</Button>
             {isDirty && <Button onClick={() => reset(formOf(job))}>Take back</Button>}
             {isDirty && (job.state === "sealed") && <span className="text-text">Saving makes the seal of Rev {job.revision} void.</span>}
@@ -85,6 +85,7 @@ export function SitePanel({ job }: { job: JobAnswer }) {
           </div>
         )}
       </form>
+      </FormProvider>
     </Panel>
   );
 }

@@ -8,7 +8,7 @@ const typedNumber = (least: number, most: number) =>
     if (text === "") return null;
     const value = Number(text.replace("−", "-").replace(/,(?=\d{3}\b)/g, ""));
     if (Number.isFinite(value) && value >= least && value <= most) return value;
-    context.addIssue({ code: "custom", message: Number.isFinite(value) ? `between ${least} and ${most}` : "is not a number" });
+    context.addIssue({ code: "custom", message: Number.isFinite(value) ? `must lie between ${least} and ${most}` : "is not a number" });
     return z.NEVER;
   });
 const typedText = (max: number) => line(max).transform((text) => text || null);

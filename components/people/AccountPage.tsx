@@ -42,7 +42,7 @@ function PasswordPanel() {
       await api.changePassword(input);
       await signOut({ callbackUrl: "/sign-in?notice=password-changed" });
     } catch (error) {
-      if (error instanceof ApiProblem && (error.field === "current" || error.field === "next")) setError(error.field, { message: error.message });
+      if (error instanceof ApiProblem && (error.field === "current" || error.field === "next")) setError(error.field, { message: error.fieldMessage });
       else setFailure(error);
     }
   });

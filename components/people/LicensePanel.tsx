@@ -45,7 +45,7 @@ function LicenseForm({ license }: { license: LicenseAnswer | null }) {
       await save.mutateAsync(input);
     } catch (error) {
       const field = error instanceof ApiProblem ? error.field : undefined;
-      if (field && field in EMPTY) setError(field as keyof LicenseInput, { message: (error as Error).message });
+      if (field && field in EMPTY) setError(field as keyof LicenseInput, { message: (error as ApiProblem).fieldMessage });
     }
   });
   return (

@@ -22,7 +22,7 @@ export function PeoplePage() {
       <main className="mx-auto w-full max-w-[880px] p-6 phone:p-3">
         <h1 className="mb-1 text-[34px] leading-tight font-heading stretch-heading tracking-[-0.015em]">People</h1>
         <p className="mb-5 max-w-[62ch] text-text text-ink2">Who belongs to the company. Seeing a job takes a place on that job; administrators see all of them. Licensees, clerks and installers from outside are added on the job alone.</p>
-        {me.isPending && <Skeleton lines={3} height={60} />}
+        {me.isPending && <div className="bg-paper"><Skeleton lines={3} height={60} /></div>}
         {me.isError && <ErrorNote error={me.error} onRetry={() => void me.refetch()} />}
         {me.data?.companies.length === 0 && <EmptyNote title="You belong to no company here">You see the jobs that you were added to.</EmptyNote>}
         <div className="grid gap-6">{me.data?.companies.map((company) => <CompanyPanel key={company.id} company={company} self={me.data.id} />)}</div>
@@ -41,7 +41,7 @@ function CompanyPanel({ company, self }: { company: CompanyAnswer; self: string 
   const [editing, setEditing] = useState<PersonAnswer | null>(null);
   return (
     <Panel title={company.name} aside={company.may.people && <Button size="bar" look="primary" onClick={() => setAdding(true)}>Add a person</Button>}>
-      {people.isPending && <Skeleton lines={3} height={60} />}
+      {people.isPending && <div className="bg-paper"><Skeleton lines={3} height={60} /></div>}
       {people.isError && <div className="p-5"><ErrorNote error={people.error} onRetry={() => void people.refetch()} /></div>}
       <PeopleList people={people.data?.people ?? []} self={self} onEdit={company.may.people ? setEditing : undefined} />
       <Dialog open={adding} onOpenChange={setAdding} title="Add a person" description={`Somebody who works for ${company.name}.`}>

@@ -44,7 +44,7 @@ export function PersonForm({ add, submit, roles, onDone }: PersonFormProps) {
       onDone();
     } catch (error) {
       const field = error instanceof ApiProblem ? error.field : undefined;
-      if (field === "email" || field === "name" || field === "password" || field === "roles") setErrors({ [field]: (error as Error).message });
+      if (field === "email" || field === "name" || field === "password" || field === "roles") setErrors({ [field]: (error as ApiProblem).fieldMessage });
       else setFailure(error);
     } finally {
       setBusy(false);

@@ -35,7 +35,7 @@ export function RolesForm({ person, save, remove, removeLabel, onDone }: RolesFo
   }
   return (
     <div className="flex flex-col gap-4">
-      <RolePicker value={roles} onChange={setRoles} error={roles.length === 0 ? "choose at least one role" : undefined} />
+      <RolePicker value={roles} onChange={setRoles} error={roles.length === 0 ? "need at least one choice" : undefined} />
       <Refused error={failure} />
       <div className="flex flex-wrap gap-2">
         <Button look="primary" busy={busy} disabled={roles.length === 0} onClick={() => void run(() => save(roles))}>Save roles</Button>

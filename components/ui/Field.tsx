@@ -3,13 +3,16 @@ import { useId, type InputHTMLAttributes, type ReactNode, type Ref, type SelectH
 interface Around { label: string; error?: string | undefined; hint?: string | undefined; unit?: string; className?: string }
 interface Slots { id: string; described: string | undefined; invalid: boolean }
 
-export const controlClass = "h-control w-full border border-rule bg-paper px-3 text-text text-ink placeholder:text-ink3 aria-invalid:border-2 aria-invalid:border-red disabled:bg-panel disabled:text-ink2";
+const CONTROL = "w-full border border-rule bg-paper px-3 text-text text-ink placeholder:text-ink3 aria-invalid:border-2 aria-invalid:border-red disabled:bg-panel disabled:text-ink2";
+export const controlClass = `h-control ${CONTROL}`;
 
 /** Label above, control, then what is wrong or else a hint. */
 function Around({ label, error, hint, unit, className = "", children }: Around & { children: (slots: Slots) => ReactNode }) {
   const id = useId();
   const noteId = `${id}-note`;
-  const note = error ?? hint;
+  // Short messages go on from the label; whole sentences of the server stand by themselves.
+  const wrong = error && /^[a-z]/.test(error) ? `${label} ${error}.` : error;
+  const note = wrong ?? hint;
   return (
     <div className={`min-w-0 ${className}`}>
       <label htmlFor={id} className="mb-1 block text-body font-medium text-ink2">
@@ -40,7 +43,7 @@ export function TextArea({ label, error, hint, className, ref, rows = 2, ...rest
   return (
     <Around label={label} error={error} hint={hint} {...(className ? { className } : {})}>
       {({ id, described, invalid }) => (
-        <textarea ref={ref} id={id} rows={rows} aria-describedby={described} aria-invalid={invalid || undefined} className={`${controlClass} h-auto resize-y py-2.5`} {...rest} />
+        <textarea ref={ref} id={id} rows={rows} aria-describedby={described} aria-invalid={invalid || undefined} className={`block min-h-control resize-y py-2.5 ${CONTROL}`} {...rest} />
       )}
     </Around>
   );

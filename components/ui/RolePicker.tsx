@@ -21,7 +21,7 @@ export function RolePicker({ value, onChange, error, roles = ROLES }: RolePicker
           </label>
         ))}
       </div>
-      {error && <p role="alert" className="mt-1 text-label font-strong text-red">{error}</p>}
+      {error && <p role="alert" className="mt-1 text-label font-strong text-red">{/^[a-z]/.test(error) ? `Roles ${error}.` : error}</p>}
     </fieldset>
   );
 }

@@ -13,6 +13,8 @@ export class ApiProblem extends Error {
   get status(): number { return this.body.status; }
   get code(): string { return this.body.code; }
   get field(): string | undefined { return this.body.field; }
+  /** What is wrong with the field, without its name; the whole sentence where no field is named. */
+  get fieldMessage(): string { return this.body.errors?.find((each) => each.field === this.body.field)?.detail ?? this.body.detail; }
   get requestId(): string { return this.body.requestId; }
 }
 

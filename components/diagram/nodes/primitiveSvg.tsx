@@ -1,4 +1,4 @@
-import { Fragment, memo } from "react";
+import { memo } from "react";
 import { DASHES, layered, type Ink, type Primitive } from "@/lib/sheets/primitives";
 
 /** Inks by theme. The drawing's own inks (dk, dk2) stay dark at night, because the sheet stays paper. */
@@ -7,42 +7,41 @@ const INK: Readonly<Record<Ink, string>> = {
 };
 
 function One({ primitive }: { primitive: Primitive }) {
-  if (primitive.type === "group") {
-    const { x, y, turn, mirrored, scale } = primitive;
-    return (
-      <g transform={`translate(${x} ${y})${turn ? ` rotate(${turn})` : ""}${mirrored ? " scale(-1 1)" : ""}${scale === 1 ? "" : ` scale(${scale})`}`}>
-        {primitive.children.map((child, index) => <One key={index} primitive={child} />)}
-      </g>
-    );
-  }
-  if (primitive.type === "image") return <image x={primitive.x} y={primitive.y} width={primitive.width} height={primitive.height} href={primitive.href} />;
-  if (primitive.type === "text") {
-    const bold = primitive.bold > 0;
-    // At a small zoom ratings are left out and tags grow, so that nothing on screen is lettered under 11 px.
-    const detail = bold ? "group-data-[detail=tags]/sheet:scale-150" : primitive.face === "narrow" && primitive.size < 15 ? "group-data-[detail=tags]/sheet:hidden" : "";
-    return (
+  switch (primitive.type) {
+    case "group": {
+      const { x, y, turn, mirrored, scale } = primitive;
+      return (
+        <g transform={`translate(${x} ${y})${turn ? ` rotate(${turn})` : ""}${mirrored ? " scale(-1 1)" : ""}${scale === 1 ? "" : ` scale(${scale})`}`}>
+          {primitive.children.map((child, index) => <One key={index} primitive={child} />)}
+        </g>
+      );
+    }
+    case "image": return <image x={primitive.x} y={primitive.y} width={primitive.width} height={primitive.height} href={primitive.href} />;
+    case "text": return (
       <text
         x={primitive.x} y={primitive.y} fontSize={primitive.size} textAnchor={primitive.anchor} fill={INK[primitive.ink]}
-        className={`${primitive.face === "narrow" ? "font-lettering-narrow" : "font-lettering"} ${detail} [transform-box:fill-box] [transform-origin:0_100%]`}
-        {...(bold ? { stroke: INK[primitive.ink], strokeWidth: primitive.bold } : {})}
-        {...(primitive.turn ? { transform: `rotate(${primitive.turn} ${primitive.x} ${primitive.y})`, style: { transformBox: "view-box", transformOrigin: "0 0" } } : {})}
+        className={primitive.face === "narrow" ? "font-lettering-narrow" : "font-lettering"}
+        {...(primitive.bold > 0 ? { stroke: INK[primitive.ink], strokeWidth: primitive.bold } : {})}
+        {...(primitive.turn ? { transform: `rotate(${primitive.turn} ${primitive.x} ${primitive.y})` } : {})}
       >
         {primitive.text}
       </text>
     );
+    case "path": {
+      const dash: readonly number[] = DASHES[primitive.dash];
+      return (
+        <path
+          d={primitive.d} fill={primitive.fill ? INK[primitive.fill] : "none"} stroke={primitive.stroke ? INK[primitive.stroke] : "none"} strokeWidth={primitive.weight}
+          strokeLinecap={primitive.cap} strokeLinejoin="round" {...(dash.length > 0 ? { strokeDasharray: dash.join(" ") } : {})}
+        />
+      );
+    }
   }
-  const dash = DASHES[primitive.dash];
-  return (
-    <path
-      d={primitive.d} fill={primitive.fill ? INK[primitive.fill] : "none"} stroke={primitive.stroke ? INK[primitive.stroke] : "none"} strokeWidth={primitive.weight}
-      strokeLinecap={primitive.cap} strokeLinejoin="round" {...(dash.length > 0 ? { strokeDasharray: dash.join(" ") } : {})}
-    />
-  );
 }
 
-/** Draws sheet primitives, layer by layer, where they stand: the caller moves them. */
+/** Draws sheet primitives, layer by layer, where they stand on the sheet. */
 export const PrimitiveShapes = memo(function PrimitiveShapes({ primitives }: { primitives: readonly Primitive[] }) {
-  return <>{layered(primitives).map((primitive, index) => <Fragment key={index}><One primitive={primitive} /></Fragment>)}</>;
+  return <>{layered(primitives).map((primitive, index) => <One key={index} primitive={primitive} />)}</>;
 });
 
 /** Primitives in sheet px, drawn in an element whose own corner is at (left, top) of the sheet. */

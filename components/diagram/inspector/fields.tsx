@@ -1,0 +1,83 @@
+"use client";
+import { useId, useState, type ReactNode } from "react";
+import { FIELD, HEADING, LABEL } from "@/components/diagram/chrome/controls";
+import { WAVE_CLASS } from "@/components/diagram/redlines/wave";
+import type { MarkKind } from "@/components/diagram/redlines/markKind";
+
+/** A finding that names this field, for its underline and its sentence. */
+export interface FieldMark { readonly kind: MarkKind; readonly message: string }
+
+interface FieldProps {
+  readonly label: string;
+  readonly value: string;
+  readonly unit?: string;
+  readonly readOnly: boolean;
+  readonly mark?: FieldMark | null;
+  readonly hint?: string;
+  readonly wide?: boolean;
+  /** Takes the text; the answer is why not, or null. */
+  readonly onCommit: (text: string) => string | null;
+}
+
+function Shell({ id, label, unit, mark, wide, children, refusal, hint }: { id: string; label: string; unit?: string; mark?: FieldMark | null; wide?: boolean; children: ReactNode; refusal: string | null; hint?: string }) {
+  return (
+    <div className={`min-w-0 ${wide ? "col-span-2" : ""}`}>
+      <label htmlFor={id} className={LABEL}><span className={mark ? WAVE_CLASS[mark.kind] : ""}>{label}</span>{unit ? `, ${unit}` : ""}</label>
+      {children}
+      {refusal && <p role="alert" className="mt-0.5 text-small text-red">{refusal}</p>}
+      {!refusal && hint && <p className="mt-0.5 text-small text-ink3">{hint}</p>}
+    </div>
+  );
+}
+
+/** Field that is taken over on Enter or when it is left; Esc gives back what was there. */
+export function TextField({ label, value, unit, readOnly, mark, hint, wide, onCommit, list }: FieldProps & { list?: readonly string[] }) {
+  const id = useId();
+  const [typed, setTyped] = useState<string | null>(null);
+  const [refusal, setRefusal] = useState<string | null>(null);
+  const commit = (): void => {
+    if (typed === null) return;
+    if (typed === value) { setTyped(null); setRefusal(null); return; }
+    const answer = onCommit(typed);
+    setRefusal(answer);
+    if (answer === null) setTyped(null);
+  };
+  return (
+    <Shell id={id} label={label} refusal={refusal} {...(unit ? { unit } : {})} {...(mark ? { mark } : {})} {...(wide ? { wide } : {})} {...(hint ? { hint } : {})}>
+      <input
+        id={id} className={FIELD} value={typed ?? value} readOnly={readOnly} placeholder={readOnly ? "not known" : "not known"} list={list ? `${id}-list` : undefined} autoComplete="off"
+        aria-invalid={refusal !== null} title={mark?.message}
+        onChange={(event) => setTyped(event.target.value)} onBlur={commit}
+        onKeyDown={(event) => {
+          if (event.key === "Enter") { event.preventDefault(); commit(); }
+          else if (event.key === "Escape" && typed !== null) { event.stopPropagation(); setTyped(null); setRefusal(null); }
+        }}
+      />
+      {list && <datalist id={`${id}-list`}>{list.map((option) => <option key={option} value={option} />)}</datalist>}
+    </Shell>
+  );
+}
+
+/** Choice among the trade's words; the first one is always "not known" where that is a value. */
+export function ChoiceField({ label, value, options, readOnly, mark, wide, unknown = true, onCommit, words }: FieldProps & { options: readonly string[]; unknown?: boolean; words?: Readonly<Record<string, string>> }) {
+  const id = useId();
+  const [refusal, setRefusal] = useState<string | null>(null);
+  return (
+    <Shell id={id} label={label} refusal={refusal} {...(mark ? { mark } : {})} {...(wide ? { wide } : {})}>
+      <select id={id} className={FIELD} value={value} disabled={readOnly} title={mark?.message} onChange={(event) => setRefusal(onCommit(event.target.value))}>
+        {unknown && <option value="">not known</option>}
+        {options.map((option) => <option key={option} value={option}>{words?.[option] ?? option}</option>)}
+      </select>
+    </Shell>
+  );
+}
+
+/** Two columns of fields under a heading. */
+export function FieldGroup({ title, note, children, open = true }: { title: string; note?: string; children: ReactNode; open?: boolean }) {
+  return (
+    <details open={open}>
+      <summary className={`${HEADING} cursor-pointer list-none [&::-webkit-details-marker]:hidden`}><span>{title}</span>{note && <span className="text-small font-normal text-ink2">{note}</span>}</summary>
+      <div className="mt-2 grid grid-cols-2 gap-x-2 gap-y-2">{children}</div>
+    </details>
+  );
+}
