@@ -2,9 +2,40 @@ import type { Draft } from "immer";
 import { forbiddenKey } from "@/lib/diagram/patch";
 import { propertyFault } from "@/lib/diagram/check";
 import type { Drawing } from "@/lib/diagram/schema";
+import type { PropertyValue } from "@/lib/equipment/define";
 import { kindDefinition } from "@/lib/equipment/registry";
+import { newCircuit } from "./circuits";
 import { nameOf, need } from "./lookup";
 import { Refusal, type Recipe } from "./types";
+
+/** The built-in PV switch has one circuit a tracker, so it follows. */
+function syncTrackers(draft: Draft<Drawing>, id: string, value: PropertyValue): void {
+  const found = Object.entries(draft.equipment).find(([, each]) => each.parent === id && each.integral && each.kind === "pv-switch");
+  if (!found || typeof value !== "number" || value < 1) return;
+  const [switchId, pvSwitch] = found;
+  pvSwitch.props.channels = value;
+  for (const [key, circuit] of Object.entries(draft.circuits)) {
+    const number = /^load(\d+)$/.exec(circuit.from.equipment === switchId ? circuit.from.port : circuit.to.equipment === switchId ? circuit.to.port : "")?.[1];
+    if (circuit.wiring === "factory" && number && Number(number) > value) delete draft.circuits[key];
+  }
+  for (let n = 1; n <= value; n++) {
+    const joined = Object.values(draft.circuits).some((each) => [each.from, each.to].some((end) => end.equipment === id && end.port === `pv${n}`));
+    if (!joined) draft.circuits[`${id}-pv${n}`] = { ...newCircuit("pv-dc", "", { equipment: switchId, port: `load${n}`, offset: 0 }, { equipment: id, port: `pv${n}`, offset: 0 }), wiring: "factory" };
+  }
+  portsStillFit(draft, switchId);
+}
+
+/** A value may change which ports there are; a circuit never loses its landing in silence. */
+function portsStillFit(draft: Draft<Drawing>, id: string): void {
+  const equipment = need(draft, "equipment", id);
+  const ports = new Map(kindDefinition(equipment.kind).ports(equipment.props as never).map((port) => [port.id, port.system]));
+  for (const circuit of Object.values(draft.circuits)) {
+    for (const end of [circuit.from, circuit.to]) {
+      if (end.equipment !== id || ports.get(end.port) === circuit.system) continue;
+      throw new Refusal(`${circuit.tag || "A circuit"} lands where ${equipment.tag || "this equipment"} would have no place for it. Move or delete it first.`);
+    }
+  }
+}
 
 export const setProperty: Recipe<"setProperty"> = (draft, { id, name, value, source }) => {
   const each = need(draft, "equipment", id);
@@ -14,6 +45,8 @@ export const setProperty: Recipe<"setProperty"> = (draft, { id, name, value, sou
   const fault = propertyFault(property, value);
   if (fault) throw new Refusal(`${property.label} ${fault}.`, name);
   each.props[name] = value;
+  if (each.kind === "hybrid-inverter" && name === "trackers") syncTrackers(draft, id, value);
+  portsStillFit(draft, id);
   if (source === null) delete each.sources[name];
   else if (source) each.sources[name] = { ...source };
   return `set ${property.label.toLowerCase()} of ${each.tag || definition.title.toLowerCase()}`;
