@@ -57,7 +57,7 @@ export type Layer = (typeof LAYERS)[number];
 interface Base { layer: Layer; /** Element of the drawing that it belongs to, for picking and for tests. */ of?: ElementRef }
 export interface PathPrimitive extends Base {
   type: "path";
-  /** SVG path data; only M L H V A Q C Z, upper or lower case. */
+  /** SVG path data; only M L H V A Q C S Z, upper or lower case. */
   d: string;
   stroke: Ink | null;
   fill: Ink | null;

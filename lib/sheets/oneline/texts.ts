@@ -55,7 +55,7 @@ export function equipmentLabel(graph: DrawingGraph, id: string, options: OneLine
   const style: Style = placement.heading ? "heading" : crowded ? "tagNarrow" : "tag";
   const x = equipment.at.x + placement.x;
   const y = equipment.at.y + placement.y;
-  const lines = options.detail === "tags" ? [] : linesFor(graph, id, placement.anchor);
+  const lines = options.detail === "tags" || equipment.integral ? [] : linesFor(graph, id, placement.anchor);
   const tagUp = placement.lines === "over" ? lines.length * LINE_PITCH : 0;
   const tag = grown(text(sheetPx(x), sheetPx(y - tagUp), words, style, { anchor: placement.anchor }), options);
   return { tag, lines: lines.map((line, i) => lineText(graph, id, line, i, { placement, x, y, tag, count: lines.length })) };
