@@ -1,3 +1,4 @@
+import { findingEvidence } from "@/lib/rules/engine/accept";
 import type { CheckResult, Finding } from "@/lib/rules/engine/types";
 import type { Refusal, RevisionState } from "./revision";
 
@@ -31,11 +32,11 @@ export function withAcceptances(result: CheckResult, acceptances: readonly Findi
   return { ...result, counts, findings };
 }
 
-/** What of a finding an acceptance rests on: when one of these changes, it has to be accepted anew. */
-const evidence = (finding: Finding) => JSON.stringify([finding.kind, finding.severity, finding.message, finding.fields, finding.steps]);
+/** What an acceptance rests on: when one of these changes, the finding has to be accepted anew. */
+const evidence = (finding: Finding) => `${finding.kind} ${finding.severity} ${findingEvidence(finding)}`;
 
 /**
- * Findings of a new revision that were accepted in the last sealed one and are still the same in words and numbers.
+ * Findings of a new revision that were accepted in the last sealed one and are still the same in place and numbers.
  * @returns their keys; the acceptance goes on under its own name and date
  */
 export function carriedAcceptances(before: CheckResult, now: CheckResult, acceptedKeys: readonly string[]): string[] {

@@ -64,7 +64,7 @@ export async function issueRevision(actor: Actor, jobId: string, input: z.output
   });
 }
 
-/** What a licensee accepted in the sealed revision stays accepted while words and numbers of the finding stay. */
+/** What a licensee accepted in the sealed revision stays accepted while place and numbers of the finding stay. */
 async function carryAcceptances(revision: Revision, transaction: Transaction): Promise<void> {
   const { FindingAcceptance, Revision } = database();
   const last = await Revision.findOne({
