@@ -83,17 +83,15 @@ function bandPoints(graph: DrawingGraph, circuitId: string, circuit: Circuit, fr
   return points;
 }
 
-/** Orthogonal points for a circuit as the drawing stands; empty when an end does not exist. `keep` keeps its present bends where they still fit. */
-export function routeFor(graph: DrawingGraph, circuitId: string, keep: boolean): Point[] {
+/** Orthogonal points for a circuit as the drawing stands; empty when an end does not exist. Bends of `before` are kept where they still fit. */
+export function routeFor(graph: DrawingGraph, circuitId: string, before: readonly Point[] = []): Point[] {
   const circuit = graph.drawing.circuits[circuitId] as Circuit;
   const from = endOf(graph, circuit, "from");
   const to = endOf(graph, circuit, "to");
   if (!from || !to) return [];
   const obstacles = obstaclesFor(graph, circuit);
-  if (keep) {
-    const stretched = stretchEnds(circuit.points, from.point, to.point);
-    if (stretched && isOrthogonal(stretched) && !obstacles.some((box) => crossesBox(stretched, box))) return stretched;
-  }
+  const stretched = stretchEnds(before, from.point, to.point);
+  if (stretched && isOrthogonal(stretched) && !obstacles.some((box) => crossesBox(stretched, box))) return stretched;
   const lines = Object.entries(graph.drawing.circuits).filter(([id, other]) => id !== circuitId && other.points.length > 1).map(([, other]) => other.points);
   const via = circuit.bends.length > 0 ? circuit.bends : bandPoints(graph, circuitId, circuit, from.point, to.point);
   return route({ from, to, via }, { obstacles, lines }).points.map(round);

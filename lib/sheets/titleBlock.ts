@@ -1,10 +1,12 @@
-import type { SheetContext, SheetWords } from "./context";
+import type { SheetContext as WholeContext, SheetWords } from "./context";
 import { BORDER_PX, INNER_PX, TITLE_PX } from "./frame";
 import { fitText, letter, textWidth, wrapText } from "./lettering";
 import { LETTERING, WEIGHTS, n, path, text, type Primitive, type Style } from "./primitives";
 import { sealLines, sealPrimitives } from "./seal";
 import type { SheetGeometry } from "./size";
 
+/** The block names no operating states, so a screen may draw it before they are worked out. */
+type SheetContext = Omit<WholeContext, "states">;
 const PAD = 12;
 const LINE = 15;
 const COLUMN = 92;

@@ -7,10 +7,6 @@ import { cautionPrimitives, stripPrimitives } from "@/lib/sheets/bottom";
 import type { SheetContext } from "@/lib/sheets/context";
 import type { SheetGeometry } from "@/lib/sheets/size";
 import { titleBlockPrimitives } from "@/lib/sheets/titleBlock";
-import type { StateSpace } from "@/lib/states/types";
-
-/** The frame's words read no operating states; those are worked out for the sheet's tables only. */
-const NO_STATES: StateSpace = { switches: [], contractions: [], walked: [], positionsAll: 0, positionsExcluded: 0, states: [], forbidden: [], allowed: [] };
 
 /** Title block, cautions and legend as they will print; drawn by the same functions as the sheet. */
 export function TitleBlock({ geometry }: { geometry: SheetGeometry }) {
@@ -19,7 +15,7 @@ export function TitleBlock({ geometry }: { geometry: SheetGeometry }) {
   const primitives = useMemo(() => {
     const { drawing } = graph;
     const { cautions, strip } = bottomAreas(geometry);
-    const context: SheetContext = { drawing, graph, states: NO_STATES, check, digest: check?.digest ?? "", revisions: [], seal: null, sealPlace: "DRAFT" };
+    const context: Omit<SheetContext, "states"> = { drawing, graph, check, digest: check?.digest ?? "", revisions: [], seal: null, sealPlace: "DRAFT" };
     return [
       ...titleBlockPrimitives(geometry, context, { number: drawing.sheet.number, title: drawing.sheet.title, subtitle: drawing.sheet.subtitle, index: 1, count: 1, scale: "NONE" }, { acceptedOn: "E-603" }),
       ...cautionPrimitives(cautions, graph), ...stripPrimitives(strip, graph, "E-603", geometry.pxPerIn),
