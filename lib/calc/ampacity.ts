@@ -143,8 +143,8 @@ function adjustment(sheet: Worksheet, part: RoutePart, label: string, wholeFt: n
   if (part.kind === "metal wireway" && count <= WIREWAY_UNADJUSTED_CONDUCTORS) {
     return sheet.number("Fb", `metal wireway, not more than ${WIREWAY_UNADJUSTED_CONDUCTORS}`, `${label}: ${count}`, 1, "", "wireway-adjustment");
   }
-  const short = part.kind === "raceway" || part.kind === "cable";
-  if (short && wholeFt * 12 <= NIPPLE_MAX_LENGTH_IN + 1e-9) {
+  // Wireways are raceways too; for cables the limit is the length over which they lie together.
+  if (wholeFt * 12 <= NIPPLE_MAX_LENGTH_IN + 1e-9) {
     return sheet.number("Fb", `${NIPPLE_MAX_LENGTH_IN} in or less`, `${label}: ${shown(wholeFt * 12, 1)} in`, 1, "", "bundling-nipple");
   }
   return sheet.number("Fb", "current-carrying conductors", `${label}: ${count}`, bundlingFactor(count), "", "bundling-adjustment");

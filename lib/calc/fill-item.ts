@@ -47,8 +47,8 @@ export function sizedItem(sheet: Worksheet, at: string, item: FillItem, name: st
   const size = parseConductorSize(item.size, `${at}.size`);
   if (item.bare !== true && item.insulation === undefined) throw new QuantityError(`${at}.insulation`, "value is missing: give the insulation, or say bare", INSULATIONS.join(", "));
   const found = item.bare === true
-    ? bareConductorDimensions(size, item.solid)
-    : conductorDimensions(size, checkOneOf(`${at}.insulation`, item.insulation, INSULATIONS), item.compact, item.covered);
+    ? bareConductorDimensions(size, item.solid, `${at}.`)
+    : conductorDimensions(size, checkOneOf(`${at}.insulation`, item.insulation, INSULATIONS), item.compact, item.covered, `${at}.`);
   const label = item.label ?? `${size} ${item.bare === true ? "bare" : item.insulation}`;
   sheet.number("a", "area of one conductor", label, found.areaIn2, "in²", found.meaning);
   return { label, count, diameterIn: found.diameterIn, areaIn2: found.areaIn2 };

@@ -143,7 +143,8 @@ function racewayFor(input: CircuitToSize, raceway: NonNullable<CircuitToSize["ra
   try {
     return smallestRaceway({ edition: input.edition, kind, lengthIn, items: [{ count, size, insulation: input.insulation }, { count: 1, size: groundSize, insulation: input.insulation }, ...others], reserve });
   } catch (error) {
-    if (error instanceof NoRacewayError) return null;
+    // Neither a raceway too small for the size nor a size without dimensions is a fault of the input: more sets may do.
+    if (error instanceof NoRacewayError || (error instanceof CodeLookupError && error.field.endsWith(".size"))) return null;
     throw error;
   }
 }

@@ -37,28 +37,30 @@ export function racewayTradeSizes(kind: RacewayKind): readonly TradeSize[] {
 /**
  * Diameter and area of an insulated conductor by Table 5, or Table 5A for compact stranding.
  * @param covered RHH, RHW and RHW-2 with an outer covering; the larger rows, the safe ones when not known.
+ * @param at prefix of the field names in a refusal, such as `items.0.`.
  * @throws CodeLookupError where no table holds the type: the outside diameter of the product is needed.
  */
-export function conductorDimensions(size: ConductorSize, insulation: Insulation, compact = false, covered = true): ConductorDimensions {
-  const key = parseConductorSize(size);
-  checkOneOf("insulation", insulation, INSULATIONS);
+export function conductorDimensions(size: ConductorSize, insulation: Insulation, compact = false, covered = true, at = ""): ConductorDimensions {
+  const key = parseConductorSize(size, `${at}size`);
+  checkOneOf(`${at}insulation`, insulation, INSULATIONS);
   if (compact) {
     const column = compactColumn(insulation);
     const cell = column === null ? null : (COMPACT_ROWS.find((row) => row.size === key)?.[column] ?? null);
-    if (cell === null) throw new CodeLookupError("size", `no compact ${insulation} ${key} in the table; enter the outside diameter`);
+    if (cell === null) throw new CodeLookupError(`${at}size`, `no compact ${insulation} ${key} in the table; enter the outside diameter`);
     return { diameterIn: cell[0], areaIn2: cell[1], meaning: "compact-dimensions" };
   }
   const group = dimensionGroup(insulation, covered);
-  const row = group === null ? undefined : DIMENSIONS.get(`${group} ${key}`);
-  if (row === undefined) throw new CodeLookupError("insulation", `no ${insulation} ${key} in the table; enter the outside diameter`);
+  if (group === null) throw new CodeLookupError(`${at}insulation`, `no ${insulation} in the table; enter the outside diameter`);
+  const row = DIMENSIONS.get(`${group} ${key}`);
+  if (row === undefined) throw new CodeLookupError(`${at}size`, `no ${insulation} ${key} in the table; enter the outside diameter`);
   return { diameterIn: row[1], areaIn2: row[2], meaning: "conductor-dimensions" };
 }
 
 /** Diameter and area of a bare conductor, Table 8; solid where asked and made (8 AWG and smaller). @throws CodeLookupError. */
-export function bareConductorDimensions(size: ConductorSize, solid = false): ConductorDimensions {
-  const key = parseConductorSize(size);
+export function bareConductorDimensions(size: ConductorSize, solid = false, at = ""): ConductorDimensions {
+  const key = parseConductorSize(size, `${at}size`);
   const row = CONDUCTOR_PROPERTIES.find((item) => item.size === key && (item.strands === 1) === solid);
-  if (row === undefined) throw new CodeLookupError("size", `no ${solid ? "solid" : "stranded"} bare ${key} in the table`);
+  if (row === undefined) throw new CodeLookupError(`${at}size`, `no ${solid ? "solid" : "stranded"} bare ${key} in the table`);
   return { diameterIn: row.overallDiameterIn, areaIn2: row.overallAreaIn2, meaning: "fill-bare" };
 }
 

@@ -129,6 +129,11 @@ describe("conductor properties", () => {
       expect(row.circularMils).toBe(circularMils(row.size));
     }
   });
+  it("strands are those of concentric lay, 1 + 3·n·(n + 1)", () => {
+    const lay = [0, 1, 2, 3, 4, 5, 6].map((n) => 1 + 3 * n * (n + 1));
+    for (const row of CONDUCTOR_PROPERTIES) expect(lay, row.size).toContain(row.strands);
+    expect((["8 AWG", "2 AWG", "1 AWG", "4/0 AWG", "250 kcmil", "500 kcmil", "600 kcmil", "1000 kcmil", "1250 kcmil", "2000 kcmil"] as const).map((size) => CONDUCTOR_PROPERTIES.findLast((row) => row.size === size)?.strands)).toEqual([7, 7, 19, 19, 37, 37, 61, 61, 91, 127]);
+  });
   it("resistance × circular mils is one constant a metal, as resistivity at 75 °C asks (12.9 and 21.2 Ω·cmil/ft)", () => {
     for (const row of CONDUCTOR_PROPERTIES) {
       expect((row.copperUncoated * row.circularMils) / 1000, row.size).toBeGreaterThan(12.5);

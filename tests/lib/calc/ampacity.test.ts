@@ -9,6 +9,7 @@ describe("parts of a route", () => {
   it("takes no adjustment in 24 in, and takes it one inch beyond", () => {
     expect(run([part({ lengthFt: 2, currentCarryingCount: 9 })]).detail.correctedA).toBe(40);
     expect(run([part({ lengthFt: 25 / 12, currentCarryingCount: 9 })]).detail.correctedA).toBe(28);
+    for (const kind of ["cable", "nonmetallic wireway", "metal wireway"] as const) expect(run([part({ kind, lengthFt: 2, currentCarryingCount: 40 })]).detail.correctedA).toBe(40);
   });
   it("a short stretch of a long raceway is no nipple", () => {
     const result = run([part({ lengthFt: 2, racewayLengthFt: 22, currentCarryingCount: 9 })]);
@@ -96,6 +97,8 @@ describe("what a circuit asks for", () => {
     expect(ask({ kind: "pv", basis: "converter output", currentA: 15 })).toMatchObject({ maximumA: 15, beforeFactorsA: 18.75 });
     expect(ask({ kind: "pv", basis: "converter input", currentA: 20 }).maximumA).toBe(20);
     expect(() => ask({ kind: "pv", basis: "converter input", currentA: 20 }, "2017")).toThrow("use.basis");
+    const sections = (basis: "converter output" | "converter input"): string[] => requiredAmpacity({ edition: "2020", use: { kind: "pv", basis, currentA: 15 } }).citations.map((item) => item.section);
+    expect([sections("converter output")[0], sections("converter input")[0]]).toEqual(["690.8(A)(1)(c)", "690.8(A)(2)"]);
     expect(ask({ kind: "pv", currentA: 10, bifacialGain: 0.1 }).maximumA).toBeCloseTo(13.75, 10);
     expect(ask({ kind: "pv", basis: "engineered", currentA: 10, engineeredA: 5, systemKw: 120 }).maximumA).toBeCloseTo(8.75, 10);
     expect(() => ask({ kind: "pv", basis: "engineered", currentA: 10, engineeredA: 5, systemKw: 50 })).toThrow("use.systemKw");
@@ -103,6 +106,10 @@ describe("what a circuit asks for", () => {
   it("storage follows the larger of nameplate and device; motors 125 % of the largest", () => {
     expect(ask({ kind: "storage", nameplateA: 100, ocpdA: 125 })).toMatchObject({ beforeFactorsA: 125, afterFactorsA: 100, minimumOcpdA: 125 });
     expect(ask({ kind: "motor", largestA: 8, otherMotorsA: 4, otherLoadA: 3 }).beforeFactorsA).toBe(17);
+    const motor = requiredAmpacity({ edition: "2020", use: { kind: "motor", largestA: 8, otherMotorsA: 4 } });
+    expect([motor.value, motor.steps[0]?.substituted, motor.citations[0]?.section]).toEqual([14, "1.25 × 8 A + 4 A + 0 A", "430.24"]);
+    const alone = requiredAmpacity({ edition: "2020", use: { kind: "motor", largestA: 8 } });
+    expect([alone.value, alone.steps[0]?.expression, alone.citations[0]?.section]).toEqual([10, "1.25 × full-load current", "430.22"]);
     expect(() => ask({ kind: "battery input" })).toThrow("use.powerW");
   });
   it("the base of an increase holds heat from 2020 on and not in 2017", () => {

@@ -43,6 +43,7 @@ describe("raceways", () => {
     expect(racewayFill({ edition, raceway: emt("3/4", 60), items: [{ count: 1, size: "6 AWG", bare: true }] }).detail.usedIn2).toBe(0.027);
     expect(() => racewayFill({ edition, raceway: emt("3/4", 60), items: [{ count: 1, size: "10 AWG", insulation: "PV wire" }] })).toThrow(/outside diameter/);
     expect(() => racewayFill({ edition, raceway: emt("3/4", 60), items: [{ count: 1, size: "10 AWG" }] })).toThrow("items.0.insulation");
+    expect(() => racewayFill({ edition, raceway: emt("3/4", 60), items: [{ count: 1, size: "1250 kcmil", insulation: "THHN" }] })).toThrow("items.0.size");
   });
 });
 

@@ -147,6 +147,8 @@ describe("working space and storage", () => {
     expect(storageLimits({ edition, units, perDwellingKwh: 80 }).detail.within).toBe(false);
     expect(storageLimits({ edition, units: [...units, { label: "one more", energyKwh: 10, location: "exterior wall" }] }).detail.within).toBe(false);
     expect(storageLimits({ edition, units: [{ label: "large", energyKwh: 20.5, location: "exterior wall" }] }).detail.unitsOverLimit).toEqual(["large"]);
+    // Units of 1 kWh and less are outside the scope.
+    expect(storageLimits({ edition, units: [{ label: "small", energyKwh: 1, location: "exterior wall" }, { label: "next", energyKwh: 1.1, location: "exterior wall" }] }).value).toBe(1.1);
   });
   record("ESS-855-SPACING", "training provider's article on NFPA 855, 2024", () => expect(ESS_SPACING_FT).toBe(3));
 });
