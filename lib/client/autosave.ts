@@ -76,6 +76,12 @@ export class Autosave<Document> {
     return this.run();
   }
 
+  /** Goes on after a stop, for a page that is shown again. */
+  go(): void {
+    this.stopped = false;
+    if (this.waiting.length > 0 || this.sent) this.schedule(QUIET_MS);
+  }
+
   stop(): void {
     this.stopped = true;
     if (this.timer) clearTimeout(this.timer);
@@ -134,7 +140,6 @@ export class Autosave<Document> {
     this.busy = true;
     const answer = await this.parts.send(this.sent.batch).catch((): SaveAnswer<Document> => ({ kind: "offline" }));
     this.busy = false;
-    if (this.stopped) return;
     if (answer.kind === "saved") {
       this.sent = null;
       this.sequence = answer.sequence;

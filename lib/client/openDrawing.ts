@@ -58,6 +58,7 @@ export function openDrawing(answer: DrawingAnswer, draft: Draft | null): OpenDra
   let autosave: Autosave<Drawing> | null = null;
   let checker: Checker | null = null;
   let unsubscribe: (() => void) | null = null;
+  let started = false;
   const store = createEditorStore({ drawing: recovered.drawing, readOnly: !answer.may.edit }, (change) => autosave?.add(change));
 
   const readAgain = async (): Promise<void> => {
@@ -95,14 +96,18 @@ export function openDrawing(answer: DrawingAnswer, draft: Draft | null): OpenDra
       say(settled.left > 0 ? `Settled. ${settled.left} of your changes no longer fit and were left out.` : "Settled.");
     },
     start: () => {
+      autosave?.go();
       checker = startChecker((check) => store.getState().set({ check, checkError: null }), (checkError) => store.getState().set({ checkError }));
       checker.request(store.getState().drawing);
       unsubscribe = store.subscribe((now, before) => { if (now.drawing !== before.drawing) checker?.request(now.drawing); });
-      if (recovered.waiting.length > 0 && draft) {
+      if (started) {
+        // Started a second time by a development double mount: what was recovered is already in the queue.
+      } else if (recovered.waiting.length > 0 && draft) {
         autosave?.resume({ ...draft, sequence: answer.sequence, sent: null, waiting: recovered.waiting });
         store.getState().say(`${recovered.waiting.length} ${recovered.waiting.length === 1 ? "change" : "changes"} kept on this device ${recovered.waiting.length === 1 ? "was" : "were"} put back.`);
       } else if (draft) void writeDraft(answer.id, null);
-      if (recovered.left > 0) store.getState().say(`${recovered.left} kept ${recovered.left === 1 ? "change does" : "changes do"} not fit the drawing any more and ${recovered.left === 1 ? "was" : "were"} left out.`, "refused");
+      if (!started && recovered.left > 0) store.getState().say(`${recovered.left} kept ${recovered.left === 1 ? "change does" : "changes do"} not fit the drawing any more and ${recovered.left === 1 ? "was" : "were"} left out.`, "refused");
+      started = true;
       window.addEventListener("online", online);
       window.addEventListener("beforeunload", leaving);
     },

@@ -1,4 +1,4 @@
-import { crossesBox, simplify } from "./geometry";
+import { crossesBox, isOrthogonal, simplify } from "./geometry";
 import { buildMesh } from "./mesh";
 import { search } from "./search";
 import { DEFAULT_ROUTE_OPTIONS, STEPS, type RouteBox, type RouteDirection, type RouteEnd, type RouteField, type RouteOptions, type RoutePoint, type RouteRequest } from "./types";
@@ -69,7 +69,7 @@ export function route(request: RouteRequest, field: RouteField, options: RouteOp
   const obstacles = field.obstacles.filter((box) => !walled(box, start) && !walled(box, end) && !request.via.some((via) => walled(box, via)));
   const open = { ...field, obstacles };
   const straight = simplify([request.from.point, start, end, request.to.point]);
-  if (request.via.length === 0 && straight.length === 2 && !obstacles.some((box) => crossesBox(straight, box)) && facing(request)) return { points: straight, blocked: false };
+  if (request.via.length === 0 && straight.length === 2 && isOrthogonal(straight) && !obstacles.some((box) => crossesBox(straight, box)) && facing(request)) return { points: straight, blocked: false };
   const stops = [start, ...request.via, end];
   let line: RoutePoint[] = [request.from.point];
   let direction = request.from.direction;

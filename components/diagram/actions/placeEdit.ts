@@ -1,6 +1,6 @@
 import type { Command } from "@/lib/diagram/commands";
 import type { DrawingGraph } from "@/lib/diagram/graph";
-import type { ElementRef, Point } from "@/lib/diagram/schema";
+import type { ElementRef, Equipment, Point } from "@/lib/diagram/schema";
 import { isKindId, kindDefinition, type KindId } from "@/lib/equipment/registry";
 import type { PartId } from "@/lib/client/editorTypes";
 import { withRoutes, type PlacedEdit, type Refused } from "./edit";
@@ -41,6 +41,13 @@ function placeOnBus(graph: DrawingGraph, panelId: string, at: Point): { at: Poin
   return { grow, at: vertical ? { x: at.x, y: panel.at.y + bus.y + offset } : { x: panel.at.x + bus.x + offset, y: at.y } };
 }
 
+/** Room for the lettering on top, the main breaker and a column of branches: what a new panel starts with, grid units. */
+const PANEL: Partial<Record<KindId, Partial<Equipment>>> = {
+  "meter-main": { size: { width: 23, height: 21 }, bus: { x: 9, y: 5, length: 13, vertical: true }, label: { x: 14.5, y: 1.7, anchor: "start" } },
+  "panelboard": { size: { width: 16, height: 17 }, bus: { x: 4, y: 5, length: 10, vertical: true } },
+  "interconnect-cabinet": { size: { width: 22, height: 20 }, bus: { x: 10, y: 7, length: 11, vertical: true } },
+};
+
 function placeKind(graph: DrawingGraph, kind: KindId, at: Point, id: string, selection: readonly ElementRef[]): PlacedEdit {
   const definition = kindDefinition(kind);
   const select: ElementRef = { collection: "equipment", id };
@@ -53,7 +60,8 @@ function placeKind(graph: DrawingGraph, kind: KindId, at: Point, id: string, sel
     const bus = placeOnBus(graph, parent, at);
     return { commands: withRoutes(graph, [...bus.grow, { type: "placeEquipment", id, kind, at: onGrid(bus.at), parent }]), select };
   }
-  return { commands: [{ type: "placeEquipment", id, kind, at: onGrid(at), parent }], select };
+  const change = PANEL[kind];
+  return { commands: [{ type: "placeEquipment", id, kind, at: onGrid(at), parent, ...(change ? { change } : {}) }], select };
 }
 
 function placeSensor(graph: DrawingGraph, at: Point, id: string, selection: readonly ElementRef[]): PlacedEdit | Refused {

@@ -28,12 +28,14 @@ export const ElementView = memo(function ElementView({ data, selected }: NodePro
   const joining = useEditor((editor) => editor.tool.kind === "join");
   const readOnly = useEditor((editor) => editor.readOnly);
   const { width, height, hit, tag } = data;
+  const callout = data.ref.collection === "circuits";
   return (
     <div className="group/node absolute inset-0 pointer-events-none">
       <PrimitiveSvg primitives={data.primitives} left={data.left} top={data.top} className="pointer-events-none" />
       {hit !== "none" && (
         <div
-          role="button" tabIndex={0} aria-label={data.name} aria-pressed={selected} data-element={`${data.ref.collection}/${data.ref.id}`}
+          // A circuit is reached by its line; its callout is a second handle for the pointer only.
+          {...(callout ? { "aria-hidden": true } : { role: "button", tabIndex: 0, "aria-label": data.name, "aria-pressed": selected })} data-element={`${data.ref.collection}/${data.ref.id}`}
           className="absolute inset-0 pointer-events-none outline-offset-4"
           onKeyDown={(event) => {
             if (event.target !== event.currentTarget || (event.key !== "Enter" && event.key !== " ")) return;

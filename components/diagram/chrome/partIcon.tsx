@@ -23,7 +23,7 @@ export function PartIcon({ part }: { part: PartId }) {
   const [x, y, scale] = FIT[symbol ?? ""] ?? [0, 0, 0.8];
   const found = symbol === "pvswitch" ? shape("switch") : symbol ? shape(symbol) : null;
   return (
-    <svg viewBox="-36 -17 72 34" width={68} height={31} className="mx-auto block" aria-hidden="true">
+    <svg viewBox="-36 -17 72 34" width={66} height={26} className="mx-auto block" aria-hidden="true">
       {drawn && <path d={drawn} className="fill-none stroke-ink" strokeWidth={1.5} />}
       {found && (
         <g transform={`scale(${scale}) translate(${-x} ${-y})`}>

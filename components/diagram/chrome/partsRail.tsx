@@ -32,7 +32,7 @@ export function PartsRail({ onPlaceInView }: { onPlaceInView: (part: PartId) => 
             return (
               <button
                 key={part.id} type="button" data-part={part.id} aria-pressed={active === part.id} tabIndex={groupIndex === 0 && index === 0 ? 0 : -1} title={`${part.title}${key ? ` (${key.toUpperCase()})` : ""}`}
-                className={`block w-full touch-none pb-1 pt-0.5 text-center select-none ${active === part.id ? "bg-tint outline-2 -outline-offset-1 outline-copper" : "hover:bg-vellum"}`}
+                className={`block w-full touch-none pb-[3px] text-center select-none ${active === part.id ? "bg-tint outline-2 -outline-offset-1 outline-copper" : "hover:bg-vellum"}`}
                 onPointerDown={(event) => { if (event.button === 0) pick(part.id); }}
                 onClick={(event) => {
                   // A press with the pointer has picked it already; the keyboard (detail 0) sets it down in view.

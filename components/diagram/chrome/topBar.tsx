@@ -40,7 +40,7 @@ function IssueCell({ jobId, mayIssue }: { jobId: string; mayIssue: boolean }) {
   const off = unsaved || empty;
   return (
     <div className="flex items-center gap-2 px-3">
-      {goes && <em className={`w-[66px] text-right text-label font-strong not-italic leading-[1.1] stretch-label ${counts && counts.mustFix > 0 ? "text-red" : "text-ink2"}`}>{goes} {counts && (counts.mustFix || counts.needsData) === 1 && counts.mustFix === 0 ? "goes" : "go"} along</em>}
+      {goes && <em className={`w-[84px] text-right text-label font-strong not-italic leading-[1.1] stretch-label ${counts && counts.mustFix > 0 ? "text-red" : "text-ink2"}`}>{goes} {counts && (counts.mustFix || counts.needsData) === 1 && counts.mustFix === 0 ? "goes" : "go"} along</em>}
       {off
         ? <button type="button" disabled className="h-bar-control whitespace-nowrap border border-rule px-3 text-body font-strong text-ink3" title={empty ? "Nothing is drawn yet" : "Issue waits until all changes are saved"}>Issue for review</button>
         : <Link href={`/jobs/${jobId}/issue`} className="inline-flex h-bar-control items-center whitespace-nowrap border border-ink bg-ink px-3 text-body font-strong text-onink">Issue for review</Link>}

@@ -5,7 +5,7 @@ import { readNumber, readProperty, showValue } from "@/lib/client/readField";
 import { TERMINAL_METALS, type Equipment, type PortData } from "@/lib/diagram/schema";
 import type { PortInfo } from "@/lib/diagram/graph";
 import type { Property } from "@/lib/equipment/define";
-import { ChoiceField, FieldGroup, TextField } from "./fields";
+import { ChoiceField, FieldGroup, SourceLine, TextField } from "./fields";
 import { useEdit } from "./useEdit";
 
 const GROUPS = [["rating", "Ratings"], ["settings", "Settings"], ["construction", "Construction"], ["place", "Place and working space"], ["identity", "Make and listing"]] as const;
@@ -61,13 +61,13 @@ function PropertyField({ id, name, property }: { id: string; name: string; prope
     : <TextField {...common} {...(property.type === "number" && property.unit ? { unit: property.unit } : {})} {...(property.help ? { hint: property.help } : {})} />;
   if (!property.rated || value === "") return main;
   return (
-    <>
+    <div className="flex min-w-0 flex-col justify-end">
       {main}
-      <TextField label="Source, page" value={source ? [source.document, source.page].filter(Boolean).join(", p. ") : ""} readOnly={readOnly} onCommit={(text) => {
+      <SourceLine label={`Source and page of ${property.label.toLowerCase()}`} value={source ? [source.document, source.page].filter(Boolean).join(", p. ") : ""} readOnly={readOnly} onCommit={(text) => {
         const [document = "", page = ""] = text.split(/,?\s*(?:p\.|page)\s*/i);
         return set(`sources.${name}`, text.trim() === "" ? null : { document: document.trim().slice(0, 120), page: page.trim().slice(0, 40) }, `source of ${property.label.toLowerCase()}`);
       }} />
-    </>
+    </div>
   );
 }
 

@@ -21,7 +21,7 @@ interface FieldProps {
 
 function Shell({ id, label, unit, mark, wide, children, refusal, hint }: { id: string; label: string; unit?: string; mark?: FieldMark | null; wide?: boolean; children: ReactNode; refusal: string | null; hint?: string }) {
   return (
-    <div className={`min-w-0 ${wide ? "col-span-2" : ""}`}>
+    <div className={`flex min-w-0 flex-col justify-end ${wide ? "col-span-2" : ""}`}>
       <label htmlFor={id} className={LABEL}><span className={mark ? WAVE_CLASS[mark.kind] : ""}>{label}</span>{unit ? `, ${unit}` : ""}</label>
       {children}
       {refusal && <p role="alert" className="mt-0.5 text-small text-red">{refusal}</p>}
@@ -45,7 +45,7 @@ export function TextField({ label, value, unit, readOnly, mark, hint, wide, onCo
   return (
     <Shell id={id} label={label} refusal={refusal} {...(unit ? { unit } : {})} {...(mark ? { mark } : {})} {...(wide ? { wide } : {})} {...(hint ? { hint } : {})}>
       <input
-        id={id} className={FIELD} value={typed ?? value} readOnly={readOnly} placeholder={readOnly ? "not known" : "not known"} list={list ? `${id}-list` : undefined} autoComplete="off"
+        id={id} className={FIELD} value={typed ?? value} readOnly={readOnly} placeholder="not known" list={list ? `${id}-list` : undefined} autoComplete="off"
         aria-invalid={refusal !== null} title={mark?.message}
         onChange={(event) => setTyped(event.target.value)} onBlur={commit}
         onKeyDown={(event) => {
@@ -69,6 +69,21 @@ export function ChoiceField({ label, value, options, readOnly, mark, wide, unkno
         {options.map((option) => <option key={option} value={option}>{words?.[option] ?? option}</option>)}
       </select>
     </Shell>
+  );
+}
+
+/** Document and page a rated value was read from, as one line under its field. */
+export function SourceLine({ label, value, readOnly, onCommit }: Pick<FieldProps, "label" | "value" | "readOnly" | "onCommit">) {
+  const [typed, setTyped] = useState<string | null>(null);
+  const commit = (): void => {
+    if (typed !== null && typed !== value) onCommit(typed);
+    setTyped(null);
+  };
+  return (
+    <input
+      aria-label={label} value={typed ?? value} readOnly={readOnly} placeholder="source, page" className="w-full min-w-0 border-b border-dotted border-rule bg-transparent px-1 text-small text-ink2 placeholder:text-ink3"
+      onChange={(event) => setTyped(event.target.value)} onBlur={commit} onKeyDown={(event) => { if (event.key === "Enter") { event.preventDefault(); commit(); } }}
+    />
   );
 }
 

@@ -1,8 +1,9 @@
 import { numbered, type MarkKind } from "./markKind";
 import type { DrawingGraph } from "@/lib/diagram/graph";
-import { oneLine, tagBox, type Box, type OneLineOptions } from "@/lib/sheets/oneline";
+import { equipmentBox, oneLine, tagBox, type Box, type OneLineOptions } from "@/lib/sheets/oneline";
 import { textSpan } from "@/lib/sheets/lettering";
-import type { Primitive } from "@/lib/sheets/primitives";
+import { isDrawn } from "@/lib/sheets/oneline/appearance";
+import { PX_PER_UNIT, sheetPx, type Primitive } from "@/lib/sheets/primitives";
 import type { Finding } from "@/lib/rules/engine/types";
 
 export interface PlacedMark {
@@ -35,6 +36,9 @@ const overlap = (a: Box, b: Box): number =>
  */
 export function placeMarks(graph: DrawingGraph, findings: readonly Finding[], options: OneLineOptions, scale: number): readonly PlacedMark[] {
   const taken = letteringBoxes(oneLine(graph, options));
+  // Symbols may be covered at their edge rather than lettering, so they weigh less.
+  const symbols = Object.keys(graph.drawing.equipment).filter((id) => graph.drawing.equipment[id]?.size === null && isDrawn(graph, id))
+    .map((id) => equipmentBox(graph, id)).map((box): Box => ({ x: sheetPx(box.x), y: sheetPx(box.y), width: box.width * PX_PER_UNIT, height: box.height * PX_PER_UNIT }));
   const half = 11 * scale;
   return numbered(findings).flatMap(({ finding, kind, number }): PlacedMark[] => {
     const tag = tagBox(graph, finding.anchor, options);
@@ -47,7 +51,7 @@ export function placeMarks(graph: DrawingGraph, findings: readonly Finding[], op
       { x: tag.x - half * 3 - 4, y: middle }, { x: right + half * 7, y: middle }, { x: right + half * 3, y: middle - half * 2 },
     ].map((spot) => {
       const box = { x: spot.x - half, y: spot.y - half, width: half * 2, height: half * 2 };
-      return { ...spot, box, cost: taken.reduce((sum, other) => sum + overlap(box, other), 0) };
+      return { ...spot, box, cost: taken.reduce((sum, other) => sum + overlap(box, other), 0) + symbols.reduce((sum, other) => sum + overlap(box, other) / 4, 0) };
     });
     const best = spots.find((spot) => spot.cost < 1) ?? spots.reduce((a, b) => (b.cost < a.cost ? b : a));
     taken.push(best.box);

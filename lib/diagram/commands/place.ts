@@ -92,12 +92,12 @@ function addParts(draft: Draft<Drawing>, id: string): void {
       for (let n = 1; n <= trackers; n++) factory(draft, `${id}-pv${n}`, { from: at0(`${id}-pvs`, `load${n}`), to: at0(id, `pv${n}`) }, []);
     }
   } else if (made.kind === "battery") {
-    part(draft, `${id}-bb`, "breaker", id, { x, y }, { integral: true, rotation: 270, tag: nextTag(draft as Drawing, "BB-") }, { current: "battery dc", mount: "stud" });
+    part(draft, `${id}-bb`, "breaker", id, { x, y: y + 3 }, { integral: true, rotation: 270, tag: nextTag(draft as Drawing, "BB-") }, { current: "battery dc", mount: "stud" });
     factory(draft, `${id}-dc`, { from: at0(id, "dc"), to: at0(`${id}-bb`, "line") }, []);
   } else if (made.kind === "generator") {
     part(draft, `${id}-cb`, "breaker", id, { x: x + 3, y: y + 7.6 }, { rotation: 90 }, { position: "main", mount: "bolt-on", poles: 2 });
     factory(draft, `${id}-out`, { from: at0(id, "load"), to: at0(`${id}-cb`, "line") }, [{ x: x + 3, y: y + 6.6 }, { x: x + 3, y: y + 7.6 }]);
-    bond(draft, `${id}-strap`, id, "neutral strap", "NS-", { x: x + 10, y: y + 9 });
+    bond(draft, `${id}-strap`, id, "neutral strap", "NS-", { x: x + 6.5, y: y + 10.4 });
   } else if (made.kind === "meter-main" && made.bus) {
     const top: Point = { x: x + made.bus.x, y: y + made.bus.y };
     part(draft, `${id}-main`, "breaker", id, { x: top.x, y: top.y - 4 }, { rotation: 90, spaces: [] }, { position: "main", mount: "bolt-on", poles: 2 });

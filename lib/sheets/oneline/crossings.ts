@@ -1,6 +1,7 @@
 import type { DrawingGraph } from "@/lib/diagram/graph";
 import { endpointPosition } from "@/lib/diagram/graph";
 import type { Circuit, Point } from "@/lib/diagram/schema";
+import { isDrawn } from "./appearance";
 
 /** Half width of the hop with which one line crosses another, grid units. */
 export const HOP = 0.42;
@@ -10,6 +11,9 @@ const NEAR = 0.05;
 export function circuitLine(graph: DrawingGraph, id: string): { points: readonly Point[]; routed: boolean } {
   const circuit = graph.drawing.circuits[id] as Circuit;
   if (circuit.points.length >= 2) return { points: circuit.points, routed: true };
+  // Wiring to a part that its carrier's symbol stands for lies inside that symbol.
+  const hidden = (["from", "to"] as const).some((end) => graph.drawing.equipment[circuit[end].equipment] !== undefined && !isDrawn(graph, circuit[end].equipment));
+  if (circuit.wiring === "factory" && hidden) return { points: [], routed: true };
   const from = endpointPosition(graph, circuit, "from");
   const to = endpointPosition(graph, circuit, "to");
   if (!from || !to || (Math.abs(from.x - to.x) < NEAR && Math.abs(from.y - to.y) < NEAR)) return { points: [], routed: true };

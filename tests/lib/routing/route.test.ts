@@ -74,6 +74,12 @@ describe("routing one line", () => {
     expect(once()).toEqual(once());
   });
 
+  it("bends between two ends that may be left any way", () => {
+    const { points } = route({ from: end(0, 0), to: end(6, 9), via: [] }, empty);
+    expect(isOrthogonal(points)).toBe(true);
+    expect(points).toHaveLength(3);
+  });
+
   it("says so when an end is walled in", () => {
     const wall = [{ x: -3, y: -3, width: 1, height: 6 }, { x: 2, y: -3, width: 1, height: 6 }, { x: -3, y: -4, width: 6, height: 1.5 }, { x: -3, y: 2.5, width: 6, height: 1.5 }];
     const { points, blocked } = route({ from: end(0, 0), to: end(20, 0), via: [] }, { obstacles: wall, lines: [] });
