@@ -1,21 +1,19 @@
 import { WEIGHTS, path, type PathPrimitive } from "@/lib/sheets/primitives";
-import { SHAPES } from "./shapes";
+import { symbol as symbolShape, type SymbolShape } from "@/lib/symbols";
 
 export interface DrawnShape {
   paths: readonly PathPrimitive[];
   /** Letters in the symbol, px from its origin. */
-  texts: readonly { x: number; y: number; text: string; size: number }[];
+  texts: SymbolShape["texts"];
 }
 
 /** A symbol as primitives, px from its origin. An unknown name is a fault of the caller. */
 export function shape(symbol: string): DrawnShape {
-  const found = SHAPES[symbol];
-  if (!found) throw new RangeError(`no symbol is named ${symbol}`);
-  const { lead, stroke, fill, dash } = found.paths;
+  const { paths: { lead, stroke, fill, dash }, texts } = symbolShape(symbol);
   const paths: PathPrimitive[] = [];
   if (lead) paths.push(path(lead, { weight: WEIGHTS.lead }));
   if (stroke) paths.push(path(stroke, { weight: WEIGHTS.symbol, cap: "round" }));
   if (dash) paths.push(path(dash, { weight: WEIGHTS.symbol, dash: "link" }));
   if (fill) paths.push(path(fill, { stroke: null, fill: "ink" }));
-  return { paths, texts: found.texts };
+  return { paths, texts };
 }
