@@ -4,10 +4,12 @@ import type { CounterAnswer, CounterRevision } from "@/lib/api";
 import { ApiProblem, api } from "@/lib/client/api";
 import { calendarWords, dateWords, momentWords, sizeWords } from "@/lib/client/dates";
 import { useCounterJob } from "@/lib/client/queries";
+import { PlaceLine } from "@/components/jobs/PlaceLine";
 import { Caution } from "@/components/ui/Caution";
 import { EmptyNote, ErrorNote, Skeleton } from "@/components/ui/Notes";
 import { CounterBar } from "./CounterBar";
 import { Digest } from "./Digest";
+import { SealedPicture } from "./SealedPicture";
 import { SealState } from "./SealState";
 
 /** One job at the counter: is there a sealed set, is it the current one, and the file itself. */
@@ -17,7 +19,7 @@ export function CounterJob({ jobId }: { jobId: string }) {
   return (
     <div className="min-h-full bg-panel">
       <CounterBar place={job.data?.jurisdiction ?? null} />
-      <main className="mx-auto max-w-[1360px] px-10 py-9 phone:px-4">
+      <main className="mx-auto max-w-[1520px] px-10 py-9 phone:px-4">
         {job.isPending && <Skeleton lines={4} />}
         {job.isError && <ErrorNote error={job.error} {...(missing ? { title: "There is no such permit" } : { onRetry: () => void job.refetch() })} />}
         {job.data && <Permit job={job.data} />}
@@ -29,18 +31,17 @@ export function CounterJob({ jobId }: { jobId: string }) {
 function Permit({ job }: { job: CounterAnswer }) {
   const [current] = job.revisions.filter((each) => each.state !== "superseded");
   const earlier = job.revisions.filter((each) => each.id !== current?.id);
-  const address = job.addressLines.split("\n").map((part) => part.trim()).filter(Boolean).join(", ");
   return (
-    <div className="grid grid-cols-[minmax(0,1fr)_minmax(0,460px)] gap-14 narrow:gap-9 phone:grid-cols-1">
+    <div className="grid grid-cols-[minmax(0,512px)_minmax(0,1fr)] gap-12 narrow:grid-cols-[minmax(0,420px)_minmax(0,1fr)] narrow:gap-8 phone:grid-cols-1">
       <div>
         <p className="text-finding font-strong text-ink2">{job.permitNumber || `Job ${job.number}`}</p>
         <h1 className="text-counter font-heading stretch-heading tracking-[-0.015em] narrow:text-[34px]">{job.name}</h1>
-        <p className="mt-1 text-finding text-ink2">{[address, job.parcel && `Parcel ${job.parcel}`].filter(Boolean).join(". ")}</p>
+        <p className="mt-1 text-finding text-ink2"><PlaceLine addressLines={job.addressLines} parcel={job.parcel} /></p>
         {current ? (
           <>
             <SealState revision={current} replaced={earlier[0] ?? null} />
-            <a href={api.sheetsUrl(current.id)} className="mt-6 block bg-ink px-6 py-4 text-onink hover:bg-ink2">
-              <span className="block text-[20px] font-heading">Download the sealed set</span>
+            <a href={api.sheetsUrl(current.id)} className={`mt-6 block border border-ink px-6 py-4 ${current.state === "void" ? "bg-vellum hover:bg-paper" : "bg-ink text-onink hover:bg-ink2"}`}>
+              <span className="block text-[20px] font-heading">{current.state === "void" ? "Download what was sealed" : "Download the sealed set"}</span>
               <span className="text-text">{[current.sheetSet.sheets && `${current.sheetSet.sheets} ${current.sheetSet.sheets === 1 ? "sheet" : "sheets"}`, "one PDF", current.sheetSet.bytes && sizeWords(current.sheetSet.bytes)].filter(Boolean).join(", ")}</span>
             </a>
             <Caution className="mt-7" />
@@ -53,6 +54,7 @@ function Permit({ job }: { job: CounterAnswer }) {
         )}
       </div>
       <div>
+        {current && <SealedPicture revisionId={current.id} />}
         {current && <Facts revision={current} />}
         {earlier.length > 0 && <Earlier revisions={earlier} />}
       </div>
@@ -71,15 +73,17 @@ function Facts({ revision }: { revision: CounterRevision }) {
     ["Checked", `${revision.rulesRun} rules run: must-fix ${counts.mustFix}, needs data ${counts.needsData}, accepted in writing ${counts.accepted}`],
   ];
   return (
-    <section className="border border-ink bg-vellum p-6">
+    <section className="mt-8 border border-ink bg-vellum p-6">
       <h2 className="border-b border-ink pb-3 text-heading font-heading stretch-heading">What was sealed</h2>
-      <dl className="text-text">
+      <dl className="grid grid-cols-2 gap-x-8 text-text narrow:grid-cols-1">
         {rows.map(([name, value]) => (
           <div key={name} className="grid grid-cols-[104px_minmax(0,1fr)] border-b border-desk2 py-2"><dt className="text-ink2">{name}</dt><dd>{value}</dd></div>
         ))}
       </dl>
-      <Digest name="File digest" digest={revision.sheetSet.fileDigest} note="SHA-256 of the file you download. It stands nowhere in the file." />
-      <Digest name="Drawing digest" digest={revision.drawingDigest} note={`SHA-256 of the drawing with rule set ${revision.ruleSet}. This one is printed on each sheet.`} />
+      <div className="grid grid-cols-2 gap-x-8 narrow:grid-cols-1">
+        <Digest name="File digest" digest={revision.sheetSet.fileDigest} note="SHA-256 of the file you download. It stands nowhere in the file." />
+        <Digest name="Drawing digest" digest={revision.drawingDigest} note={`SHA-256 of the drawing with rule set ${revision.ruleSet}. This one is printed on each sheet.`} />
+      </div>
     </section>
   );
 }

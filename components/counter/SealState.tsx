@@ -14,7 +14,7 @@ export function SealState({ revision, replaced }: { revision: CounterRevision; r
         </p>
         <p className="mt-1 max-w-[56ch] text-finding">
           {isVoid && revision.voidedAt && `The drawing was changed after the seal, ${momentWords(revision.voidedAt)}. The file below is what was sealed; it no longer shows the drawing. `}
-          Sealed {dateWords(seal.sealedAt)} by {seal.licensee}, {seal.licenseNumber}. Seal code {seal.sealCode}.
+          Sealed {dateWords(seal.sealedAt)} by {seal.licensee}, <span className="whitespace-nowrap">{seal.licenseNumber}</span>. Seal code <span className="whitespace-nowrap">{seal.sealCode}</span>.
           {replaced && ` It replaces Rev ${replaced.letter} of ${dateWords(replaced.seal.sealedAt)}.`}
         </p>
       </div>

@@ -12,6 +12,7 @@ import { RedlineCounts } from "@/components/ui/RedlineMark";
 import { StateStamp } from "@/components/ui/StateStamp";
 import { MembersPanel } from "./MembersPanel";
 import { OfficeBar } from "./OfficeBar";
+import { PlaceLine } from "./PlaceLine";
 import { RevisionsPanel } from "./RevisionsPanel";
 import { SheetPicture } from "./SheetPicture";
 import { SitePanel } from "./SitePanel";
@@ -34,14 +35,13 @@ export function JobPage({ jobId }: { jobId: string }) {
 }
 
 function Desk({ job }: { job: JobAnswer }) {
-  const address = job.addressLines.split("\n").map((part) => part.trim()).filter(Boolean).join(", ");
   return (
     <>
       <div className="mb-5 flex flex-wrap items-end justify-between gap-4">
         <div className="min-w-0">
           <p className="font-lettering text-[16px] text-ink2">{job.number}</p>
           <h1 className="text-[34px] leading-tight font-heading stretch-heading tracking-[-0.015em] narrow:text-title">{job.name}</h1>
-          <p className="mt-1 text-finding text-ink2">{[address, job.parcel && `Parcel ${job.parcel}`].filter(Boolean).join(". ") || "No address yet"}</p>
+          <p className="mt-1 text-finding text-ink2"><PlaceLine addressLines={job.addressLines} parcel={job.parcel} empty="No address yet" /></p>
         </div>
         <div className="flex items-center gap-4">
           <span className="text-text text-ink2">{job.revision ? `Rev ${job.revision}` : "Not issued"}</span>

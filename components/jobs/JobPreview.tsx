@@ -2,17 +2,17 @@ import type { JobLine } from "@/lib/api";
 import { LinkButton } from "@/components/ui/Button";
 import { RedlineMark, type MarkKind } from "@/components/ui/RedlineMark";
 import { Caution } from "@/components/ui/Caution";
+import { PlaceLine } from "./PlaceLine";
 import { SheetPicture } from "./SheetPicture";
 import { paths } from "./paths";
 
 /** The chosen job: its sheet in small, what it is, and what comes next. */
 export function JobPreview({ job }: { job: JobLine }) {
-  const address = job.addressLines.split("\n").map((part) => part.trim()).filter(Boolean).join(", ");
   return (
     <aside aria-label={job.name} className="min-h-0 overflow-y-auto pr-2 pb-4 phone:mt-4">
       <SheetPicture jobId={job.id} changedAt={job.changedAt} />
       <h2 className="mt-5 text-[25px] leading-tight font-heading stretch-heading tracking-[-0.01em] narrow:text-heading">{job.name}</h2>
-      <p className="mt-1 text-finding text-ink2 narrow:text-text">{[address, job.parcel && `Parcel ${job.parcel}`].filter(Boolean).join(". ") || "No address yet"}</p>
+      <p className="mt-1 text-finding text-ink2 narrow:text-text"><PlaceLine addressLines={job.addressLines} parcel={job.parcel} empty="No address yet" /></p>
       <dl className="mt-4 grid grid-cols-[86px_minmax(0,1fr)] border-t border-ink text-text">
         <Fact name="Code">{`NEC ${job.edition}${job.jurisdiction ? `, ${job.jurisdiction}` : ""}`}</Fact>
         <Fact name="Licensee">{job.licensees.join(", ") || "none on the job yet"}</Fact>
@@ -43,7 +43,7 @@ function Next({ job }: { job: JobLine }) {
   const { counts, state } = job;
   const steps: { kind: MarkKind; number?: number; text: string }[] = [];
   if (state === "in review") steps.push({ kind: "note", text: `Rev ${job.revision} is with the licensee.` });
-  if (state === "void") steps.push({ kind: "must-fix", text: `The drawing was changed after Rev ${job.revision} was sealed. Issue the change, or take it back.` });
+  if (state === "void") steps.push({ kind: "note", text: `The drawing was changed after Rev ${job.revision} was sealed. Issue the change, or take it back.` });
   if (counts && counts.mustFix > 0) steps.push({ kind: "must-fix", number: counts.mustFix, text: `Clear ${plural(counts.mustFix, "must-fix redline", "must-fix redlines")}, or send ${counts.mustFix === 1 ? "it" : "them"} along to review.` });
   if (counts && counts.needsData > 0) steps.push({ kind: "needs-data", number: counts.needsData, text: `Find ${plural(counts.needsData, "missing value", "missing values")}.` });
   if (counts && counts.shouldFix > 0) steps.push({ kind: "should-fix", number: counts.shouldFix, text: `Look at ${plural(counts.shouldFix, "should-fix redline", "should-fix redlines")}.` });

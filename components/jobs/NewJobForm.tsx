@@ -87,7 +87,7 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
         )}
         <TextField label="Job number" placeholder="26-040" autoFocus error={errors.number?.message} {...register("number")} />
         <TextField label="Name" placeholder="Place or owner" error={errors.name?.message} {...register("name")} />
-        <PlaceFields />
+        <PlaceFields contractorHint="Left empty: your company." />
       </FormSection>
       <FormSection title="Jurisdiction" text="Whose code is adopted, and what was amended locally. Amendments of a known jurisdiction come along.">
         <SelectField

@@ -3,7 +3,7 @@ import { TextArea, TextField } from "@/components/ui/Field";
 import type { PlaceForm } from "./siteForm";
 
 /** Title-block facts of the site. */
-export function PlaceFields() {
+export function PlaceFields({ contractorHint }: { contractorHint?: string }) {
   const { register, formState: { errors } } = useFormContext<PlaceForm>();
   return (
     <>
@@ -12,7 +12,7 @@ export function PlaceFields() {
       <TextField label="Parcel" error={errors.parcel?.message} {...register("parcel")} />
       <TextField label="Owner" error={errors.owner?.message} {...register("owner")} />
       <TextField label="Prepared by" error={errors.preparer?.message} {...register("preparer")} />
-      <TextField label="Contractor" hint="Left empty: your company." error={errors.contractor?.message} {...register("contractor")} />
+      <TextField label="Contractor" hint={contractorHint} error={errors.contractor?.message} {...register("contractor")} />
       <TextField label="Permit number" placeholder="not yet" error={errors.permitNumber?.message} {...register("permitNumber")} />
     </>
   );

@@ -23,9 +23,12 @@ const sequence = async () => (await now()).sequence as number;
 describe("saving a drawing", () => {
   it("keeps an edit under the next number, with its author and title", async () => {
     const base = await sequence();
+    await new Promise((resolve) => setTimeout(resolve, 20));
+    const started = Date.now();
     const answer = await save(owner, drawingId, base, place("ds-1", "DS-1"), { title: "Place DS-1" });
     expect(answer).toMatchObject({ status: 200, body: { sequence: base + 1, rebased: [] } });
     expect((await now()).drawing.equipment["ds-1"].tag).toBe("DS-1");
+    expect(Date.parse((await request("GET", `/api/jobs/${jobId}`, { as: owner })).body.changedAt)).toBeGreaterThanOrEqual(started);
     const journal = await request("GET", `/api/drawings/${drawingId}/patches?since=${base}`, { as: other });
     expect(journal.body.entries).toMatchObject([{ sequence: base + 1, author: "First Administrator", title: "Place DS-1" }]);
   });

@@ -154,6 +154,11 @@ describe("sealing", () => {
     expect(file.bytes.equals(bytes)).toBe(true);
     expect([file.headers.get("content-type"), file.headers.get("content-disposition"), file.headers.get("x-file-digest")]).toEqual(["application/pdf", 'attachment; filename="26-T-1-SET-A.pdf"', digest]);
     expect((await request("GET", "/api/counter", { as: clerk })).body.jobs[0].current).toMatchObject({ letter: "A", state: "sealed" });
+    const job = (await request("GET", `/api/jobs/${jobId}`, { as: owner })).body;
+    const listed = (await request("GET", "/api/jobs", { as: owner })).body.jobs.find((each: { id: string }) => each.id === jobId);
+    const { check } = (await revision(licensee, id)).body;
+    expect(check.counts.accepted).toBeGreaterThan(0);
+    expect([job.counts, listed.counts]).toEqual([check.counts, check.counts]);
   });
 
   it("is done once: no second seal, no return, no other bytes", async () => {

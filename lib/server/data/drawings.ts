@@ -1,10 +1,6 @@
 import "server-only";
 import type { DrawingAnswer, JournalEntry, SaveAnswer } from "@/lib/api";
 import { may } from "@/lib/policy";
-import type { CheckResult } from "@/lib/rules/engine/types";
-import { check } from "@/lib/rules/engine/run";
-import { RULE_SET_VERSION } from "@/lib/rules";
-import type { Drawing } from "@/models";
 import { notFound } from "@/lib/server/http/problem";
 import { jobAccess, type Actor } from "./actor";
 import { database, inTransaction } from "./database";
@@ -39,16 +35,4 @@ export async function savesSince(actor: Actor, drawingId: string, since: number)
   if (!drawing) throw notFound();
   await jobAccess(actor, drawing.jobId, "drawing.view");
   return { sequence: drawing.sequence, entries: await entriesAfter(drawingId, since) };
-}
-
-/** Counts of the draft's check for lists, kept until the drawing or the rule set changes. */
-export async function draftCounts(drawing: Drawing): Promise<CheckResult["counts"]> {
-  if (drawing.checkCounts && drawing.checkedSequence === drawing.sequence && drawing.checkedRuleSet === RULE_SET_VERSION) return drawing.checkCounts;
-  const { counts } = check(drawing.document);
-  // Not part of anyone's edit: `silent` leaves the time of the last change alone.
-  await database().Drawing.update(
-    { checkCounts: counts, checkedSequence: drawing.sequence, checkedRuleSet: RULE_SET_VERSION },
-    { where: { id: drawing.id, sequence: drawing.sequence }, silent: true },
-  );
-  return counts;
 }

@@ -12,7 +12,7 @@ import { conflict, notFound, unprocessable } from "@/lib/server/http/problem";
 import { companyAccess, jobAccess, type Actor } from "./actor";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
-import { draftCounts } from "./drawings";
+import { shownCounts } from "./counts";
 import { writeSave } from "./journal";
 import { jurisdictionAnswer, makeJurisdiction, visibleJurisdiction } from "./jurisdictions";
 import { draftLetter } from "./letters";
@@ -86,7 +86,7 @@ export async function listJobs(actor: Actor): Promise<JobLine[]> {
 async function jobLine(job: Job, roles: Role[], revision: Revision | null, actor: Actor): Promise<JobLine> {
   const { drawing } = job;
   if (!drawing) throw notFound();
-  const counts = await draftCounts(drawing);
+  const counts = await shownCounts(drawing, revision);
   const licensees = (job.members ?? []).filter((each) => each.roles.includes("licensee"));
   const block = drawing.document.sheet.titleBlock;
   return {
@@ -104,7 +104,7 @@ const placeLine = (addressLines: string) => addressLines.split(/[\n,]/).map((par
 /** Latest revision of each job; of one that was taken to review while another is sealed, the one in review. */
 async function latestRevisions(jobIds: readonly string[]): Promise<Map<string, Revision>> {
   const rows = await database().Revision.findAll({
-    where: { jobId: [...jobIds] }, attributes: ["id", "jobId", "letter", "issue", "state", "issuedAt", "issuedBy", "returnedAt"], order: [["issuedAt", "ASC"]],
+    where: { jobId: [...jobIds] }, attributes: ["id", "jobId", "letter", "state", "sequence", "ruleSet", "issuedAt"], order: [["issuedAt", "ASC"]],
   });
   return new Map(rows.map((row) => [row.jobId, row]));
 }
@@ -127,7 +127,7 @@ export async function getJob(actor: Actor, jobId: string): Promise<JobAnswer> {
     id: job.id, companyId: job.companyId, companyName: company.name, number: job.number, name: job.name, addressLines: block.addressLines,
     parcel: block.parcel, owner: block.owner, scope: block.scope, permitNumber: block.permitNumber, preparer: block.preparer, contractor: block.contractor,
     jurisdiction: jurisdiction && jurisdictionAnswer(jurisdiction), site: drawing.document.site, roles, state: shown?.state ?? "draft",
-    revision: shown?.letter ?? null, nextLetter: await draftLetter(jobId), counts: office ? await draftCounts(drawing) : null,
+    revision: shown?.letter ?? null, nextLetter: await draftLetter(jobId), counts: office ? await shownCounts(drawing, revision) : null,
     changedAt: job.updatedAt.toISOString(),
     may: {
       edit: may(roles, "job.edit"), manageMembers: may(roles, "members.manage"), viewDrawing: office, editDrawing: may(roles, "drawing.edit"),

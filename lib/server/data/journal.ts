@@ -12,6 +12,7 @@ import type { Actor } from "./actor";
 import { audit } from "./audit";
 import { database } from "./database";
 import { markSealAgainstDraft } from "./sheetSets";
+import { touchJob } from "./touch";
 
 /** A drawing larger than this is no one-line, bytes of JSON. */
 const DOCUMENT_BYTES = 4 * 1024 * 1024;
@@ -102,14 +103,14 @@ function merge(document: DrawingDocument, patches: PatchOperation[], refuse: (er
 async function commit(
   drawing: Drawing, merged: DrawingDocument, save: Save, theirs: JournalEntry[], actor: Actor, transaction: Transaction,
 ): Promise<SaveAnswer> {
-  const { DrawingPatch, Job } = database();
+  const { DrawingPatch } = database();
   const sequence = drawing.sequence + 1;
   await DrawingPatch.create(
     { drawingId: drawing.id, sequence, saveId: save.saveId, baseSequence: save.baseSequence, authorId: actor.id, title: save.title, patches: save.patches },
     { transaction },
   );
   await drawing.update({ document: merged, sequence, updatedBy: actor.id }, { transaction });
-  await Job.update({ updatedAt: new Date() }, { where: { id: drawing.jobId }, transaction });
+  await touchJob(drawing.jobId, transaction);
   await markSealAgainstDraft(drawing.jobId, merged, transaction, save.title);
   await audit(transaction, actor, {
     action: "drawing.save", subject: `drawings/${drawing.id}`, jobId: drawing.jobId, detail: { sequence, saveId: save.saveId, title: save.title, operations: save.patches.length },

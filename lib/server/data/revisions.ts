@@ -14,6 +14,7 @@ import { database, inTransaction } from "./database";
 import { draftLetter } from "./letters";
 import { licenseOf, today } from "./licenses";
 import { checkOf, queueSheets, sheetSetAnswer } from "./sheetSets";
+import { touchJob } from "./touch";
 
 /** A revision locked for a change, with the job and the person's roles in it. @throws Problem 404 or 403 */
 export async function lockRevision(actor: Actor, revisionId: string, action: JobAction, transaction: Transaction): Promise<{ revision: Revision; job: Job; roles: Role[] }> {
@@ -36,7 +37,7 @@ export function step(revision: Revision, event: RevisionEvent) {
 
 /** Issues the drawing as it is for review. The server checks it; must-fix redlines go along and block the seal. */
 export async function issueRevision(actor: Actor, jobId: string, input: z.output<typeof issueInput>): Promise<{ id: string }> {
-  const { Drawing, Job, Revision } = database();
+  const { Drawing, Revision } = database();
   return inTransaction(async (transaction) => {
     await jobAccess(actor, jobId, "revision.issue", { transaction });
     const drawing = await Drawing.findOne({ where: { jobId }, transaction, lock: transaction.LOCK.UPDATE });
@@ -55,7 +56,7 @@ export async function issueRevision(actor: Actor, jobId: string, input: z.output
       { transaction },
     );
     await carryAcceptances(revision, transaction);
-    await Job.update({ updatedAt: new Date() }, { where: { id: jobId }, transaction });
+    await touchJob(jobId, transaction);
     await queueSheets(revision.id, "preview", transaction);
     await audit(transaction, actor, {
       action: "revision.issue", subject: `revisions/${revision.id}`, jobId, detail: { letter, issue, sequence: drawing.sequence, digest: result.digest, counts: result.counts },
@@ -175,7 +176,7 @@ export async function returnRevision(actor: Actor, revisionId: string, comment: 
     const { revision, job } = await lockRevision(actor, revisionId, "revision.return", transaction);
     const state = step(revision, "return");
     await revision.update({ state, returnedBy: actor.id, returnedAt: new Date(), returnComment: comment }, { transaction });
-    await database().Job.update({ updatedAt: new Date() }, { where: { id: job.id }, transaction });
+    await touchJob(job.id, transaction);
     await audit(transaction, actor, { action: "revision.return", subject: `revisions/${revision.id}`, jobId: job.id, detail: { letter: revision.letter } });
   });
   return getRevision(actor, revisionId);

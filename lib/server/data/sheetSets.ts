@@ -8,6 +8,7 @@ import { nextState, withAcceptances } from "@/lib/workflow";
 import type { Revision, Seal, SheetSet } from "@/models";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
+import { touchJob } from "./touch";
 
 /** One line of the revision table on the sheets, oldest first. */
 export interface RevisionTableRow { letter: string; description: string; date: string; by: string }
@@ -119,12 +120,12 @@ export async function finishSheets(revisionId: string, sealed: boolean, drawn: D
 }
 
 async function completeSeal(revision: Revision, drawn: DrawnSheets, transaction: Transaction): Promise<void> {
-  const { Revision, Seal, Job } = database();
+  const { Revision, Seal } = database();
   const now = new Date();
   await Revision.update({ state: "superseded", supersededAt: now }, { where: { jobId: revision.jobId, state: ["sealed", "void"] }, transaction });
   await revision.update({ state: "sealed" }, { transaction });
   await Seal.update({ completedAt: now }, { where: { revisionId: revision.id }, transaction });
-  await Job.update({ updatedAt: now }, { where: { id: revision.jobId }, transaction });
+  await touchJob(revision.jobId, transaction);
   await audit(transaction, null, {
     action: "revision.sealed", subject: `revisions/${revision.id}`, jobId: revision.jobId,
     detail: { letter: revision.letter, drawingDigest: revision.digest, fileDigest: drawn.digest },
