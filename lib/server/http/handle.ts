@@ -8,7 +8,7 @@ import type { Actor } from "@/lib/server/data/actor";
 import { env } from "@/lib/server/env";
 import { readJson } from "./body";
 import { Problem, forbidden, notFound, signInNeeded } from "./problem";
-import { useAllowance } from "./rateLimit";
+import { takeAllowance } from "./rateLimit";
 
 interface Context<Params, Query, Body> { actor: Actor; params: Params; query: Query; body: Body; request: NextRequest; requestId: string }
 interface Segment { params: Promise<Record<string, string | string[] | undefined>> }
@@ -43,7 +43,7 @@ export function handle<Params = undefined, Query = undefined, Body = undefined>(
     checkOrigin(request);
     const person = await personOf(request.cookies);
     if (!person) throw signInNeeded();
-    useAllowance(`${counter}:${person.id}`, route.perMinute ?? PER_MINUTE, 60);
+    takeAllowance(`${counter}:${person.id}`, route.perMinute ?? PER_MINUTE, 60);
     const params = parse(route.params, await segment.params, () => notFound());
     const query = parse(route.query, Object.fromEntries(request.nextUrl.searchParams), invalid);
     const body = parse(route.body, route.body ? await readJson(request, route.maxBytes ?? BODY_BYTES) : undefined, invalid);
@@ -55,7 +55,7 @@ export function handle<Params = undefined, Query = undefined, Body = undefined>(
 export function handleOpen<Body = undefined>(route: OpenRoute<Body>): Handler {
   return (request) => answered(request, route.status, async (requestId) => {
     checkOrigin(request);
-    useAllowance(`open:${request.nextUrl.pathname}:${request.headers.get("x-forwarded-for") ?? "local"}`, route.perMinute ?? 60, 60);
+    takeAllowance(`open:${request.nextUrl.pathname}:${request.headers.get("x-forwarded-for") ?? "local"}`, route.perMinute ?? 60, 60);
     const body = parse(route.body, route.body ? await readJson(request, 64 * 1024) : undefined, invalid);
     return route.run({ body, request, requestId });
   });

@@ -20,7 +20,7 @@ function current(key: string, seconds: number, now: number): Window {
  * Counts one use of `key` in a window of this process.
  * @throws Problem 429 when it was used more than `most` times within `seconds`
  */
-export function useAllowance(key: string, most: number, seconds: number, now = Date.now()): void {
+export function takeAllowance(key: string, most: number, seconds: number, now = Date.now()): void {
   const window = current(key, seconds, now);
   if (window.count >= most) throw tooMany((window.until - now) / 1000);
   window.count += 1;
