@@ -65,7 +65,7 @@ export function Grid<Row>(props: GridProps<Row>) {
                   return (
                     <div
                       key={column.id} id={cellId(item.index, index)} role="gridcell" aria-colindex={index + 1} aria-selected={inRange(range, item.index, index)}
-                      aria-readonly={!column.editable(row)} title={mark?.statement} aria-description={mark?.statement}
+                      aria-readonly={!column.editable(row)} title={mark?.statement}
                       className={`h-row flex-none overflow-hidden text-ellipsis whitespace-nowrap border-b border-r border-b-g2 border-r-g1 px-1.5 leading-[27px] ${ground} ${column.right ? "text-right" : ""} ${groupStart ? "border-l-[1.5px] border-l-ink" : ""} ${focused ? "outline-2 -outline-offset-2 outline-copper" : ""} ${column.editable(row) ? "" : "text-ink2"}`}
                       style={{ width: column.width }}
                       onMouseDown={(event) => { if (!editing) { grid.go({ row: item.index, column: index }, event.shiftKey); scroller.current?.focus({ preventScroll: true }); event.preventDefault(); } }}
@@ -74,7 +74,7 @@ export function Grid<Row>(props: GridProps<Row>) {
                     >
                       {editing
                         ? <CellInput column={column} text={edit.text} replace={edit.replace} onText={(text) => grid.setEdit({ ...edit, text })} onKey={(event) => { grid.onEditKey(event); if (["Enter", "Tab", "Escape"].includes(event.key)) scroller.current?.focus({ preventScroll: true }); }} onLeave={() => grid.finish({ row: 0, column: 0 })} />
-                        : <span className={mark ? WAVE_CLASS[mark.kind] : ""}>{column.text(row) || (mark ? "not known" : "")}</span>}
+                        : <><span className={mark ? WAVE_CLASS[mark.kind] : ""}>{column.text(row) || (mark ? "not known" : "")}</span>{mark && <span className="sr-only">, {mark.statement}</span>}</>}
                     </div>
                   );
                 })}

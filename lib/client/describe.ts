@@ -7,7 +7,7 @@ export function tagOf(graph: DrawingGraph, ref: ElementRef): string {
   const { drawing } = graph;
   switch (ref.collection) {
     case "equipment": return drawing.equipment[ref.id]?.tag || (drawing.equipment[ref.id] ? graph.kind(ref.id).title : "");
-    case "circuits": return drawing.circuits[ref.id]?.tag || "circuit";
+    case "circuits": return drawing.circuits[ref.id]?.tag || (drawing.circuits[ref.id]?.wiring === "factory" ? "factory wiring" : "circuit");
     case "raceways": return drawing.raceways[ref.id]?.tag || drawing.raceways[ref.id]?.kind || "";
     case "bonds": return drawing.bonds[ref.id]?.tag || drawing.bonds[ref.id]?.kind || "";
     case "interlocks": return drawing.interlocks[ref.id]?.tag || "interlock";
@@ -53,7 +53,7 @@ export function kindOf(graph: DrawingGraph, ref: ElementRef): string {
 export function nameOf(graph: DrawingGraph, ref: ElementRef): string {
   const kind = kindOf(graph, ref);
   const tag = tagOf(graph, ref);
-  if (ref.collection === "circuits") return `${kind} ${tag}, ${end(graph, ref.id, "from")} to ${end(graph, ref.id, "to")}`;
+  if (ref.collection === "circuits") return `${kind}${graph.drawing.circuits[ref.id]?.tag ? ` ${tag}` : ""}, ${end(graph, ref.id, "from")} to ${end(graph, ref.id, "to")}`;
   if (ref.collection === "equipment") {
     const equipment = graph.drawing.equipment[ref.id];
     const ratings = equipment ? graph.kind(ref.id).annotation(equipment.props as never).join(", ") : "";

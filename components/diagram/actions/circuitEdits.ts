@@ -1,4 +1,3 @@
-import type { Step } from "@/lib/calc/types";
 import { applyAll } from "@/lib/client/gate";
 import { routeFor } from "@/lib/client/routes";
 import type { Command } from "@/lib/diagram/commands";
@@ -26,7 +25,3 @@ export function rerouteWith(graph: DrawingGraph, id: string, section: string, ro
   if (!applied.ok || !circuit || circuit.bends.length > 0) return { commands: [set], title: `route ${circuit?.tag ?? ""}`.trim() };
   return { commands: [set, { type: "routeCircuit", circuit: id, points: routeFor(buildGraph(applied.drawing), id) }], title: `route ${circuit.tag}` };
 }
-
-/** Result of sizing: the steps with what they lead to, or why it cannot be worked out yet. */
-export type Sizing = { readonly reason: string } | { readonly steps: readonly Step[]; readonly result: string; readonly commands: readonly Command[]; readonly title: string };
-export const sizeEdit = (_graph: DrawingGraph, _id: string): Sizing => ({ reason: "not yet" });

@@ -73,7 +73,7 @@ export function InterlockForm({ id }: { id: string }) {
       <FieldGroup title="Interlock">
         <ChoiceField label="Means" wide value={interlock.kind} options={INTERLOCK_KINDS} unknown={false} readOnly={readOnly} onCommit={(value) => set("kind", value)} />
         <ChoiceField label="Listed" value={yes(interlock.listed)} options={["yes", "no"]} readOnly={readOnly} mark={mark("listed")} onCommit={(value) => set("listed", fromYes(value))} />
-        <TextField label="Note" wide value={interlock.note} readOnly={readOnly} onCommit={(text) => set("note", text)} />
+        <TextField label="Note" empty="none" wide value={interlock.note} readOnly={readOnly} onCommit={(text) => set("note", text)} />
       </FieldGroup>
       <fieldset>
         <legend className={`${HEADING} w-full`}>At most one closed</legend>

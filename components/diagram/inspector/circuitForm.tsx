@@ -1,5 +1,6 @@
 "use client";
-import { addSectionCommand, rerouteEdit, rerouteWith, sizeEdit, type Sizing } from "@/components/diagram/actions/circuitEdits";
+import { addSectionCommand, rerouteEdit, rerouteWith } from "@/components/diagram/actions/circuitEdits";
+import { sizeEdit, type Sizing } from "@/components/diagram/actions/sizeEdit";
 import { BUTTON, HEADING, PRIMARY } from "@/components/diagram/chrome/controls";
 import { Worksheet } from "@/components/diagram/redlines/worksheet";
 import { useEditor, useEditorStore } from "@/components/diagram/editorContext";
@@ -35,7 +36,7 @@ export function CircuitForm({ id }: { id: string }) {
         {(["from", "to"] as const).map((end) => <div key={end} className="contents"><dt className="text-ink2">{end === "from" ? "From" : "To"}</dt><dd><button type="button" className="text-left font-strong underline decoration-dotted underline-offset-2" onClick={() => jump(end)}>{circuitEnd(graph, id, end)}</button></dd></div>)}
       </dl>
       <div className="mt-2 grid grid-cols-2 gap-2">
-        <TextField label="Callout" value={circuit.callout ?? ""} readOnly={readOnly} onCommit={(text) => set("callout", text.trim() || null)} />
+        <TextField label="Callout" empty="as the tag" value={circuit.callout ?? ""} readOnly={readOnly} onCommit={(text) => set("callout", text.trim() || null)} />
         <ChoiceField label="Status" value={circuit.status} options={["new", "existing", "relocated", "removed"]} unknown={false} readOnly={readOnly} onCommit={(value) => set("status", value)} />
         <ChoiceField label="Wiring" value={circuit.wiring} options={["field", "factory"]} unknown={false} words={{ field: "field wiring", factory: "factory, inside equipment" }} wide readOnly={readOnly} onCommit={(value) => set("wiring", value)} />
       </div>
@@ -93,9 +94,9 @@ const NEW_CONDUCTOR: Conductor = { count: 1, size: null, metal: "Cu", insulation
 function ConductorFields({ label, conductor, readOnly, mark, onSet }: { label: string; conductor: Conductor | null; readOnly: boolean; mark: ReturnType<ReturnType<typeof useEdit>["mark"]>; onSet: (conductor: Conductor | null) => string | null }) {
   const update = (part: Partial<Conductor>): string | null => onSet({ ...NEW_CONDUCTOR, ...conductor, ...part });
   return (
-    <fieldset className="col-span-2 grid grid-cols-[44px_1fr_58px] gap-x-1.5 gap-y-1.5 border-t border-desk2 pt-1.5">
-      <legend className="sr-only">{label}</legend>
-      <TextField label={`${label} number`} value={conductor ? String(conductor.count) : ""} readOnly={readOnly} onCommit={(text) => { if (text.trim() === "" || text.trim() === "0") return onSet(null); const answer = readNumber(text, "", 1, 12, true); return answer.ok ? update({ count: answer.value as number }) : answer.reason; }} />
+    <fieldset className="col-span-2 grid grid-cols-[44px_1fr_62px] gap-x-1.5 gap-y-1.5 border-t border-desk2 pt-1">
+      <legend className="pt-1 text-small font-finding text-ink2">{label}</legend>
+      <TextField label="No." value={conductor ? String(conductor.count) : ""} readOnly={readOnly} onCommit={(text) => { if (text.trim() === "" || text.trim() === "0") return onSet(null); const answer = readNumber(text, "", 1, 12, true); return answer.ok ? update({ count: answer.value as number }) : answer.reason; }} />
       <TextField label="Size" value={conductor?.size ?? ""} readOnly={readOnly} mark={mark} list={CONDUCTOR_SIZES} onCommit={(text) => (text.trim() === "" ? update({ size: null }) : update({ size: text.trim().replace(/^#/, "") }))} />
       <ChoiceField label="Metal" value={conductor?.metal ?? ""} options={["Cu", "Al"]} readOnly={readOnly} onCommit={(value) => update({ metal: (value || null) as Conductor["metal"] })} />
       {conductor && <div className="col-span-3 grid grid-cols-2 gap-1.5"><ChoiceField label="Insulation" value={conductor.insulation ?? ""} options={INSULATIONS} readOnly={readOnly} onCommit={(value) => update({ insulation: (value || null) as Conductor["insulation"] })} /><TextField label="Color" value={conductor.color ?? ""} readOnly={readOnly} onCommit={(text) => update({ color: text.trim() || null })} /></div>}

@@ -43,7 +43,7 @@ export function EquipmentForm({ id }: { id: string }) {
         <TextField label="Place" value={equipment.location.place ?? ""} readOnly={readOnly} onCommit={(text) => set("location.place", text.trim() || null)} />
         <ChoiceField label="Exposure" value={equipment.location.exposure ?? ""} options={EXPOSURES} readOnly={readOnly} onCommit={(value) => set("location.exposure", value || null)} />
         <TextField label="Ambient" unit="°C" value={showValue(equipment.location.ambientC)} readOnly={readOnly} onCommit={(text) => take("location.ambientC", readNumber(text, "°C", -60, 120))} />
-        <TextField label="Note" value={equipment.note} wide readOnly={readOnly} onCommit={(text) => set("note", text)} />
+        <TextField label="Note" empty="none" value={equipment.note} wide readOnly={readOnly} onCommit={(text) => set("note", text)} />
       </FieldGroup>
     </>
   );
@@ -81,7 +81,7 @@ function Ports({ id }: { id: string }) {
 }
 
 function PortFields({ id, port }: { id: string; port: PortInfo }) {
-  const { readOnly, set, take, mark } = useEdit({ collection: "equipment", id });
+  const { readOnly, set, mark } = useEdit({ collection: "equipment", id });
   const data: PortData = port.data;
   const terminal = data.terminal;
   const base = `ports.${port.id}`;

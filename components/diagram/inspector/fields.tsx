@@ -15,6 +15,8 @@ interface FieldProps {
   readonly mark?: FieldMark | null;
   readonly hint?: string;
   readonly wide?: boolean;
+  /** Words in an empty field; a value that is needed says that it is not known. */
+  readonly empty?: string;
   /** Takes the text; the answer is why not, or null. */
   readonly onCommit: (text: string) => string | null;
 }
@@ -31,7 +33,7 @@ function Shell({ id, label, unit, mark, wide, children, refusal, hint }: { id: s
 }
 
 /** Field that is taken over on Enter or when it is left; Esc gives back what was there. */
-export function TextField({ label, value, unit, readOnly, mark, hint, wide, onCommit, list }: FieldProps & { list?: readonly string[] }) {
+export function TextField({ label, value, unit, readOnly, mark, hint, wide, empty = "not known", onCommit, list }: FieldProps & { list?: readonly string[] }) {
   const id = useId();
   const [typed, setTyped] = useState<string | null>(null);
   const [refusal, setRefusal] = useState<string | null>(null);
@@ -45,7 +47,7 @@ export function TextField({ label, value, unit, readOnly, mark, hint, wide, onCo
   return (
     <Shell id={id} label={label} refusal={refusal} {...(unit ? { unit } : {})} {...(mark ? { mark } : {})} {...(wide ? { wide } : {})} {...(hint ? { hint } : {})}>
       <input
-        id={id} className={FIELD} value={typed ?? value} readOnly={readOnly} placeholder="not known" list={list ? `${id}-list` : undefined} autoComplete="off"
+        id={id} className={FIELD} value={typed ?? value} readOnly={readOnly} placeholder={empty} list={list ? `${id}-list` : undefined} autoComplete="off"
         aria-invalid={refusal !== null} title={mark?.message}
         onChange={(event) => setTyped(event.target.value)} onBlur={commit}
         onKeyDown={(event) => {
