@@ -19,7 +19,7 @@ import { SitePanel } from "./SitePanel";
 import { paths } from "./paths";
 
 /** One job: where it stands, its revisions, its people, its site. */
-export function JobPage({ jobId }: { jobId: string }) {
+export function JobPage({ jobId, issueOpen = false }: { jobId: string; issueOpen?: boolean }) {
   const job = useJob(jobId);
   const missing = job.error instanceof ApiProblem && job.error.status === 404;
   return (
@@ -28,13 +28,13 @@ export function JobPage({ jobId }: { jobId: string }) {
       <main className="mx-auto w-full max-w-[1480px] flex-1 p-6 phone:p-3">
         {job.isPending && <div className="bg-paper"><Skeleton lines={5} /></div>}
         {job.isError && <ErrorNote error={job.error} {...(missing ? { title: "There is no such job" } : { onRetry: () => void job.refetch() })} />}
-        {job.data && <Desk job={job.data} />}
+        {job.data && <Desk job={job.data} issueOpen={issueOpen} />}
       </main>
     </div>
   );
 }
 
-function Desk({ job }: { job: JobAnswer }) {
+function Desk({ job, issueOpen }: { job: JobAnswer; issueOpen: boolean }) {
   return (
     <>
       <div className="mb-5 flex flex-wrap items-end justify-between gap-4">
@@ -53,7 +53,7 @@ function Desk({ job }: { job: JobAnswer }) {
       </div>
       <div className="grid grid-cols-[minmax(0,1fr)_440px] items-start gap-5 narrow:grid-cols-[minmax(0,1fr)_340px] phone:grid-cols-1">
         <div className="grid gap-5">
-          <RevisionsPanel job={job} />
+          <RevisionsPanel job={job} issueOpen={issueOpen} />
           <SitePanel job={job} />
         </div>
         <div className="grid gap-5">

@@ -1,6 +1,7 @@
 "use client";
 
 import Link from "next/link";
+import { useRouter } from "next/navigation";
 import { useState } from "react";
 import type { JobAnswer, RevisionLine } from "@/lib/api";
 import { api } from "@/lib/client/api";
@@ -16,9 +17,10 @@ import { Panel } from "./Panel";
 import { paths } from "./paths";
 
 /** Revisions of a job, newest first, with the draft on top. */
-export function RevisionsPanel({ job }: { job: JobAnswer }) {
+export function RevisionsPanel({ job, issueOpen = false }: { job: JobAnswer; issueOpen?: boolean }) {
+  const router = useRouter();
   const revisions = useRevisions(job.id);
-  const [issuing, setIssuing] = useState(false);
+  const [issuing, setIssuing] = useState(issueOpen);
   const rows = revisions.data?.revisions ?? [];
   const open = rows.some((row) => row.state === "in review" || row.state === "sealing");
   return (
@@ -40,7 +42,7 @@ export function RevisionsPanel({ job }: { job: JobAnswer }) {
       )}
       {rows.map((row) => <RevisionRow key={row.id} jobId={job.id} row={row} />)}
       {rows.length > 0 && <Caution compact className="m-5" />}
-      <IssueDialog jobId={job.id} letter={job.nextLetter} counts={job.counts} open={issuing} onOpenChange={setIssuing} />
+      <IssueDialog jobId={job.id} letter={job.nextLetter} counts={job.counts} open={issuing && job.may.issue} onOpenChange={setIssuing} onIssued={(id) => router.push(paths.revision(job.id, id))} />
     </Panel>
   );
 }
