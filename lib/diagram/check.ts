@@ -47,8 +47,11 @@ export function checkDocument(document: unknown): DocumentFault[] {
   if (count > MOST_ELEMENTS) return [{ path: "", message: `holds more than ${MOST_ELEMENTS} elements` }];
   const kinds = equipmentFaults(drawing);
   // Ports come from the kinds, so references are judged only on whole equipment.
-  return kinds.length > 0 ? kinds : [...referenceFaults(drawing), ...circuitFaults(drawing)];
+  return kinds.length > 0 ? kinds : connectionFaults(drawing);
 }
+
+/** References and landings that do not hold, in a document whose shape and kinds are sound. */
+export const connectionFaults = (drawing: Drawing): DocumentFault[] => [...referenceFaults(drawing), ...circuitFaults(drawing)];
 
 function equipmentFaults(drawing: Drawing): DocumentFault[] {
   const faults: DocumentFault[] = [];

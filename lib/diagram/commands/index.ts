@@ -1,4 +1,4 @@
-import { checkDocument, propertyFault } from "@/lib/diagram/check";
+import { checkDocument, connectionFaults, propertyFault } from "@/lib/diagram/check";
 import { applyPatches, edit, PatchError, pointerParts, type PatchOperation } from "@/lib/diagram/patch";
 import { ELEMENT_SCHEMAS, sheetSchema, siteSchema, type Collection, type Drawing } from "@/lib/diagram/schema";
 import { canonicalJson } from "@/lib/diagram/canonical";
@@ -27,8 +27,11 @@ const recipes: { readonly [T in Exclude<CommandType, "applySuggestion">]: Recipe
   setTitleBlock, paste,
 };
 
+/** Commands that change places on the sheet only. They run while something is dragged and cannot break a reference. */
+const PLACES: ReadonlySet<CommandType> = new Set(["moveElements", "turnElements", "resizeElement", "routeCircuit", "placeText", "setSite", "setSheet", "setTitleBlock"]);
+
 /** First fault in what the operations touched. Only touched elements are read again, so that a drag stays cheap on a large drawing. */
-function touchedFault(drawing: Drawing, patches: readonly PatchOperation[]): { reason: string; field: string } | null {
+function touchedFault(drawing: Drawing, patches: readonly PatchOperation[], type: CommandType): { reason: string; field: string } | null {
   const done = new Set<string>();
   for (const patch of patches) {
     const [map, id] = pointerParts(patch.path);
@@ -56,7 +59,9 @@ function touchedFault(drawing: Drawing, patches: readonly PatchOperation[]): { r
       }
     }
   }
-  return null;
+  if (PLACES.has(type)) return null;
+  const broken = connectionFaults(drawing).find(({ path }) => done.has(pointerParts(path).slice(0, 2).join("/")));
+  return broken ? { field: pointerParts(broken.path).slice(2).join("."), reason: `${pointerParts(broken.path).at(-1)} ${broken.message}.` } : null;
 }
 
 const named = (also: readonly string[], title: string, result: { drawing: Drawing; patches: PatchOperation[]; inverse: PatchOperation[] }): CommandResult =>
@@ -75,7 +80,7 @@ export function applyCommand(drawing: Drawing, command: Command): CommandResult 
     const result = edit(drawing, (draft) => {
       title = (recipes[command.type] as (...args: unknown[]) => string)(draft, command, (sentence: string) => also.push(sentence));
     });
-    const fault = touchedFault(result.drawing, result.patches);
+    const fault = touchedFault(result.drawing, result.patches, command.type);
     return fault ? { ok: false, ...fault } : named(also, title, result);
   } catch (error) {
     if (error instanceof Refusal) return { ok: false, reason: error.message, ...(error.field ? { field: error.field } : {}) };

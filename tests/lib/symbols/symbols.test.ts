@@ -12,7 +12,7 @@ const defaults = (definition: KindDefinition, change: Record<string, PropertyVal
 /** Every set of choices that a kind's symbol may depend on. */
 function variants(kind: KindId): Record<string, PropertyValue>[] {
   const { properties } = kindDefinition(kind);
-  const each = Object.entries(properties).flatMap(([name, property]) =>
+  const each = Object.entries(properties).flatMap(([name, property]): Record<string, PropertyValue>[] =>
     property.type === "choice" ? property.options.map((value) => ({ [name]: value })) : property.type === "flag" ? [{ [name]: true }, { [name]: false }] : []);
   return [{}, ...each];
 }
