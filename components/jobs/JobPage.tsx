@@ -2,7 +2,7 @@
 
 import type { JobAnswer } from "@/lib/api";
 import { ApiProblem } from "@/lib/client/api";
-import { whenWords } from "@/lib/client/dates";
+import { whenInSentence } from "@/lib/client/dates";
 import { useJob } from "@/lib/client/queries";
 import { BarCell } from "@/components/ui/Bar";
 import { LinkButton } from "@/components/ui/Button";
@@ -47,7 +47,7 @@ function Desk({ job, issueOpen }: { job: JobAnswer; issueOpen: boolean }) {
           <span className="text-text text-ink2">{job.revision ? `Rev ${job.revision}` : "Not issued"}</span>
           <StateStamp state={job.state} />
           <RedlineCounts counts={job.counts} />
-          <span className="text-text text-ink2">changed {whenWords(job.changedAt)}</span>
+          <span className="text-text text-ink2">changed {whenInSentence(job.changedAt)}</span>
           {job.may.viewDrawing && <LinkButton href={paths.drawing(job.id)} look="primary">Open the drawing</LinkButton>}
         </div>
       </div>

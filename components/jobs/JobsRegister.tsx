@@ -46,7 +46,7 @@ export function JobsRegister() {
           <kbd className="font-sans border border-rule px-1 text-small stretch-label">Ctrl F</kbd>
         </label>
       </OfficeBar>
-      <main className="grid min-h-0 flex-1 grid-cols-[minmax(0,1fr)_462px] gap-5 p-3 narrow:grid-cols-[minmax(0,1fr)_300px] narrow:gap-4 phone:block phone:overflow-y-auto">
+      <main className={`grid min-h-0 flex-1 gap-5 p-3 narrow:gap-4 phone:block phone:overflow-y-auto ${chosen ? "grid-cols-[minmax(0,1fr)_462px] narrow:grid-cols-[minmax(0,1fr)_300px]" : "grid-cols-1"}`}>
         <section className="flex min-h-0 flex-col bg-paper shadow-[0_0_0_1px_var(--rule),2px_3px_0_0_var(--hatch)]" aria-labelledby="jobs-heading">
           <div className="flex shrink-0 items-end gap-6 border-b-[1.5px] border-ink px-5 pt-4 narrow:gap-4">
             <h1 id="jobs-heading" className="pb-2.5 text-title font-heading stretch-heading tracking-[-0.015em]">Jobs</h1>
@@ -73,7 +73,8 @@ export function JobsRegister() {
             {shown.length > 0 && <JobsTable jobs={shown} chosenId={chosen?.id ?? null} onChoose={setChosenId} />}
           </div>
           <p className="flex shrink-0 items-center gap-1.5 px-5 py-3 text-body text-ink2 phone:hidden" aria-hidden="true">
-            <Key>↑</Key><Key>↓</Key> choose <Key>Enter</Key> open {mayCreate && <><Key>N</Key> new job</>}
+            {chosen && <><Key>↑</Key><Key>↓</Key> choose <Key>Enter</Key> open </>}
+            {mayCreate && <><Key>N</Key> new job</>}
           </p>
         </section>
         {chosen && <JobPreview job={chosen} />}

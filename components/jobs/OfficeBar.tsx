@@ -38,7 +38,7 @@ export function PersonMenu() {
   const { data } = useMe();
   const initials = (data?.name ?? "").split(/\s+/).filter(Boolean).map((word) => word.charAt(0)).slice(0, 2).join("");
   return (
-    <DropdownMenu.Root>
+    <DropdownMenu.Root modal={false}>
       <DropdownMenu.Trigger aria-label={data ? `${data.name}: account and sign-out` : "Account"} className="ml-1 grid size-8 place-items-center rounded-full border border-ink bg-paper text-small font-heading stretch-label">
         {initials}
       </DropdownMenu.Trigger>

@@ -28,21 +28,21 @@ export function RevisionsPanel({ job, issueOpen = false }: { job: JobAnswer; iss
       title="Revisions"
       aside={job.may.issue && (
         <span className="flex items-center gap-3">
-          {open && <span className="text-label text-ink2">One is in review</span>}
-          <Button size="bar" look="primary" disabled={open} onClick={() => setIssuing(true)}>Issue Rev {job.nextLetter}</Button>
+          {(open || job.empty) && <span className="text-label text-ink2">{open ? "One is in review" : "Nothing is drawn yet"}</span>}
+          <Button size="bar" look="primary" disabled={open || job.empty} onClick={() => setIssuing(true)}>Issue Rev {job.nextLetter}</Button>
         </span>
       )}
     >
       {revisions.isPending && <Skeleton lines={2} />}
       {revisions.isError && <div className="p-5"><ErrorNote error={revisions.error} onRetry={() => void revisions.refetch()} /></div>}
       {revisions.data && rows.length === 0 && (
-        <EmptyNote title="Nothing issued yet" action={job.may.editDrawing && <LinkButton href={paths.drawing(job.id)} look="primary">Open the drawing</LinkButton>}>
+        <EmptyNote title="Nothing issued yet" action={job.may.editDrawing && <LinkButton href={paths.drawing(job.id)}>Open the drawing</LinkButton>}>
           Draw the system, clear the redlines, then issue it for review. A revision stays as it was issued.
         </EmptyNote>
       )}
       {rows.map((row) => <RevisionRow key={row.id} jobId={job.id} row={row} />)}
       {rows.length > 0 && <Caution compact className="m-5" />}
-      <IssueDialog jobId={job.id} letter={job.nextLetter} counts={job.counts} open={issuing && job.may.issue} onOpenChange={setIssuing} onIssued={(id) => router.push(paths.revision(job.id, id))} />
+      <IssueDialog jobId={job.id} letter={job.nextLetter} counts={job.counts} open={issuing && job.may.issue && !open && !job.empty} onOpenChange={setIssuing} onIssued={(id) => router.push(paths.revision(job.id, id))} />
     </Panel>
   );
 }

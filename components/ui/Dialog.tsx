@@ -1,5 +1,6 @@
-import { Dialog as Radix } from "radix-ui";
-import type { ReactNode } from "react";
+"use client";
+
+import { useEffect, useId, useRef, type ReactNode } from "react";
 
 interface DialogProps {
   open: boolean;
@@ -10,18 +11,32 @@ interface DialogProps {
   children: ReactNode;
 }
 
-/** A question laid over the desk; Esc and a click outside put it away. */
+/**
+ * A question laid over the desk; Esc and a click beside it put it away. The browser's own modal: it keeps the focus
+ * inside, gives it back, and needs no style of its own, which the page policy would refuse.
+ */
 export function Dialog({ open, onOpenChange, title, description, children }: DialogProps) {
+  const element = useRef<HTMLDialogElement>(null);
+  const id = useId();
+  useEffect(() => {
+    const dialog = element.current;
+    if (open && !dialog?.open) dialog?.showModal();
+    if (!open && dialog?.open) dialog.close();
+  }, [open]);
   return (
-    <Radix.Root open={open} onOpenChange={onOpenChange}>
-      <Radix.Portal>
-        <Radix.Overlay className="fixed inset-0 z-40 bg-ink/35" />
-        <Radix.Content className="fixed top-1/2 left-1/2 z-50 max-h-[88vh] w-[min(560px,92vw)] -translate-x-1/2 -translate-y-1/2 overflow-y-auto border-[1.5px] border-ink bg-paper p-6 shadow-[4px_5px_0_var(--hatch)]">
-          <Radix.Title className="text-heading font-heading stretch-heading">{title}</Radix.Title>
-          <Radix.Description className="mt-1 mb-5 text-text text-ink2">{description}</Radix.Description>
+    <dialog
+      ref={element} aria-labelledby={`${id}-title`} aria-describedby={`${id}-text`}
+      onClose={() => open && onOpenChange(false)}
+      onMouseDown={(event) => event.target === event.currentTarget && onOpenChange(false)}
+      className="m-auto max-h-[88vh] w-[min(560px,92vw)] overflow-y-auto border-[1.5px] border-ink bg-paper text-ink shadow-[4px_5px_0_var(--hatch)] backdrop:bg-ink/35"
+    >
+      {open && (
+        <div className="p-6">
+          <h2 id={`${id}-title`} className="text-heading font-heading stretch-heading">{title}</h2>
+          <p id={`${id}-text`} className="mt-1 mb-5 text-text text-ink2">{description}</p>
           {children}
-        </Radix.Content>
-      </Radix.Portal>
-    </Radix.Root>
+        </div>
+      )}
+    </dialog>
   );
 }

@@ -66,4 +66,6 @@ export interface JobAnswer {
   id: string; companyId: string; companyName: string; number: string; name: string; addressLines: string; parcel: string; owner: string;
   scope: string; permitNumber: string; preparer: string; contractor: string; jurisdiction: JurisdictionAnswer | null; site: Site; roles: Role[];
   state: JobState; revision: string | null; nextLetter: string; counts: Counts | null; changedAt: string; may: JobMay;
+  /** Nothing stands on the sheet yet. */
+  empty: boolean;
 }

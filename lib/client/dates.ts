@@ -17,6 +17,9 @@ export function whenWords(iso: string, now: Date = new Date()): string {
   return date.getFullYear() === now.getFullYear() ? monthDay.format(date) : full.format(date);
 }
 
+/** The same within a sentence: "changed just now". */
+export const whenInSentence = (iso: string): string => whenWords(iso).replace(/^(Just|Today|Yesterday)/, (word) => word.toLowerCase());
+
 /** April 23, 2026, in the reader's zone. */
 export const dateWords = (iso: string): string => full.format(new Date(iso));
 /** April 23, 2026, 2:20 PM. */

@@ -128,7 +128,7 @@ export async function getJob(actor: Actor, jobId: string): Promise<JobAnswer> {
     parcel: block.parcel, owner: block.owner, scope: block.scope, permitNumber: block.permitNumber, preparer: block.preparer, contractor: block.contractor,
     jurisdiction: jurisdiction && jurisdictionAnswer(jurisdiction), site: drawing.document.site, roles, state: shown?.state ?? "draft",
     revision: shown?.letter ?? null, nextLetter: await draftLetter(jobId), counts: office ? await shownCounts(drawing, revision) : null,
-    changedAt: job.updatedAt.toISOString(),
+    changedAt: job.updatedAt.toISOString(), empty: Object.keys(drawing.document.equipment).length === 0,
     may: {
       edit: may(roles, "job.edit"), manageMembers: may(roles, "members.manage"), viewDrawing: office, editDrawing: may(roles, "drawing.edit"),
       issue: may(roles, "revision.issue"), seal: may(roles, "revision.seal", "in review"),
