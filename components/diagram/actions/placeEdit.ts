@@ -20,13 +20,14 @@ function placeOnBus(graph: DrawingGraph, panelId: string, at: Point): { at: Poin
   const { vertical, length } = bus;
   const left = vertical ? at.x < panel.at.x + bus.x : at.y < panel.at.y + bus.y;
   const wanted = Math.round(vertical ? at.y - panel.at.y - bus.y : at.x - panel.at.x - bus.x);
-  const taken = graph.children(panelId).flatMap((id) => {
-    const part = graph.drawing.equipment[id];
-    if (!part || part.spaces === null || part.integral) return [];
-    const side = vertical ? part.at.x < panel.at.x + bus.x : part.at.y < panel.at.y + bus.y;
+  const taken = graph.circuitsAt(panelId, "bus").flatMap((id) => {
+    const circuit = graph.drawing.circuits[id];
+    const end = circuit?.from.equipment === panelId ? circuit.from : circuit?.to;
+    const part = graph.drawing.equipment[(end === circuit?.from ? circuit?.to : circuit?.from)?.equipment ?? ""];
+    if (!circuit || !end || !part) return [];
     // The main breaker stands at the end of the bus and takes the first place on both sides.
-    if (part.spaces.length > 0 && side !== left) return [];
-    return [vertical ? part.at.y - panel.at.y - bus.y : part.at.x - panel.at.x - bus.x];
+    const side = vertical ? part.at.x < panel.at.x + bus.x : part.at.y < panel.at.y + bus.y;
+    return part.props["position"] === "main" || side === left ? [end.offset] : [];
   });
   const fits = (offset: number): boolean => taken.every((other) => Math.abs(other - offset) >= BREAKER_PITCH);
   const offsets = Array.from({ length: Math.floor(length) + 1 }, (_, offset) => offset).filter((offset) => offset >= 1 && fits(offset)).sort((a, b) => Math.abs(a - wanted) - Math.abs(b - wanted));

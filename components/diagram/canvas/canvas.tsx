@@ -75,12 +75,12 @@ export function Canvas({ start }: { start: { x: number; y: number; zoom: number 
   const actions = useMemo<CanvasActions>(() => ({ grabPort, choosePort, resize, bend, select }), [grabPort, choosePort, resize, bend, select]);
 
   // While a tool is on, a press on the sheet belongs to the tool, whatever lies there.
-  const toTool = (event: MouseEvent): boolean => tool.kind !== "select" && event.button === 0 && !(event.target instanceof Element && event.target.closest("[data-port]"));
+  const toTool = (event: MouseEvent): boolean => tool.kind !== "select" && event.button === 0 && !(tool.kind === "join" && event.target instanceof Element && event.target.closest("[data-port]"));
   const swallow = (event: MouseEvent): void => { if (toTool(event)) { event.stopPropagation(); if (event.type === "mousedown") event.preventDefault(); } };
   return (
     <CanvasActionsContext.Provider value={actions}>
       <div
-        ref={frame} className={`dimmed-sheet absolute inset-0 ${tool.kind === "select" ? "" : "[&_*]:!cursor-crosshair"}`} data-testid="canvas" tabIndex={-1}
+        ref={frame} className={`dimmed-sheet absolute inset-0 [&_.react-flow__nodesselection]:hidden [&_.react-flow__selection]:border [&_.react-flow__selection]:border-copper [&_.react-flow__selection]:bg-copper/10 ${tool.kind === "select" ? "" : "[&_*]:!cursor-crosshair"}`} data-testid="canvas" tabIndex={-1}
         onPointerDownCapture={swallow} onMouseDownCapture={swallow}
         onClickCapture={(event) => {
           if (!toTool(event)) return;

@@ -7,6 +7,7 @@ import { drawingArea, framePrimitives, INNER_PX } from "@/lib/sheets/frame";
 import { PX_PER_UNIT } from "@/lib/sheets/primitives";
 import { sheetGeometry } from "@/lib/sheets/size";
 import { TitleBlock } from "./titleBlock";
+import { DETAIL_ZOOM, useCanvasView } from "./view";
 
 /** The paper under everything; it is seen, never picked. */
 export const SHEET_NODE: Node = {
@@ -20,6 +21,7 @@ export const SheetView = memo(function SheetView() {
   const geometry = useMemo(() => sheetGeometry(sheet.size), [sheet.size]);
   const frame = useMemo(() => framePrimitives(geometry), [geometry]);
   const area = drawingArea(geometry);
+  const small = useCanvasView().zoom < DETAIL_ZOOM;
   return (
     <svg width={geometry.widthPx} height={geometry.heightPx} className="pointer-events-none absolute left-0 top-0 overflow-visible [filter:drop-shadow(2px_3px_0_var(--hatch))]" aria-hidden="true" data-testid="sheet">
       <defs>
@@ -30,7 +32,7 @@ export const SheetView = memo(function SheetView() {
       <rect width={geometry.widthPx} height={geometry.heightPx} className="fill-paper stroke-rule" strokeWidth={1} />
       <PrimitiveShapes primitives={frame} />
       <rect x={area.left + 1} y={area.top + 1} width={area.right - area.left - 2} height={area.bottom - area.top - 2} fill="url(#sheet-grid)" />
-      <TitleBlock geometry={geometry} />
+      <TitleBlock geometry={geometry} small={small} />
     </svg>
   );
 });

@@ -1,6 +1,7 @@
 "use client";
 import { useEffect, useId, useState } from "react";
 import { CAUTION_TEXT } from "@/lib/cautions";
+import { sameRef } from "@/lib/client/editorTypes";
 import { numbered } from "@/components/diagram/redlines/markKind";
 import { RedlineList } from "@/components/diagram/redlines/redlineList";
 import { Inspector } from "@/components/diagram/inspector/inspector";
@@ -20,7 +21,11 @@ export function Margin({ folded, onFold }: { folded: boolean; onFold: (folded: b
   const id = useId();
   useEffect(() => store.subscribe((now, before) => {
     if (now.opened !== before.opened && now.opened !== null) setTab("Redlines");
-    else if (now.selection !== before.selection && now.selection.length > 0 && now.opened === before.opened) setTab("Data");
+    else if (now.selection !== before.selection && now.selection.length > 0) {
+      const anchor = now.check?.findings.find((finding) => finding.key === now.opened)?.anchor;
+      // What an opened redline stands at is selected with it; that is not a wish for its data.
+      if (!anchor || !now.selection.every((ref) => sameRef(ref, anchor))) setTab("Data");
+    }
   }), [store]);
   if (folded) {
     return (

@@ -1,8 +1,9 @@
 "use client";
+import { useEffect, useState } from "react";
 import { useEditor } from "@/components/diagram/editorContext";
 import { valueAt } from "@/lib/client/settle";
 import { tagOf } from "@/lib/client/describe";
-import { buildGraph } from "@/lib/diagram/graph";
+import { buildGraph, type DrawingGraph } from "@/lib/diagram/graph";
 import { COLLECTIONS, type Collection } from "@/lib/diagram/schema";
 import { BUTTON, PRIMARY } from "./controls";
 import { Icon } from "./icons";
@@ -30,6 +31,12 @@ function Strip({ icon, bad = false, children }: { icon: "lock" | "offline" | "wa
   return <div role={bad ? "alert" : "status"} className={`relative z-[12] flex flex-none items-center gap-2.5 border-b border-ink bg-vellum px-3 py-2 text-body ${bad ? "border-l-4 border-l-red" : ""}`}><Icon name={icon} size={16} />{children}</div>;
 }
 
+/** A field in the words of its form. */
+function fieldWords(graph: DrawingGraph | undefined, collection: string, id: string, path: readonly string[]): string {
+  const label = collection === "equipment" && path[0] === "props" && graph ? graph.kind(id).properties[path[1] ?? ""]?.label : undefined;
+  return (label ?? path.join(" ").replace(/([A-Z])/g, " $1")).toLowerCase();
+}
+
 const shown = (value: unknown): string => (value === undefined ? "deleted" : value === null ? "not known" : typeof value === "object" ? "changed" : String(value));
 
 /** Both values where two people changed the same thing, and the choice between them. */
@@ -43,7 +50,7 @@ export function ConflictPanel({ onSettle }: { onSettle: (keep: "mine" | "theirs"
     const [, collection = "", id = "", ...rest] = path.split("/");
     const known = (COLLECTIONS as readonly string[]).includes(collection);
     const graph = graphs.find((each) => known && Object.hasOwn(each.drawing[collection as Collection], id));
-    return { path, name: graph ? tagOf(graph, { collection: collection as Collection, id }) : collection, field: rest.filter((part) => part !== "props").join(" ").replace(/([A-Z])/g, " $1").toLowerCase() };
+    return { path, name: graph ? tagOf(graph, { collection: collection as Collection, id }) : collection, field: fieldWords(graph, collection, id, rest) };
   });
   const who = conflict.by.length > 0 ? conflict.by.join(" and ") : "somebody else";
   return (
@@ -66,12 +73,21 @@ export function ConflictPanel({ onSettle }: { onSettle: (keep: "mine" | "theirs"
   );
 }
 
+/** How long a sentence stays in sight, ms: time to read two lines twice. */
+const NOTICE_MS = 7000;
+
 /** The last sentence for the person: what was undone, what was refused and why. */
 export function NoticeLine() {
   const notice = useEditor((editor) => editor.notice);
+  const [seen, setSeen] = useState(0);
+  useEffect(() => {
+    if (!notice) return;
+    const timer = setTimeout(() => setSeen(notice.id), NOTICE_MS);
+    return () => clearTimeout(timer);
+  }, [notice]);
   return (
-    <div aria-live="polite" role="status" aria-label="Message" className="pointer-events-none absolute bottom-3 left-1/2 z-[14] -translate-x-1/2">
-      {notice && <p key={notice.id} className={`max-w-xl border bg-vellum px-3 py-1.5 text-body shadow-hard [animation:notice_6s_forwards] ${notice.tone === "refused" ? "border-red text-red" : "border-ink"}`}>{notice.text}</p>}
+    <div aria-live="polite" role="status" aria-label="Message" className="pointer-events-none absolute bottom-3 left-1/2 z-[14] w-max max-w-[70%] -translate-x-1/2">
+      {notice && notice.id !== seen && <p key={notice.id} className={`border bg-vellum px-3 py-1.5 text-body shadow-hard ${notice.tone === "refused" ? "border-red text-red" : "border-ink"}`}>{notice.text}</p>}
     </div>
   );
 }

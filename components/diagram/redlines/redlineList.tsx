@@ -82,7 +82,7 @@ function Slip({ finding, number, kind }: { finding: Finding; number: number; kin
       </div>
       <p className="mb-1 mt-2 border-b border-ink pb-1 text-label text-ink2 stretch-label">{related.join(", ")}</p>
       <Worksheet steps={finding.steps} {...(last && typeof last.result === "string" ? { result: last.result } : {})} />
-      {finding.fields.length > 0 && <ul className="mt-1 list-none text-label">{finding.fields.map((field) => <li key={`${field.ref.id}${field.field}`}>{tagOf(graph, field.ref)}: {field.label} is not known.</li>)}</ul>}
+      {finding.fields.length > 1 && <ul className="mt-1 list-none text-label">{finding.fields.map((field) => <li key={`${field.ref.id}${field.field}`}>{tagOf(graph, field.ref)}: {field.label} is not known.</li>)}</ul>}
       {finding.suggestions.length > 0 && !readOnly && (
         <div className="mt-2 flex flex-wrap gap-1.5">
           {finding.suggestions.map((suggestion, index) => (
@@ -100,7 +100,7 @@ function Slip({ finding, number, kind }: { finding: Finding; number: number; kin
       {finding.folded.length > 0 && (
         <div className="mt-2 border-t border-desk2 pt-1.5">
           <h3 className="text-label font-finding">Follows from it</h3>
-          <ul className="list-none">{finding.folded.map((folded) => <li key={folded.rule + folded.message} className="flex justify-between gap-2 py-0.5 text-label leading-tight text-ink2"><span>{folded.message}</span><span className="flex-none text-small">{folded.citation}</span></li>)}</ul>
+          <ul className="list-none">{finding.folded.map((folded) => <li key={folded.rule + folded.message} className="py-0.5 text-label leading-tight text-ink2">{folded.message}<span className="block text-small text-ink3">{folded.citation}</span></li>)}</ul>
         </div>
       )}
       <p className="mt-2 border-t border-desk2 pt-1.5 text-small text-ink3">{finding.citation}{finding.verifySection ? ", verify in the adopted book" : ""}</p>
