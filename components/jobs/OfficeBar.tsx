@@ -4,6 +4,7 @@ import Link from "next/link";
 import { signOut } from "next-auth/react";
 import { DropdownMenu } from "radix-ui";
 import type { ReactNode } from "react";
+import { isNight, setNight } from "@/lib/client/desk";
 import { useMe } from "@/lib/client/queries";
 import { Bar, BarCell } from "@/components/ui/Bar";
 import { LinkButton } from "@/components/ui/Button";
@@ -49,6 +50,7 @@ export function PersonMenu() {
             <p className="text-label text-ink2">{data?.email}</p>
           </div>
           <DropdownMenu.Item asChild><Link href="/account" className={ITEM}>Account and license</Link></DropdownMenu.Item>
+          <DropdownMenu.Item className={ITEM} onSelect={() => setNight(!isNight())}>Dark or light desk</DropdownMenu.Item>
           <DropdownMenu.Item className={ITEM} onSelect={() => void signOut({ callbackUrl: "/sign-in?notice=signed-out" })}>Sign out</DropdownMenu.Item>
         </DropdownMenu.Content>
       </DropdownMenu.Portal>
