@@ -4,7 +4,7 @@ import type { Site } from "@/lib/diagram/schema";
 import { seedCompany, seedJob, seedJurisdiction, seedLicense, seedPerson } from "@/lib/server/data/seeding";
 import { DEMO_COMPANY, demoPeople } from "./demoAccounts";
 import { cleanDrawing } from "./demo/cleanDrawing";
-import { plantedDrawing } from "./demo/plantedDrawing";
+import { plantedDrawing } from "./demo/planted";
 
 /** Amendments of the invented county ordinance 26-4. */
 const AMENDMENTS: Site["amendments"] = {
@@ -31,6 +31,6 @@ export async function up(): Promise<void> {
   const members = people.map((each) => ({ userId: each.actor.id, roles: each.roles }));
   const author = actorOf(demoPeople.designer.email);
   const common = { companyId, jurisdictionId, author, members };
-  await seedJob({ ...common, number: "26-031P", name: "Teasel Hill Creamery, as drawn by the owner", drawing: plantedDrawing });
-  await seedJob({ ...common, number: "26-031", name: "Teasel Hill Creamery", drawing: cleanDrawing });
+  await seedJob({ ...common, number: "26-031P", name: "Teasel Hill Creamery, as drawn by the owner", drawing: plantedDrawing() });
+  await seedJob({ ...common, number: "26-031", name: "Teasel Hill Creamery", drawing: cleanDrawing() });
 }

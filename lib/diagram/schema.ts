@@ -96,6 +96,8 @@ export const equipmentSchema = z.strictObject({
   parent: idSchema.nullable(),
   /** Integral part drawn by its parent's symbol; it has ports but no symbol of its own. */
   integral: z.boolean(),
+  /** Not drawn on the one-line, so as not to crowd it; it stands in the schedules and is checked like the rest. */
+  offSheet: z.boolean().optional(),
   at: pointSchema,
   rotation: z.union([z.literal(0), z.literal(90), z.literal(180), z.literal(270)]),
   mirrored: z.boolean(),
@@ -216,6 +218,8 @@ export const racewaySchema = z.strictObject({
   at: pointSchema,
   size: z.strictObject({ width: z.number().min(0).max(600), height: z.number().min(0).max(400) }),
   vertical: z.boolean(),
+  /** Not drawn on the one-line, so as not to crowd it; it stands in the schedules and is checked like the rest. */
+  offSheet: z.boolean().optional(),
   label: z.strictObject({ x: coordinate, y: coordinate, anchor: z.enum(["start", "middle", "end"]) }).nullable(),
   note: words(200),
 });

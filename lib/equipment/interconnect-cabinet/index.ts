@@ -11,6 +11,7 @@ export const interconnectCabinet = defineKind({
   ports: () => [
     { id: "bus", label: "Bus", system: "ac", side: "right", x: 4, y: 4, poles: ["L1", "L2", "N"], many: true },
     groundPort(1, 12),
+    { id: "data", label: "Control terminals", system: "data", side: "bottom", x: 8, y: 14, poles: ["D"], many: true },
   ],
   joins: () => [],
   annotation: (p) => lines("INTERCONNECT CABINET", [p.enclosureType && `NEMA ${p.enclosureType}`, p.shortCircuitKA !== null && `SCCR ${p.shortCircuitKA} kA`].filter(Boolean).join(", ") || null, withUnit(p.busA, "A BUS")),

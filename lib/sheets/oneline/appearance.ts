@@ -40,7 +40,7 @@ export function equipmentBox(graph: DrawingGraph, id: string): Box {
 const SHOWN_INTEGRAL: ReadonlySet<string> = new Set(["pvswitch"]);
 export const isDrawn = (graph: DrawingGraph, id: string): boolean => {
   const equipment = graph.drawing.equipment[id] as Equipment;
-  return !equipment.integral || SHOWN_INTEGRAL.has(symbolOf(graph, id) ?? "");
+  return equipment.offSheet !== true && (!equipment.integral || SHOWN_INTEGRAL.has(symbolOf(graph, id) ?? ""));
 };
 
 /** Where the tag stands and how the lines under it run. */

@@ -80,7 +80,7 @@ export function racewayLabel(raceway: Raceway, options: OneLineOptions = {}): { 
 /** A raceway as it stands on the one-line: a band, a box, a mark across its circuits, or the two ends of a nipple. */
 export function racewayPrimitives(graph: DrawingGraph, id: string, options: OneLineOptions = {}): Primitive[] {
   const raceway = graph.drawing.raceways[id];
-  if (!raceway) return [];
+  if (!raceway || raceway.offSheet) return [];
   const own = racewayBox(raceway);
   const px = { x: sheetPx(own.x), y: sheetPx(own.y), width: own.width * PX_PER_UNIT, height: own.height * PX_PER_UNIT };
   const label = racewayLabel(raceway, options);
