@@ -180,6 +180,8 @@ export const circuitSchema = z.strictObject({
   /** Bend points a person placed; the router keeps them. */
   bends: z.array(pointSchema).max(60),
   calloutAt: pointSchema.nullable(),
+  /** Not drawn on the one-line, so as not to crowd it; it stands in the schedules and is checked like the rest. */
+  offSheet: z.boolean().optional(),
 });
 
 export const RACEWAY_TYPES = ["EMT", "IMC", "RMC", "FMC", "LFMC", "LFNC", "ENT", "PVC 40", "PVC 80", "PVC A", "PVC EB", "HDPE"] as const;

@@ -9,20 +9,20 @@ export function addAcCircuits(drawing: DrawingBuilder): void {
   drawing.circuit("SVC", "UTIL.load", "MTR-1.line", [{ lengthFt: 28, ungrounded: wire(2, "250 kcmil", "black, red", aluminum), grounded: wire(1, "250 kcmil", "white", aluminum), route: route("R-0") }],
     { points: points([8, 6], [8, 8]), calloutAt: { x: 5, y: 7 } });
   drawing.circuit("F1a", "CB-F1.load", "DS-1.line", [{ lengthFt: 6, ...feeder("1 AWG", "6 AWG"), route: route("R-1a") }], { callout: "F1", points: points([13, 20], [26, 20]), calloutAt: { x: 23.3, y: 20 } });
-  drawing.circuit("F1b", "DS-1.load", "CB-U.line", [{ lengthFt: 40, ...feeder("1 AWG", "6 AWG"), route: route("R-1b") }], { callout: "F1", points: points([29, 20], [36, 20]), calloutAt: { x: 30.7, y: 22.6 } });
+  drawing.circuit("F1b", "DS-1.load", "CB-U.line", [{ lengthFt: 40, ...feeder("1 AWG", "6 AWG"), route: route("R-1b") }], { callout: "F1", points: points([29, 20], [36, 20]), calloutAt: { x: 31.4, y: 20 } });
   drawing.circuit("F2", "INV-1.ac", "CB-I1.load", [{ lengthFt: 6.7, ...feeder("8 AWG", "10 AWG"), route: route("N-1", "WW-1", "N-3") }],
     { points: points([93.6, 30], [93.6, 24.5], [54.6, 24.5], [54.6, 26], [50, 26]), calloutAt: { x: 53.5, y: 26 } });
   drawing.circuit("F3", "INV-2.ac", "CB-I2.load", [{ lengthFt: 6.7, ...feeder("8 AWG", "10 AWG"), route: route("N-2", "WW-1", "N-3") }],
     { points: points([62, 30], [62, 26], [55.4, 26], [55.4, 29], [50, 29]), calloutAt: { x: 53.5, y: 29 } });
   drawing.circuit("F4", "CB-L.load", "PNL-C.bus@4.6", [{ lengthFt: 35.8, ...feeder("1 AWG", "6 AWG"), route: route("N-3", "WW-1", "R-4") }],
-    { points: points([50, 23], [80, 23], [80, 10.4]), calloutAt: { x: 53.5, y: 23 }, load: { continuousA: 36, otherA: 22.3, basis: "E-602: 58.3 A a leg, vat heater and chiller continuous" } });
+    { points: points([50, 23], [80, 23], [80, 12.2]), calloutAt: { x: 53.5, y: 23 }, load: { continuousA: 36, otherA: 22.3, basis: "E-602: 58.3 A a leg, vat heater and chiller continuous" } });
   drawing.circuit("F5", "CB-GS.load", "CB-G.load", [{ lengthFt: 90.8, ...feeder("6 AWG", "10 AWG"), route: route("R-5", "WW-1", "N-3") }],
     { points: points([61, 11.6], [61, 21.5], [55.4, 21.5], [55.4, 20], [50, 20]), calloutAt: { x: 54.1, y: 20 } });
   drawing.circuit("N1", "CB-N.load", "CB-NM.line", [{ lengthFt: 110, ...feeder("3 AWG", "6 AWG"), route: route("R-7") }],
     { points: points([13, 24], [26, 24]), calloutAt: { x: 23.3, y: 24 }, load: { continuousA: 0, otherA: 40, basis: "existing load by the owner's record" } });
   const pump = { ungrounded: wire(2, "12 AWG", "black, red"), equipmentGround: egc("12 AWG") };
-  drawing.circuit("P1a", "CB-S.load", "DS-2.line", [{ lengthFt: 56, ...pump, route: route("R-8") }], { callout: "P1", points: points([13, 28], [24.6, 28]), calloutAt: { x: 23, y: 28 } });
-  drawing.circuit("P1b", "DS-2.load", "P-1.line", [{ lengthFt: 4, ...pump, route: route("R-8") }], { callout: "P1", points: points([27.6, 28], [29.8, 28]), calloutAt: { x: 28.7, y: 26.4 } });
+  drawing.circuit("P1a", "CB-S.load", "DS-2.line", [{ lengthFt: 56, ...pump, route: route("R-8") }], { callout: "P1", points: points([13, 30], [24.4, 30]), calloutAt: { x: 23, y: 30 } });
+  drawing.circuit("P1b", "DS-2.load", "P-1.line", [{ lengthFt: 4, ...pump, route: route("R-8") }], { callout: "P1", points: points([27.4, 30], [29.2, 30], [29.2, 34.4]) });
 }
 
 /** Strings, battery leads and inverter leads. */
@@ -51,7 +51,7 @@ export function addDcCircuits(drawing: DrawingBuilder): void {
 /** Data and control leads, and the grounding conductors. Only the two links between units are drawn on the one-line. */
 export function addDataAndGround(drawing: DrawingBuilder): void {
   const data = (tag: string, from: string, to: string, type: string, diameterIn: number, lengthFt: number, tags: readonly string[], wet: boolean | null = null, drawn: readonly (readonly [number, number])[] = []) =>
-    drawing.circuit(tag, from, to, [{ lengthFt, cable: cable(type, diameterIn, 1, wet), route: route(...tags) }], drawn.length ? { points: points(...drawn) } : {});
+    drawing.circuit(tag, from, to, [{ lengthFt, cable: cable(type, diameterIn, 1, wet), route: route(...tags) }], drawn.length ? { points: points(...drawn) } : { offSheet: true });
   data("K-1", "BT-1.data", "INV-1.data", "Cat 6", 0.25, 20, ["C-1a", "JB-2", "C-1b"], null, [[84.5, 44.4], [88.8, 44.4], [88.8, 41.3]]);
   drawing.circuits["k-1"]!.calloutAt = { x: 86.7, y: 44.4 };
   data("K-2", "INV-1.data", "INV-2.data", "Cat 6", 0.25, 9, ["C-1b", "JB-2", "C-6"]);
@@ -66,8 +66,8 @@ export function addDataAndGround(drawing: DrawingBuilder): void {
   data("K-11", "INV-1.data", "G-1.data", "1-pair", 0.2, 98, ["C-5b", "JB-2", "C-3"], true);
 
   drawing.circuit("GEC-A", "MM-225.ground", "GE-A.ground", [{ lengthFt: 12, equipmentGround: bare("4 AWG") }], { callout: "GEC", points: points([3, 25], [3.2, 25], [3.2, 35.2]), calloutAt: { x: 3.2, y: 30.6 } });
-  drawing.circuit("GEC-B", "PNL-N.ground", "GE-B.ground", [{ lengthFt: 10, equipmentGround: bare("6 AWG") }]);
-  drawing.circuit("A1", "PV-1.ground", "INV-1.ground", [{ lengthFt: 40, equipmentGround: bare("10 AWG"), route: route("JB-1") }]);
+  drawing.circuit("GEC-B", "PNL-N.ground", "GE-B.ground", [{ lengthFt: 10, equipmentGround: bare("6 AWG") }], { offSheet: true });
+  drawing.circuit("A1", "PV-1.ground", "INV-1.ground", [{ lengthFt: 40, equipmentGround: bare("10 AWG"), route: route("JB-1") }], { offSheet: true });
   drawing.bond("MBJ", { kind: "main bonding jumper", equipment: "mm-225", fitted: true, size: "4 AWG", closes: "always", at: { x: 3.2, y: 22.4 } });
   drawing.bond("NS-1", { kind: "neutral strap", equipment: "g-1", fitted: false, size: null, closes: "always", at: { x: 66, y: 9.6 } });
 }
@@ -76,7 +76,7 @@ export function addDataAndGround(drawing: DrawingBuilder): void {
 export function addSensors(drawing: DrawingBuilder): void {
   const common = { arrow: "from" as const, reads: "inv-1", leadLimitFt: 33, rotation: 0 as const };
   for (const [n, pole] of [[1, "L1"], [2, "L2"]] as const) {
-    drawing.sensor(`CT-${n}`, { ...common, circuit: "f1b", pole, purpose: "interconnect exchange", ratio: "200 A : 0.333 V", ratingA: 200, instruction: { document: "HB-78 data sheet", page: "H22" }, at: { x: 31.6, y: 20 } });
+    drawing.sensor(`CT-${n}`, { ...common, circuit: "f1b", pole, purpose: "interconnect exchange", ratio: "200 A : 0.333 V", ratingA: 200, instruction: { document: "HB-78 data sheet", page: "H22" }, at: { x: 33, y: 20 } });
     drawing.sensor(`CT-${n + 2}`, { ...common, circuit: "f5", pole, purpose: "generator exchange", ratio: "100 A : 0.333 V", ratingA: 100, instruction: { document: "HB-78 data sheet", page: "H23" }, at: { x: 50, y: 20 } });
   }
 }

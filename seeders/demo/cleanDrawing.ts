@@ -8,11 +8,11 @@ import { addRaceways } from "./raceways";
 
 /** Notes and keynotes lettered on the one-line. */
 function addTexts(drawing: DrawingBuilder): void {
-  drawing.text("array", [92.4, 2.4], "PV ARRAY", null, "heading");
-  drawing.text("array-lines", [92.4, 3.7], "48 × HM-430, 20.64 kW DC\n4 STRINGS OF 12, 522 V MAX");
+  drawing.text("array", [92.4, 1.9], "PV ARRAY", null, "heading");
+  drawing.text("array-lines", [92.4, 3.1], "48 × HM-430, 20.64 kW DC\n4 STRINGS OF 12, 522 V MAX");
   drawing.text("breakers-mm", [14.4, 33.3], "BREAKERS 22 kA");
-  drawing.text("neutral-ic", [33, 31.4], "N BAR ISOLATED, NO BOND\nTERMINALS 75 °C", "3");
-  drawing.text("packs", [72.4, 47.9], "4 × BT-12, LFP 51.2 V, 50.0 kWh\nWW-3 METAL, BATTERY DC ONLY");
+  drawing.text("neutral-ic", [33.6, 31.6], "N BAR ISOLATED, NO BOND\nTERMINALS 75 °C", "3");
+  drawing.text("packs", [71.4, 47.9], "4 × BT-12, LFP 51.2 V, 50.0 kWh");
   drawing.text("ww1", [65, 26.8], "AC", null, "compartment");
   drawing.text("ww1-lines", [68, 26.8], "240 V ONLY");
   drawing.text("ww2", [67, 52], "PV", null, "compartment");
@@ -47,7 +47,7 @@ export function cleanDrawing(): Drawing {
   });
   return {
     ...empty,
-    sheet: { ...empty.sheet, subtitle: "AC, DC AND GENERATOR", tables: { states: { x: 2, y: 39 }, interlocks: { x: 2, y: 47 }, "bus-checks": { x: 34, y: 39 }, "fault-current": { x: 34, y: 47 } } },
+    sheet: { ...empty.sheet, subtitle: "AC, DC AND GENERATOR", tables: { states: { x: 2, y: 40 }, interlocks: { x: 2, y: 50 }, "bus-checks": { x: 33, y: 40 }, "fault-current": { x: 33, y: 48 } } },
     equipment: build.equipment, circuits: build.circuits, raceways: build.raceways, bonds: build.bonds, interlocks: build.interlocks, sensors: build.sensors,
     labels: build.labels, texts: build.texts,
   };

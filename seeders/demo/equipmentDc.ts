@@ -15,7 +15,7 @@ export function addInverters(drawing: DrawingBuilder): void {
       role, address, firmware: "4.2.1", firmwareInstruction: "H33", parallelInstruction: "H30", leadInstruction: "H34", leadTolerancePercent: 5,
       neutralRelay: "disabled", profile: "120/240 V split phase, 60 Hz, ORE-2", dischargeLimitA: 175,
       enclosureType: "3R", handleHeightIn: 55, clearDepthIn: 48, clearWidthIn: 36, clearHeightIn: 80,
-    }, { page: "H1", book: "HB-78 data sheet", location: PLANT, mirrored });
+    }, { page: "H1", book: "HB-78 data sheet", location: PLANT, mirrored, ...(mirrored ? { label: { x: -9, y: 2, anchor: "start" as const } } : {}) });
     const page = { firmware: "H33", maximumOvercurrentA: "H3", pvMaximumV: "H6", trackerA: "H7", batteryA: "H10", neutralRelay: "H31" };
     for (const [name, at] of Object.entries(page)) drawing.equipment[id]!.sources[name] = { document: "HB-78 data sheet", page: at };
     drawing.port(id, "ac", { continuousA: 32.5, maximumOvercurrentA: 50, ...terminal(35, ["14 AWG", "4 AWG"], "H16, instruction") });
@@ -34,7 +34,7 @@ export function addInverters(drawing: DrawingBuilder): void {
 export function addStorage(drawing: DrawingBuilder): void {
   drawing.add("dc-bus-cabinet", "DB-1", [68, 29.4], {
     make: "Halden", model: "DB-600", listing: "UL 891", busA: 600, voltageV: 80, shortCircuitKA: 20, grounded: false, enclosureType: "1", handleHeightIn: 68, clearDepthIn: 48, clearWidthIn: 30, clearHeightIn: 80,
-  }, { page: "D1", location: PLANT, size: { width: 19.4, height: 8.8 }, bus: { x: 1, y: 4.2, length: 17.4, vertical: false } });
+  }, { page: "D1", location: PLANT, size: { width: 19.4, height: 8.8 }, bus: { x: 1, y: 4.2, length: 17.4, vertical: false }, label: { x: 0.6, y: -0.5, anchor: "start" } });
   const dc = (ratingA: number) => ({ current: "battery dc", ratingA, poles: 2, interruptingKA: 20, voltageV: 80, mount: "stud", position: "branch", lineLoadMarked: false, listedHundredPercent: false, trip: "fixed" });
   const bolts = [["CB-D2", 70, 250], ["CB-B4", 74, 125], ["CB-B3", 77, 125], ["CB-B2", 80, 125], ["CB-B1", 83, 125], ["CB-D1", 86, 250]] as const;
   for (const [tag, x, ratingA] of bolts) {

@@ -16,7 +16,7 @@ export function addRaceways(drawing: DrawingBuilder): void {
   r("R-5", "conduit", [61, 16], { type: "PVC 40", tradeSize: "1", metal: false, from: "g-1", to: "ww-1", sealed: true, vertical: true, label: { x: 1.3, y: -0.4, anchor: "start" } }, [{ lengthFt: 85, ...BURIED }]);
   r("R-7", "conduit", [24, 24], { ...listed, type: "PVC 40", tradeSize: "1-1/4", metal: false, from: "mm-225", to: "pnl-n", sealed: true }, [{ lengthFt: 110, ...BURIED }]);
   r("R-8", "conduit", [24, 28], { ...listed, type: "PVC 40", tradeSize: "3/4", metal: false, from: "mm-225", to: "ds-2", sealed: true }, [{ lengthFt: 60, ...BURIED }]);
-  r("R-S", "conduit", [101.5, 34.5], { tradeSize: "1", from: "jb-1", to: "ww-2", bendsDegrees: 270, sealed: true, vertical: true, size: { width: 5.4, height: 1 }, label: { x: -2.8, y: -2, anchor: "end" } },
+  r("R-S", "conduit", [98.8, 18], { tradeSize: "1", from: "jb-1", to: "ww-2", bendsDegrees: 270, sealed: true, vertical: true, size: { width: 5.4, height: 1 }, label: { x: -0.4, y: 1, anchor: "end" } },
     [{ lengthFt: 8, ambientC: 33, exposure: "roof", aboveRoofIn: 1 }, { lengthFt: 54, ...INSIDE }]);
   const nipple = (tag: string, x: number, y: number, vertical: boolean, tradeSize: string, inches: number, from: string, to: string, change = {}) =>
     r(tag, "nipple", [x, y], { tradeSize, from, to, vertical, ...change }, [{ lengthFt: inches * INCH, ...INSIDE }]);
@@ -30,12 +30,12 @@ export function addRaceways(drawing: DrawingBuilder): void {
   for (const tag of ["N-10", "N-11"]) nipple(tag, 86, 39.5, true, "2", 10, "ww-3", "db-1", { ...listed, ...bay, sealed: true });
   nipple("N-12", 87.6, 37.3, false, "2", 4, "db-1", "inv-1", listed);
   nipple("N-13", 67.8, 37.3, false, "2", 4, "db-1", "inv-2", listed);
-  const wireway = (tag: string, x: number, y: number, width: number, height: number, label: { x: number; y: number; anchor: "start" }, change = {}) =>
+  const wireway = (tag: string, x: number, y: number, width: number, height: number, label: { x: number; y: number; anchor: "start" | "middle" }, change = {}) =>
     r(tag, "wireway", [x, y], { widthIn: 6, heightIn: 6, size: { width, height }, label, ...change }, [{ lengthFt: 5, ...INSIDE }]);
   wireway("WW-1", 57, 20, 40, 7.6, { x: 7.5, y: -0.7, anchor: "start" });
   wireway("WW-2", 57, 49.4, 40.6, 6.5, { x: 8.3, y: -0.6, anchor: "start" });
-  wireway("WW-3", 68.4, 40, 17, 2.5, { x: 0.5, y: 1.7, anchor: "start" }, bay);
-  r("JB-1", "box", [92.4, 13], { widthIn: 12, heightIn: 10, depthIn: 6, size: { width: 12, height: 2.8 }, to: "r-s", location: place("A", "roof", "roof", 33), note: "ROOF BOX, 4X", label: { x: -0.3, y: 4, anchor: "end" } }, [{ lengthFt: 1, ambientC: 33, exposure: "roof" }]);
+  wireway("WW-3", 67.8, 39.9, 17.6, 3, { x: 3, y: 1.25, anchor: "middle" }, bay);
+  r("JB-1", "box", [92.4, 13], { widthIn: 12, heightIn: 10, depthIn: 6, size: { width: 12, height: 2.8 }, to: "r-s", location: place("A", "roof", "roof", 33), note: "ROOF BOX, 4X", label: { x: 6.2, y: 4.3, anchor: "end" } }, [{ lengthFt: 1, ambientC: 33, exposure: "roof" }]);
   r("JB-2", "box", [88, 46], { ...listed, widthIn: 8, heightIn: 8, depthIn: 4, size: { width: 2, height: 2 }, note: "CLASS 2 ONLY" }, [{ lengthFt: 1, ...INSIDE }]);
   const dataRun = (tag: string, lengthFt: number, from: string, to: string, stretch = INSIDE, change = {}) =>
     r(tag, "conduit", [88, 46], { ...listed, tradeSize: "3/4", from, to, ...change }, [{ lengthFt, ...stretch }]);

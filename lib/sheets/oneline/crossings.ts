@@ -10,6 +10,7 @@ const NEAR = 0.05;
 /** Line of a circuit as drawn: its routed points, else a straight or single-bend lead for factory wiring, else a direct line. */
 export function circuitLine(graph: DrawingGraph, id: string): { points: readonly Point[]; routed: boolean } {
   const circuit = graph.drawing.circuits[id] as Circuit;
+  if (circuit.offSheet) return { points: [], routed: true };
   if (circuit.points.length >= 2) return { points: circuit.points, routed: true };
   // Wiring to a part that its carrier's symbol stands for lies inside that symbol.
   const hidden = (["from", "to"] as const).some((end) => graph.drawing.equipment[circuit[end].equipment] !== undefined && !isDrawn(graph, circuit[end].equipment));
