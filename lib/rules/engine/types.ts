@@ -10,7 +10,13 @@ export type Confirmation = "read" | "agreed" | "unconfirmed" | "preview";
 export const EDITION_LIST = ["2017", "2020", "2023", "2026"] as const;
 
 /** Section of one edition behind a rule. `confirmation` says how sure the section is; anything but `read` is printed beside it. */
-export interface Citation { edition: Edition; section: string; confirmation: Confirmation }
+export interface Citation {
+  edition: Edition;
+  section: string;
+  confirmation: Confirmation;
+  /** Book; left out for the electrical code, empty for instructions and practice, which have no section. */
+  book?: string;
+}
 
 /** Limit used by a rule, as data, so that a jurisdiction may tighten it. */
 export interface Limit { value: number; unit: string; source: string }
@@ -27,6 +33,8 @@ export interface RuleMeta {
   citations: readonly Citation[];
   /** Per edition: may the finding be must-fix. Where false it is should-fix with "verify in the adopted book". */
   mustFixAllowed: Readonly<Record<Edition, boolean>>;
+  /** What else raises the rule to must-fix: the instruction page cited for that model. */
+  mustFixWith?: "instruction";
   limits: Readonly<Record<string, Limit>>;
   /** Document fields it reads, for its page. */
   reads: readonly string[];
@@ -67,7 +75,12 @@ export type Outcome =
   | { outcome: "pass" }
   | { outcome: "not-applicable" }
   | { outcome: "finding"; finding: FindingDraft }
-  | { outcome: "needs-data"; fields: readonly { ref: ElementRef; field: string; label: string }[] };
+  | {
+      outcome: "needs-data";
+      fields: readonly { ref: ElementRef; field: string; label: string }[];
+      /** True where the value stands on a protected path, so that sealing waits for it whatever the rule's own severity is. */
+      blocks?: boolean;
+    };
 
 /** One rule. `subjects` lists the elements it looks at; `evaluate` judges one. */
 export interface Rule {
