@@ -1,8 +1,21 @@
 import type { SheetContext, SheetPage } from "./context";
 import { oneLineSheet } from "./oneLineSheet";
+import { schedulePages, scheduleSheet } from "./scheduleSheet";
+
+/** Number of the first schedule sheet; further ones take numbers that no sheet of the set uses. */
+const SCHEDULE = "E-603";
+const FURTHER_FROM = 608;
 
 /** All sheets of a drawing, in the order of the set. */
 export function sheetSet(context: SheetContext): SheetPage[] {
   const { sheet } = context.drawing;
-  return [oneLineSheet(context, { number: sheet.number, title: sheet.title, subtitle: sheet.subtitle, index: 1, count: 1, scale: "NONE" }, { schedule: "E-603", accepted: "E-603" })];
+  const schedules = schedulePages(context);
+  const count = 1 + schedules.length;
+  const numbers = { schedule: SCHEDULE, accepted: schedules.length > 1 ? `E-${FURTHER_FROM + schedules.length - 2}` : SCHEDULE };
+  return [
+    oneLineSheet(context, { number: sheet.number, title: sheet.title, subtitle: sheet.subtitle, index: 1, count, scale: "NONE" }, numbers),
+    ...schedules.map((tables, i) => scheduleSheet(context, {
+      number: i === 0 ? SCHEDULE : `E-${FURTHER_FROM + i - 1}`, title: "CONDUCTORS", subtitle: "RACEWAYS AND EQUIPMENT", index: i + 2, count, scale: "NONE",
+    }, tables, numbers.accepted)),
+  ];
 }
