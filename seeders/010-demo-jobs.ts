@@ -31,6 +31,8 @@ export async function up(): Promise<void> {
   const members = people.map((each) => ({ userId: each.actor.id, roles: each.roles }));
   const author = actorOf(demoPeople.designer.email);
   const common = { companyId, jurisdictionId, author, members };
-  await seedJob({ ...common, number: "26-031P", name: "Teasel Hill Creamery, as drawn by the owner", drawing: plantedDrawing() });
+  const planted = plantedDrawing();
+  const owners = { ...planted, sheet: { ...planted.sheet, titleBlock: { ...planted.sheet.titleBlock, jobNumber: "26-031P" } } };
+  await seedJob({ ...common, number: "26-031P", name: "Teasel Hill Creamery, as drawn by the owner", drawing: owners });
   await seedJob({ ...common, number: "26-031", name: "Teasel Hill Creamery", drawing: cleanDrawing() });
 }
