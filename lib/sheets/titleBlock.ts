@@ -138,7 +138,7 @@ function revisions(block: Block, context: SheetContext, top: number): void {
     const cell = (dx: number, words: string, width: number) => block.words(dx, y, fitText(letter(words), 13, "narrow", width));
     cell(14, revision.letter, 22);
     cell(44, revision.description, 112);
-    cell(165, revision.date.slice(2), 48);
+    cell(165, `${revision.date.slice(5)}-${revision.date.slice(2, 4)}`, 48);
     cell(219, initials(revision.by), 29);
   });
   block.rule(bottom);

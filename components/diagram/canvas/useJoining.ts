@@ -58,8 +58,13 @@ export function useJoining() {
     const current = store.getState().tool;
     // A second click on a port ends the join at it; geometry decides where, as for any other place.
     if (current.kind === "join" && current.from) { pressed.current = null; finish(current.from, client); return; }
-    if (dot.taken) { store.getState().say(dot.taken, "refused"); return; }
     const { landing: here } = landing(client, null);
+    if (dot.taken) {
+      // An integral part may have its own port at the same place: a battery's breaker stands where its leads leave.
+      if (here && here.reason === null) begin(here.ref, client);
+      else store.getState().say(dot.taken, "refused");
+      return;
+    }
     begin(dot.length > 0 && here && here.ref.equipment === dot.ref.equipment && here.ref.port === dot.ref.port ? here.ref : dot.ref, client);
   }, [begin, finish, landing, store]);
 

@@ -2,6 +2,8 @@ import { expect, type Locator, type Page } from "@playwright/test";
 
 /** px a grid unit at 100 %, as printed at half size. */
 const PX = 12;
+/** px from the paper's corner to the inner frame, where grid places are counted from. */
+const FRAME = 60;
 
 /** A hand on the sheet: real pointer and key events at grid places, nothing else. */
 export class SheetHand {
@@ -17,11 +19,8 @@ export class SheetHand {
       const { a, e, f } = new DOMMatrixReadOnly(getComputedStyle(node).transform);
       return { zoom: a, x: e, y: f };
     });
-    const inner = await this.origin();
-    return { x: frame.x + transform.x + (inner + x * PX) * transform.zoom, y: frame.y + transform.y + (inner + y * PX) * transform.zoom };
+    return { x: frame.x + transform.x + (FRAME + x * PX) * transform.zoom, y: frame.y + transform.y + (FRAME + y * PX) * transform.zoom };
   }
-  /** px from the flow's origin to the inner frame's origin. */
-  protected async origin(): Promise<number> { return 0; }
 
   async press(x: number, y: number): Promise<void> {
     const { x: px, y: py } = await this.at(x, y);
@@ -38,20 +37,68 @@ export class SheetHand {
     await this.page.mouse.move(b.x, b.y, { steps: 6 });
     await this.page.mouse.up();
   }
-  /** Picks a part in the rail and sets it down. */
+  /** Picks a part in the rail by its kind and sets it down. */
   async place(part: string, x: number, y: number): Promise<void> {
-    await this.page.getByRole("navigation", { name: "Parts" }).getByRole("button", { name: part, exact: true }).click();
+    await this.page.getByRole("navigation", { name: "Parts" }).locator(`[data-part="${part}"]`).click();
     await this.press(x, y);
   }
   /** Joins two ports by dragging from one to the other. */
   async join(from: readonly [number, number], to: readonly [number, number]): Promise<void> { await this.drag(from, to); }
 
-  /** Fills a field of the Data tab and leaves it. */
-  async field(label: string | RegExp, value: string): Promise<void> {
-    const panel = this.page.getByRole("tabpanel").first();
-    const field = panel.getByLabel(label).first();
-    if (await field.evaluate((node) => node.tagName === "SELECT")) await field.selectOption({ label: value });
-    else { await field.fill(value); await field.press("Enter"); }
+  get margin(): Locator { return this.page.getByRole("complementary", { name: "Margin" }); }
+
+  /** Chooses an element by its name with the keyboard, as a person does who walks the drawing with Tab. */
+  async choose(name: string | RegExp): Promise<void> {
+    const element = this.canvas.getByRole("button", { name }).first();
+    await element.focus();
+    await this.page.keyboard.press("Enter");
+    await expect(this.margin.getByRole("tab", { name: "Data" })).toHaveAttribute("aria-selected", "true");
+  }
+  /** Enters values into the Data tab of the chosen element: label and what is typed or chosen. `group` is a heading to look under. */
+  async enter(values: Readonly<Record<string, string>>, group?: string): Promise<void> {
+    const place = group ? this.margin.locator("details", { has: this.page.locator("summary", { hasText: group }) }).last() : this.margin;
+    if (group && !(await place.evaluate((node) => (node as HTMLDetailsElement).open))) await place.locator("summary").first().click();
+    for (const [label, value] of Object.entries(values)) {
+      const field = place.getByLabel(label, { exact: false }).first();
+      if (!(await field.isVisible())) await field.evaluate((node) => { const details = node.closest("details"); if (details) details.open = true; });
+      if (await field.evaluate((node) => node.tagName === "SELECT")) await field.selectOption({ label: value });
+      else {
+        await field.fill(value);
+        await field.press("Enter");
+      }
+    }
+  }
+  /** The redlines in the margin, as rule names with the sentence each shows. */
+  async redlines(): Promise<{ rule: string; text: string }[]> {
+    await this.margin.getByRole("tab", { name: /^Redlines/ }).click();
+    return this.margin.locator("li[data-rule]").evaluateAll((items) => items.map((item) => ({ rule: item.getAttribute("data-rule") ?? "", text: (item.textContent ?? "").trim() })));
+  }
+  async expectRedline(rule: string, there = true): Promise<void> {
+    await this.margin.getByRole("tab", { name: /^Redlines/ }).click();
+    const item = this.margin.locator(`li[data-rule="${rule}"]`);
+    if (there) await expect(item.first()).toBeVisible();
+    else await expect(item).toHaveCount(0);
+  }
+  /** Opens a schedule in the drawer. */
+  async schedule(name: "Conductors" | "Raceways" | "Equipment"): Promise<Locator> {
+    const tab = this.page.getByRole("tab", { name: new RegExp(`^${name}`) });
+    if ((await tab.getAttribute("aria-selected")) !== "true") await tab.click();
+    const grid = this.page.getByRole("region", { name: "Schedules" }).getByRole("grid");
+    await grid.waitFor();
+    return grid;
+  }
+  /** Types into a cell of the open schedule, found by its row's tag and its column's heading. */
+  async cell(grid: Locator, tag: string, column: string | RegExp, value: string): Promise<Locator> {
+    const heads = await grid.getByRole("columnheader").allInnerTexts();
+    const index = heads.findIndex((head) => (typeof column === "string" ? head.trim() === column : column.test(head)));
+    if (index < 0) throw new Error(`no column ${String(column)} among ${heads.join(" | ")}`);
+    const row = grid.getByRole("row").filter({ has: this.page.getByRole("gridcell", { name: tag, exact: true }).or(this.page.getByRole("rowheader", { name: tag, exact: true })) }).first();
+    const cell = row.locator('[role="gridcell"], [role="rowheader"]').nth(index);
+    await cell.scrollIntoViewIfNeeded();
+    await cell.click();
+    await this.page.keyboard.type(value);
+    await this.page.keyboard.press("Enter");
+    return cell;
   }
   async saved(): Promise<void> {
     await expect(this.page.getByTestId("save-state")).toHaveText(/All changes saved/, { timeout: 20_000 });

@@ -1,0 +1,85 @@
+import { demoPeople } from "@/seeders/demoAccounts";
+import { expect, signIn, test } from "./support/profiles";
+import { SheetHand } from "./support/sheet";
+
+const stamp = Date.now().toString(36).slice(-5);
+const designer = { name: "Runa Tallgrass", email: `runa-${stamp}@example.test`, password: "a-meadow-of-tall-grass" };
+
+test("a new designer draws a system from an empty sheet, repairs three mistakes, and a licensee seals it", async ({ profile }) => {
+  test.setTimeout(300_000);
+
+  await test.step("an administrator adds the designer", async () => {
+    const page = await profile("administrator");
+    await signIn(page, demoPeople.administrator.email, demoPeople.administrator.password);
+    await page.goto("/people");
+    await page.getByRole("button", { name: "Add a person" }).click();
+    const form = page.getByRole("dialog");
+    await form.getByLabel("Mail address").fill(designer.email);
+    await form.getByLabel("Name", { exact: true }).fill(designer.name);
+    await form.getByLabel("Initial password").fill(designer.password);
+    await form.getByRole("checkbox", { name: /designer/i }).check();
+    await form.getByRole("button", { name: "Add the person" }).click();
+    await expect(page.getByText(designer.email)).toBeVisible();
+  });
+
+  const page = await profile("designer");
+  const hand = new SheetHand(page);
+
+  await test.step("the designer makes a job with an empty drawing and puts the licensee on it", async () => {
+    await signIn(page, designer.email, designer.password);
+    await page.goto("/jobs/new");
+    await page.getByLabel("Job number").fill(`27-${stamp}`);
+    await page.getByLabel("Name", { exact: true }).fill("Fernhollow Workshop");
+    await page.getByLabel("Address").fill("3 Fernhollow Road\nNettlecombe");
+    await page.getByLabel("Authority having jurisdiction").selectOption({ label: "Orrin County" });
+    await page.getByLabel("Occupancy").selectOption("accessory building");
+    await page.getByLabel("Record low").fill("-20");
+    await page.getByLabel("Design high").fill("32");
+    await page.getByLabel("Available fault current").fill("9500");
+    await page.getByRole("button", { name: "Make the job" }).click();
+    await page.waitForURL(/\/jobs\/[0-9a-f-]{36}$/);
+    await page.getByRole("button", { name: "Add a person" }).click();
+    const form = page.getByRole("dialog");
+    await form.getByLabel("Mail address").fill(demoPeople.licensee.email);
+    await form.getByRole("checkbox", { name: /licensee/i }).check();
+    await form.getByRole("button", { name: "Add to the job" }).click();
+    await expect(page.getByText(demoPeople.licensee.name).first()).toBeVisible();
+    await page.goto(`${page.url()}/drawing`);
+    await hand.canvas.waitFor();
+    const drawer = page.getByRole("button", { name: "Close drawer" });
+    if (await drawer.isVisible()) await drawer.click();
+  });
+
+  await test.step("draws utility, meter-main, panel, generator, inverter, battery with disconnect and a string", async () => {
+    await hand.place("utility", 8, 2);
+    await hand.place("meter-main", 2, 15);
+    await hand.enter({ "Bus rating": "200", "Short-circuit rating": "22", Spaces: "8" });
+    await hand.join([8, 6], [11, 16]);
+    await hand.place("breaker", 16, 24);
+    await hand.place("panelboard", 34, 2);
+    await hand.enter({ "Bus rating": "125", "Short-circuit rating": "10", Spaces: "12" });
+    for (const y of [8, 11, 14]) await hand.place("breaker", 42, y);
+    await hand.place("generator", 62, 2);
+    await hand.enter({ Output: "12", "Rated current": "50" });
+    await hand.place("hybrid-inverter", 62, 22);
+    await hand.place("battery", 84, 36);
+    await hand.place("disconnect", 76, 29);
+    await hand.enter({ "Used on": "battery dc" });
+    await hand.place("pv-string", 62, 42);
+  });
+
+  await test.step("joins them by dragging from port to port", async () => {
+    await hand.join([16, 24], [43, 8]);
+    await hand.join([65, 12.6], [43, 11]);
+    await hand.join([66, 22], [43, 14]);
+    await hand.join([76, 29], [71.6, 29.3]);
+    await hand.join([79, 29], [84, 36]);
+    await hand.join([62, 46], [64.5, 33.3]);
+    await hand.join([85.5, 37], [70.8, 33.3]);
+    await expect(page.getByRole("tab", { name: /^Conductors/ })).toContainText("8");
+  });
+  await page.screenshot({ path: process.env["SHOT"] ? `${process.env["SHOT"]}/drawn.png` : undefined });
+  console.log(await hand.redlines());
+  console.log(await hand.canvas.getByRole("button").evaluateAll((all) => all.map((each) => each.getAttribute("aria-label"))));
+  for (const name of ["Conductors", "Equipment", "Raceways"] as const) { const grid = await hand.schedule(name); console.log(await grid.getByRole("columnheader").allInnerTexts()); await page.screenshot({ path: `${process.env["SHOT"]}/grid-${name}.png` }); }
+});
