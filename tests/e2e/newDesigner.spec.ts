@@ -78,8 +78,49 @@ test("a new designer draws a system from an empty sheet, repairs three mistakes,
     await hand.join([85.5, 37], [70.8, 33.3]);
     await expect(page.getByRole("tab", { name: /^Conductors/ })).toContainText("8");
   });
+  await test.step("draws a wireway with two circuits and a nipple with the data cable", async () => {
+    await hand.place("wireway", 40, 36);
+    await hand.enter({ Width: "4", Height: "4" });
+    await hand.place("nipple", 78, 40);
+    await hand.enter({ "Trade size": "3/4 in" });
+    for (const circuit of ["F3", "F4"]) await hand.through(circuit, "WW-1, wireway");
+    await hand.through("K-1", "N-1, nipple");
+  });
+
+  await test.step("enters ratings in the equipment schedule and conductors in theirs", async () => {
+    const equipment = await hand.schedule("Equipment");
+    for (const [tag, values] of Object.entries({
+      "CB-1": { "Trip rating A": "200", "Interrupting rating kA": "22" }, "CB-2": { "Trip rating A": "60", "Interrupting rating kA": "22" },
+      "CB-3": { "Trip rating A": "60", "Interrupting rating kA": "10" }, "CB-4": { "Trip rating A": "60", "Interrupting rating kA": "10" },
+      "CB-5": { "Trip rating A": "60", "Interrupting rating kA": "10" }, "CB-6": { "Trip rating A": "60", "Interrupting rating kA": "10" },
+    })) for (const [column, value] of Object.entries(values)) await hand.cell(equipment, tag, column, value);
+    await expect(hand.canvas.getByRole("button", { name: "Circuit breaker CB-5, 60 A 2P" })).toBeAttached();
+    const conductors = await hand.schedule("Conductors");
+    for (const [tag, size, neutral, ground] of [["F2", "6 AWG", "6 AWG", "10 AWG"], ["F3", "6 AWG", "6 AWG", "10 AWG"], ["F4", "8 AWG", "8 AWG", "10 AWG"]] as const) {
+      await hand.cell(conductors, tag, "Size", size);
+      await hand.cell(conductors, tag, "Neutral", neutral);
+      await hand.cell(conductors, tag, "EGC", ground);
+    }
+    await page.getByRole("button", { name: "Close drawer" }).click();
+  });
   await page.screenshot({ path: process.env["SHOT"] ? `${process.env["SHOT"]}/drawn.png` : undefined });
-  console.log(await hand.redlines());
-  console.log(await hand.canvas.getByRole("button").evaluateAll((all) => all.map((each) => each.getAttribute("aria-label"))));
-  for (const name of ["Conductors", "Equipment", "Raceways"] as const) { const grid = await hand.schedule(name); console.log(await grid.getByRole("columnheader").allInnerTexts()); await page.screenshot({ path: `${process.env["SHOT"]}/grid-${name}.png` }); }
+
+  await test.step("sees three mistakes underlined: no interlock, a breaker above its conductor, data with power", async () => {
+    await hand.expectRedline("sources-not-interlocked");
+    await hand.choose(/^Hybrid inverter INV-1/);
+    await hand.enter({ "Largest ac overcurrent device": "50", "Ac output current": "32" });
+    await hand.through("K-1", "WW-1, wireway");
+    for (const end of [/^Circuit breaker CB-5/]) {
+      await hand.choose(end);
+      await hand.enter({ "Terminal marked": "75 °C" }, "Load port");
+    }
+    await hand.choose(/^Hybrid inverter INV-1/);
+    await hand.enter({ "Terminal marked": "75 °C" }, "Ac port");
+    await hand.expectRedline("ocpd-above-conductor");
+    await hand.expectRedline("class2-with-power");
+    for (const sentence of [/can be closed together/, /CB-5 is 60 A on 8 AWG/, /K-1 \(Class 2\)/]) {
+      await expect(hand.canvas.getByRole("button", { name: sentence })).toBeAttached();
+    }
+    console.log(await hand.redlines());
+  });
 });

@@ -68,6 +68,11 @@ export class SheetHand {
       }
     }
   }
+  /** Chooses a circuit and adds a raceway to its route from the list. */
+  async through(circuit: string, raceway: string): Promise<void> {
+    await this.choose(new RegExp(`^Circuit, .* ${circuit},`));
+    await this.margin.getByLabel("Add a raceway to the route").selectOption({ label: raceway });
+  }
   /** The redlines in the margin, as rule names with the sentence each shows. */
   async redlines(): Promise<{ rule: string; text: string }[]> {
     await this.margin.getByRole("tab", { name: /^Redlines/ }).click();
@@ -92,8 +97,19 @@ export class SheetHand {
     const heads = await grid.getByRole("columnheader").allInnerTexts();
     const index = heads.findIndex((head) => (typeof column === "string" ? head.trim() === column : column.test(head)));
     if (index < 0) throw new Error(`no column ${String(column)} among ${heads.join(" | ")}`);
-    const row = grid.getByRole("row").filter({ has: this.page.getByRole("gridcell", { name: tag, exact: true }).or(this.page.getByRole("rowheader", { name: tag, exact: true })) }).first();
-    const cell = row.locator('[role="gridcell"], [role="rowheader"]').nth(index);
+    const row = grid.getByRole("row").filter({ has: this.page.locator('[aria-colindex="1"]', { hasText: new RegExp(`^${tag}(,|$)`) }) }).first();
+    // Only rows near the window are there: the wheel goes to the top, then down until the row shows.
+    const box = await grid.boundingBox();
+    if (!box) throw new Error("The schedule is not shown.");
+    if (!(await row.isVisible())) {
+      await this.page.mouse.move(box.x + box.width / 2, box.y + box.height / 2);
+      await this.page.mouse.wheel(0, -10_000);
+      for (let turns = 0; turns < 60 && !(await row.isVisible()); turns += 1) {
+        await this.page.mouse.wheel(0, 84);
+        await this.page.waitForTimeout(40);
+      }
+    }
+    const cell = row.getByRole("gridcell").nth(index);
     await cell.scrollIntoViewIfNeeded();
     await cell.click();
     await this.page.keyboard.type(value);
