@@ -70,7 +70,7 @@ function Facts({ revision }: { revision: CounterRevision }) {
     ["Seal code", seal.sealCode],
     ["Purpose", revision.purpose],
     ["Code", `NEC ${revision.edition}`],
-    ["Checked", `${revision.rulesRun} rules run: must-fix ${counts.mustFix}, needs data ${counts.needsData}, accepted in writing ${counts.accepted}`],
+    ["Checked", `${revision.rulesRun} rules run. Open: must-fix ${counts.mustFix}, needs data ${counts.needsData}. Accepted in writing: ${counts.accepted}`],
   ];
   return (
     <section className="mt-8 border border-ink bg-vellum p-6">
