@@ -4,6 +4,6 @@ export const paths = {
   newJob: "/jobs/new",
   job: (jobId: string) => `/jobs/${jobId}`,
   drawing: (jobId: string) => `/jobs/${jobId}/drawing`,
-  revision: (jobId: string, revisionId: string) => `/jobs/${jobId}/revisions/${revisionId}`,
+  revision: (jobId: string, revisionId: string) => `/jobs/${jobId}/review/${revisionId}`,
   counter: (jobId: string) => `/counter/${jobId}`,
 };

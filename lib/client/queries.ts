@@ -1,4 +1,5 @@
 import { useMutation, useQuery, useQueryClient } from "@tanstack/react-query";
+import type { RevisionAnswer } from "@/lib/api";
 import { api } from "./api";
 
 /** Names of what is fetched, so that a change can say what it made stale. */
@@ -22,7 +23,9 @@ export const useJobs = () => useQuery({ queryKey: keys.jobs, queryFn: api.jobs, 
 export const useJob = (jobId: string) => useQuery({ queryKey: keys.job(jobId), queryFn: () => api.job(jobId) });
 export const useMembers = (jobId: string, enabled = true) => useQuery({ queryKey: keys.members(jobId), queryFn: () => api.members(jobId), enabled });
 export const useRevisions = (jobId: string) => useQuery({ queryKey: keys.revisions(jobId), queryFn: () => api.revisions(jobId) });
-export const useRevision = (id: string) => useQuery({ queryKey: keys.revision(id), queryFn: () => api.revision(id) });
+/** `poll` says how soon to ask again, in ms, while something is under way; false to leave it. */
+export const useRevision = (id: string, poll: (data: RevisionAnswer | undefined) => number | false = () => false) =>
+  useQuery({ queryKey: keys.revision(id), queryFn: () => api.revision(id), refetchInterval: (query) => poll(query.state.data) });
 export const useJurisdictions = () => useQuery({ queryKey: keys.jurisdictions, queryFn: api.jurisdictions });
 export const usePeople = (companyId: string | undefined) =>
   useQuery({ queryKey: keys.people(companyId ?? ""), queryFn: () => api.people(companyId ?? ""), enabled: companyId !== undefined });
