@@ -12,7 +12,7 @@ const SYMBOL_WORDS: readonly (readonly [string, string])[] = [
   ["utility", "UTILITY SERVICE"], ["meter", "UTILITY METER"], ["generator", "GENERATOR"], ["pv", "PV STRING"], ["battery", "BATTERY"],
   ["inverter", "HYBRID INVERTER"], ["breaker", "BREAKER"], ["plugon", "PLUG-ON, HOLD-DOWN"], ["switch", "SWITCH"], ["fusedswitch", "FUSED SWITCH"],
   ["contactor", "CONTACTOR, COIL"], ["doublethrow", "TRANSFER SWITCH"], ["interlock", "INTERLOCK"], ["ct", "CURRENT SENSOR"], ["spd", "SURGE DEVICE"],
-  ["load", "BRANCH LOAD"], ["motor", "MOTOR"], ["rod", "GROUND ROD"], ["ground", "ELECTRODE"], ["mbj", "NEUTRAL-GROUND BOND"], ["estop", "SHUTDOWN INITIATOR"],
+  ["load", "BRANCH LOAD"], ["motor", "MOTOR"], ["rod", "GROUND ROD"], ["ground", "ELECTRODE"], ["mbj", "N-G BOND"], ["estop", "SHUTDOWN INITIATOR"],
 ];
 const SYSTEM_WORDS: readonly (readonly [System, string])[] = [
   ["ac", "AC POWER"], ["pv-dc", "PV DC"], ["battery-dc", "BATTERY DC"], ["ground", "GROUNDING"], ["data", "DATA, CLASS 2"],
@@ -32,7 +32,7 @@ function symbolSample(symbol: string): LegendEntry["sample"] {
     const scale = Math.min(1, SAMPLE.width / width, SAMPLE.height / height);
     const move = { x: x + SAMPLE.width / 2 - (scale * (bounds.left + bounds.right)) / 2, y: y - (scale * (bounds.top + bounds.bottom)) / 2 };
     // Lines keep their weight however much the symbol shrinks.
-    return [group(drawn.paths.map((each) => ({ ...each, weight: each.weight / Math.max(scale, 0.7) })), { ...move, scale, layer: "symbol" })];
+    return [group(drawn.paths.map((each) => ({ ...each, weight: (each.weight * 0.8) / Math.max(scale, 0.4) })), { ...move, scale, layer: "symbol" })];
   };
 }
 
