@@ -2,7 +2,7 @@
 
 import { useState } from "react";
 import type { RevisionAnswer } from "@/lib/api";
-import { api } from "@/lib/client/api";
+import { ApiProblem, api } from "@/lib/client/api";
 import { calendarWords, momentWords } from "@/lib/client/dates";
 import { keys, useChange } from "@/lib/client/queries";
 import { Digest } from "@/components/counter/Digest";
@@ -49,6 +49,7 @@ function Seal({ revision }: { revision: RevisionAnswer }) {
   const [comment, setComment] = useState("");
   const [returning, setReturning] = useState(false);
   const clear = revision.sealRefusals.length === 0;
+  const wrong = seal.error instanceof ApiProblem && seal.error.field === "password";
   return (
     <>
       <ul className="mt-2 list-none border-t border-g1">
@@ -59,10 +60,10 @@ function Seal({ revision }: { revision: RevisionAnswer }) {
       </ul>
       {revision.returnedBy && <blockquote className="mt-3 border-l-[3px] border-blue pl-3 text-text"><p className="whitespace-pre-line">{revision.returnComment}</p><footer className="text-label text-ink2">Returned by {revision.returnedBy}</footer></blockquote>}
       {revision.may.seal ? (
-        <form className="mt-3" onSubmit={(event) => { event.preventDefault(); seal.mutate(password, { onSettled: () => setPassword("") }); }}>
+        <form className="mt-3" onSubmit={(event) => { event.preventDefault(); seal.mutate(password); setPassword(""); }}>
           <p className="mb-3 text-label text-ink2">Sealing asks for your password again, prints the drawing digest and a seal code on every sheet, freezes the bytes and stores the digest of the file apart. Seal only what is under your responsible charge.</p>
-          <TextField label="Your password" type="password" autoComplete="current-password" value={password} onChange={(event) => setPassword(event.target.value)} />
-          <Refused error={seal.error} />
+          <TextField label="Your password" type="password" autoComplete="current-password" value={password} error={wrong ? "This is not your password. Nothing was sealed." : undefined} onChange={(event) => { setPassword(event.target.value); if (wrong) seal.reset(); }} />
+          {!wrong && <Refused error={seal.error} />}
           <div className="mt-3 flex flex-wrap gap-2">
             <Button type="submit" look="primary" busy={seal.isPending} disabled={!clear || password === ""}>Seal Rev {revision.letter}</Button>
             {revision.may.return && <Button onClick={() => setReturning(true)}>Return with comments</Button>}

@@ -9,6 +9,16 @@ import type { CellValue, Schedule, ScheduleRow } from "./types";
 const STATUS = equipmentSchema.shape.status.options;
 const EXPOSURE = locationSchema.shape.exposure.unwrap().options;
 
+/** Heading of a column that several kinds share: their words where they agree, else the words all of them end with (Trip rating, Continuous rating: Rating). */
+function sharedLabel(labels: readonly string[]): string | undefined {
+  const [first, ...others] = [...new Set(labels)].map((label) => label.toLowerCase().split(" "));
+  if (!first || others.length === 0) return labels[0];
+  let common = 0;
+  while (common < first.length && others.every((each) => each.at(-1 - common) === first.at(-1 - common))) common += 1;
+  const words = first.slice(first.length - common).join(" ");
+  return words ? words.charAt(0).toUpperCase() + words.slice(1) : labels[0];
+}
+
 /** Equipment: tag, kind and place, and every value that the kinds on the sheet show, each a column that is empty where a kind has none. */
 export function equipmentSchedule(graph: DrawingGraph): Schedule {
   const { equipment } = graph.drawing;
@@ -24,7 +34,7 @@ export function equipmentSchedule(graph: DrawingGraph): Schedule {
     const options = [...new Set(described.flatMap((each) => (each.type === "choice" ? each.options : each.type === "flag" ? ["yes", "no"] : [])))];
     const value = (row: ScheduleRow): CellValue => (property(row, name) ? of(row).props[name] ?? null : null);
     return {
-      id: name, label: sample?.label ?? name, unit: sample?.type === "number" ? sample.unit : "", group: sample?.group === "rating" ? "Ratings" : "Construction and settings",
+      id: name, label: sharedLabel(described.map((each) => each.label)) ?? name, unit: sample?.type === "number" ? sample.unit : "", group: sample?.group === "rating" ? "Ratings" : "Construction and settings",
       width: sample?.type === "number" ? 92 : 118, right: sample?.type === "number", value, fields: () => [`props.${name}`], when: (row) => property(row, name) !== undefined,
       ...(options.length > 0 ? { options } : {}),
       write: (row, text) => {

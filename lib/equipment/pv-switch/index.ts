@@ -8,7 +8,7 @@ export const pvSwitch = defineKind({
     ...identity,
     channels: number("Circuits switched together", "", 1, 8, { integer: true, group: "construction" }),
     voltageV: number("Dc voltage rating", "V", 10, 1500, { rated: true }),
-    ratingA: number("Rating, each circuit", "A", 0.1, 500, { rated: true }),
+    ratingA: number("Circuit rating", "A", 0.1, 500, { rated: true }),
     lockable: flag("Lockable open"),
   },
   defaults: { channels: 2 },
