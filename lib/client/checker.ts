@@ -12,6 +12,9 @@ export interface Checker {
   stop: () => void;
 }
 
+/** Checks run after the first one while nothing is asked for: the engine compiles them, so that the first edit is answered as fast as the rest. */
+const WARM_UPS = 4;
+
 /** Starts the checker's worker. `onResult` is called with the result and the drawing it belongs to. */
 export function startChecker(onResult: (result: CheckResult, drawing: Drawing) => void, onError: (reason: string) => void): Checker {
   const worker = new Worker(new URL("./checkerWorker.ts", import.meta.url), { type: "module" });
@@ -20,6 +23,7 @@ export function startChecker(onResult: (result: CheckResult, drawing: Drawing) =
   let timer: ReturnType<typeof setTimeout> | null = null;
   let wanted: Drawing | null = null;
   let running = false;
+  let warm = 0;
   const run = async (): Promise<void> => {
     if (running || !wanted) return;
     const drawing = wanted;
@@ -29,6 +33,7 @@ export function startChecker(onResult: (result: CheckResult, drawing: Drawing) =
       const result = await remote.check(drawing);
       // A newer drawing waits: its own result follows at once, this one would flicker.
       if (!wanted) onResult(result, drawing);
+      for (; warm < WARM_UPS && !wanted; warm++) await remote.check(drawing);
     } catch (error) {
       onError(error instanceof Error ? error.message : String(error));
     }

@@ -8,7 +8,7 @@ import type { ElementRef } from "@/lib/diagram/schema";
 import { CanvasActionsContext, type CanvasActions } from "./canvasActions";
 import { CircuitView } from "./circuitView";
 import { ElementView } from "./elementView";
-import { nodeId, refOf, toFlow, type Flow } from "./flow";
+import { createFlow, nodeId, refOf } from "./flow";
 import { Overlay } from "./overlay";
 import { SHEET_NODE, SheetView } from "./sheetView";
 import { useDragging } from "./useDragging";
@@ -31,10 +31,8 @@ export function Canvas({ start }: { start: { x: number; y: number; zoom: number 
   const frame = useRef<HTMLDivElement>(null);
   const { zoom } = useCanvasView();
   const detail = zoom < DETAIL_ZOOM ? "tags" : "full";
-  const [before, setBefore] = useState<{ graph: unknown; detail: string; flow: Flow } | null>(null);
-  const flow = useMemo(() => toFlow(graph, { detail }, before?.flow ?? null), [graph, detail, before]);
-  // The last flow is kept so that parts that did not change keep their objects; it settles after one more pass.
-  if (before?.graph !== graph || before.detail !== detail) setBefore({ graph, detail, flow });
+  const [flowOf] = useState(createFlow);
+  const flow = useMemo(() => flowOf(graph, { detail }), [flowOf, graph, detail]);
 
   const { onPositions, onDragStop, resize, bend } = useDragging(flow.nodes);
   const { preview, grabPort, pressSheet } = useJoining();

@@ -153,3 +153,9 @@ export function toFlow(graph: DrawingGraph, options: OneLineOptions, before: Flo
     .filter((edge): edge is CircuitEdge => edge !== null).map((edge) => reuse(edge, edgesBefore));
   return { nodes, edges };
 }
+
+/** `toFlow` that remembers its last answer, so that parts that did not change keep their objects from one drawing to the next. */
+export function createFlow(): (graph: DrawingGraph, options: OneLineOptions) => Flow {
+  let last: Flow | null = null;
+  return (graph, options) => last = toFlow(graph, options, last);
+}

@@ -76,7 +76,7 @@ export function TopBar({ facts, mayIssue, people, onFind, onFit }: { facts: BarF
         <button type="button" className={QUIET} aria-label="Whole sheet" title="Whole sheet (Shift 1)" onClick={onFit}><Icon name="fit" size={16} /></button>
       </div>
       <div className="flex-1 border-l border-desk2" />
-      <ul aria-label="People on this job" className="flex items-center pl-3">
+      <ul aria-label="People on this job" className="flex items-center px-3">
         {people.slice(0, 4).map((name) => <li key={name} title={name} className="-ml-1.5 grid size-7 place-items-center rounded-full border border-ink bg-paper text-small font-finding stretch-label"><span aria-label={name}>{name.split(/\s+/).map((word) => word[0] ?? "").join("").slice(0, 2).toUpperCase()}</span></li>)}
       </ul>
       <IssueCell jobId={facts.jobId} mayIssue={mayIssue} />

@@ -53,7 +53,8 @@ export function placeMarks(graph: DrawingGraph, findings: readonly Finding[], op
       const box = { x: spot.x - half, y: spot.y - half, width: half * 2, height: half * 2 };
       return { ...spot, box, cost: taken.reduce((sum, other) => sum + overlap(box, other), 0) + symbols.reduce((sum, other) => sum + overlap(box, other) / 4, 0) };
     });
-    const best = spots.find((spot) => spot.cost < 1) ?? spots.reduce((a, b) => (b.cost < a.cost ? b : a));
+    // A mark may touch lettering by a corner; it must not hide it.
+    const best = spots.find((spot) => spot.cost < half * half * 0.3) ?? spots.reduce((a, b) => (b.cost < a.cost ? b : a));
     taken.push(best.box);
     return [{ finding, kind, number, tag, x: best.x, y: best.y }];
   });
