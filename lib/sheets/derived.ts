@@ -1,5 +1,7 @@
 import type { DrawingGraph } from "@/lib/diagram/graph";
 import type { OperatingState, StateGroup, StateSpace } from "@/lib/states/types";
+import { busChecks } from "@/lib/rules/interconnection/busbar-no-method";
+import type { SheetContext } from "./context";
 import { fitColumns, type Table } from "./table";
 
 const GROUPS: readonly (readonly [StateGroup, string])[] = [["utility", "UTILITY"], ["island", "ISLAND"], ["generator", "GENERATOR"], ["off", "OFF"]];
@@ -59,4 +61,18 @@ export function interlocksTable(graph: DrawingGraph): Table | null {
   });
   if (rows.length === 0) return null;
   return { title: "INTERLOCKS", columns: fitColumns([{ head: "LOCK" }, { head: "BETWEEN" }, { head: "KIND" }, { head: "EFFECT" }], rows, 210), rows };
+}
+
+const PATH_WORDS: Readonly<Record<string, string>> = {
+  sum: "SUM", "opposite ends": "120 %", "all devices": "ALL DEVICES", "center-fed": "CENTER-FED", "power control": "POWER CONTROL", none: "NO PATH",
+};
+/** Busbars that several sources share: sum against limit on the path each passes by. Null without any that is worked out. */
+export function busTable({ drawing, graph, states }: SheetContext): Table | null {
+  const { edition } = drawing.site;
+  const rows = busChecks({ drawing, graph, edition, states: () => states, limit: () => 0 }).map((each) => [
+    [tag(graph, each.bus), each.primary === "generator" ? "GEN" : "", PATH_WORDS[each.path] ?? each.path].filter(Boolean).join(" "), `${each.sumA.toFixed(2)} A`, `${Math.round(each.limitA * 100) / 100} A`,
+  ]);
+  if (rows.length === 0) return null;
+  const heads = [{ head: "BUS, 705.12(B)" }, { head: "SUM", anchor: "end" as const }, { head: "LIMIT", anchor: "end" as const }];
+  return { title: "BUS CHECKS", columns: fitColumns(heads, rows, 150), rows };
 }

@@ -42,12 +42,24 @@ export function fitText(words: string, size: number, face: Face, width: number):
   return `${characters.join("").trimEnd()}..`;
 }
 
+/** Words that must not begin a line: the unit stays with its figure. */
+const UNITS = new Set(["kA", "A", "V", "kW", "kWh", "kVA", "IN", "FT", "%", "°C", "HP", "AWG", "kcmil", "×"]);
+const bare = (word: string): string => word.replace(/[,.;:)]+$/, "");
+/** Words of a paragraph; a unit or a sign is taken with the figure before it. */
+function unbroken(paragraph: string): string[] {
+  return paragraph.split(" ").filter(Boolean).reduce<string[]>((words, word) => {
+    const last = words.at(-1);
+    if (last !== undefined && UNITS.has(bare(word)) && /\d$/.test(last)) words[words.length - 1] = `${last} ${word}`;
+    else words.push(word);
+    return words;
+  }, []);
+}
 /** Breaks words into lines no wider than `width`; a single word that is wider stays whole. */
 export function wrapText(words: string, size: number, face: Face, width: number): string[] {
   const lines: string[] = [];
   for (const paragraph of words.split("\n")) {
     let line = "";
-    for (const word of paragraph.split(" ").filter(Boolean)) {
+    for (const word of unbroken(paragraph)) {
       const longer = line ? `${line} ${word}` : word;
       if (line && textWidth(longer, size, face) > width) { lines.push(line); line = word; }
       else line = longer;

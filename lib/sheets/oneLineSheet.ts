@@ -1,7 +1,7 @@
 import { bottomAreas } from "./areas";
 import { cautionPrimitives, stripPrimitives } from "./bottom";
 import type { SheetContext, SheetPage, SheetWords } from "./context";
-import { interlocksTable, statesTable } from "./derived";
+import { busTable, interlocksTable, statesTable } from "./derived";
 import { framePrimitives } from "./frame";
 import { oneLine } from "./oneline";
 import { layered, sheetPx, type Primitive } from "./primitives";
@@ -12,7 +12,7 @@ import { titleBlockPrimitives } from "./titleBlock";
 /** Tables derived from the drawing, where the drawing gives them a place. */
 function derivedTables(context: SheetContext): Primitive[] {
   const { graph, drawing, states } = context;
-  const made: Partial<Record<keyof typeof drawing.sheet.tables, Table | null>> = { states: statesTable(graph, states), interlocks: interlocksTable(graph) };
+  const made: Partial<Record<keyof typeof drawing.sheet.tables, Table | null>> = { states: statesTable(graph, states), interlocks: interlocksTable(graph), "bus-checks": busTable(context) };
   return (Object.keys(made) as (keyof typeof made)[]).flatMap((name) => {
     const place = drawing.sheet.tables[name];
     const table = made[name];

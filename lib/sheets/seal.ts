@@ -10,11 +10,10 @@ export function sheetDate(iso: string): string {
   return name ? `${name} ${Number(day)}, ${year}` : letter(iso);
 }
 
-/** Lines printed under the seal. */
-export const sealLines = (seal: SealOnSheet): string[] => [
-  letter(`${seal.licensee}, ${seal.title}`), letter(`${seal.state} LICENSE ${seal.number}`),
-  `SIGNED ${sheetDate(seal.signedOn)}`, `LICENSE EXPIRES ${sheetDate(seal.expiresOn)}`,
-];
+/** Lines printed beside the seal, broken to a width. */
+export const sealLines = (seal: SealOnSheet, widthPx: number): string[] => [
+  seal.licensee, seal.title, `${seal.state} license ${seal.number}`, "Signed", sheetDate(seal.signedOn), "License expires", sheetDate(seal.expiresOn), seal.legend,
+].filter(Boolean).flatMap((line) => wrapText(letter(line), LETTERING.note.size, "narrow", widthPx));
 
 /** Letters around a circle, centered at the top or the bottom of it; each stands upright to the ring. */
 function around(cx: number, cy: number, radius: number, words: string, bottom: boolean): Primitive[] {
@@ -41,14 +40,21 @@ function ringSeal(cx: number, cy: number, radius: number, seal: SealOnSheet): Pr
     const inner = radius - 6, outer = radius - 2;
     return `M${n(cx + inner * Math.cos(angle))} ${n(cy + inner * Math.sin(angle))}L${n(cx + outer * Math.cos(angle))} ${n(cy + outer * Math.sin(angle))}`;
   }).join("");
-  const inner = radius - 31;
+  const inner = radius - 24;
   const middle = (radius - 6 + inner) / 2;
-  const title = wrapText(letter(seal.title), 13, "narrow", 2 * inner - 16).slice(0, 2);
+  const lines = wrapText(letter(seal.title), 13, "narrow", 2 * inner - 16);
+  // A title too long for the ring stands beside it only.
+  const title = lines.length <= 2 && lines.every((line) => textWidth(line, 13, "narrow") <= 2 * inner - 10) ? lines : [];
   const number = letter(seal.number);
+  const name = letter(seal.licensee);
+  const legend = letter(seal.legend || seal.state);
+  // Both words share the ring where it is long enough; the legend stands beside the seal in any case.
+  const length = (words: string) => textWidth(words, LETTERING.keynote.size, "normal") + words.length * 0.6;
+  const below = length(name) + length(legend) < 2 * Math.PI * (middle - 5) * 0.94 ? legend : "";
   const numberSize = Math.min(17, (2 * inner - 14) / textWidth(number, 1, "normal"));
   return [
     path(ellipseData(cx, cy, radius), ring), path(ellipseData(cx, cy, radius - 6), ring), path(ticks, ring), path(ellipseData(cx, cy, inner), ring),
-    ...around(cx, cy, middle, letter(seal.licensee), false), ...around(cx, cy, middle, letter(seal.legend || seal.state), true),
+    ...around(cx, cy, middle, name, false), ...(below ? around(cx, cy, middle, below, true) : []),
     ...title.map((line, i) => text(cx, cy - 12 - (title.length - 1 - i) * 14, line, "note", { anchor: "middle", ink: "seal", layer: "symbol" })),
     text(cx, cy + 10 + (title.length - 1) * 3, number, "callout", { size: Math.max(LETTERING.keynote.size, numberSize), anchor: "middle", ink: "seal", layer: "symbol" }),
   ];

@@ -13,6 +13,9 @@ const COLUMN = 92;
 /** Heights of the lower cells, px, from the inner frame's lower edge upward. */
 const FOOT = 166, SHEET = 76, TITLE = 72, SCALE = 55, REVISIONS = 93;
 
+/** Most that a seal takes: 1-1/6 in across at half size, 2-1/3 in at full size. */
+const SEAL_RADIUS = 56;
+
 /** Where on the sheet set the findings accepted in writing are listed. */
 export interface RuleLine { acceptedOn: string }
 
@@ -111,14 +114,21 @@ function people(block: Block, { drawing }: SheetContext): void {
   block.y += LINE;
 }
 
+/** Seal at the left, its words at the right; while there is none, its place stands in the middle. */
 function sealCell(block: Block, { seal, sealPlace }: SheetContext, bottom: number): void {
   block.label(PAD, block.y, "SEAL");
-  const lines = seal ? sealLines(seal) : [];
-  const room = bottom - block.y - lines.length * LINE - 10;
-  const radius = Math.max(40, Math.min(78, room / 2));
-  block.made.push(...sealPrimitives(block.left + TITLE_PX / 2, block.y - 4 + radius, radius, seal, sealPlace));
-  const first = bottom - 8 - (lines.length - 1) * LINE;
-  lines.forEach((line, i) => block.words(PAD, first + i * LINE, line));
+  const top = block.y + 6;
+  const radius = Math.max(38, Math.min(SEAL_RADIUS, (bottom - top - 8) / 2));
+  const middle = (top + bottom) / 2;
+  const center = seal ? PAD + radius : TITLE_PX / 2;
+  block.made.push(...sealPrimitives(block.left + center, middle, radius, seal, sealPlace));
+  if (seal) {
+    const at = PAD + 2 * radius + 7;
+    const lines = sealLines(seal, TITLE_PX - at - 4);
+    const pitch = Math.min(LINE, (bottom - block.y) / lines.length);
+    const first = (block.y - LINE + bottom) / 2 - ((lines.length - 1) * pitch) / 2 + 5;
+    lines.forEach((line, i) => block.words(at, first + i * pitch, line));
+  }
   block.rule(bottom);
 }
 
@@ -126,10 +136,10 @@ function revisions(block: Block, context: SheetContext, top: number): void {
   const { left } = block;
   block.label(PAD, top + 15, "REV");
   block.label(46, top + 15, "DESCRIPTION");
-  block.label(165, top + 15, "DATE");
+  block.label(157, top + 15, "DATE");
   block.label(219, top + 15, "BY");
   const rows = 4, rowPx = 18, bottom = top + REVISIONS;
-  const lines = [38, 160, 214].map((x) => `M${n(left + x)} ${n(top)}V${n(bottom)}`);
+  const lines = [38, 152, 214].map((x) => `M${n(left + x)} ${n(top)}V${n(bottom)}`);
   for (let i = 1; i <= rows; i += 1) lines.push(`M${n(left)} ${n(bottom - rowPx * i)}H${n(left + TITLE_PX)}`);
   block.made.push(path(lines.join(""), { weight: WEIGHTS.tableLine, layer: "ground" }));
   // Newest on top of the older ones; when there are more than fit, the oldest are in the store and not on the sheet.
@@ -137,8 +147,8 @@ function revisions(block: Block, context: SheetContext, top: number): void {
     const y = bottom - 4.6 - i * rowPx;
     const cell = (dx: number, words: string, width: number) => block.words(dx, y, fitText(letter(words), 13, "narrow", width));
     cell(14, revision.letter, 22);
-    cell(44, revision.description, 112);
-    cell(165, `${revision.date.slice(5)}-${revision.date.slice(2, 4)}`, 48);
+    cell(44, revision.description, 106);
+    cell(157, `${revision.date.slice(5)}-${revision.date.slice(2, 4)}`, 56);
     cell(219, initials(revision.by), 29);
   });
   block.rule(bottom);

@@ -69,7 +69,7 @@ export function addDataAndGround(drawing: DrawingBuilder): void {
   drawing.circuit("GEC-B", "PNL-N.ground", "GE-B.ground", [{ lengthFt: 10, equipmentGround: bare("6 AWG") }], { offSheet: true });
   drawing.circuit("A1", "PV-1.ground", "INV-1.ground", [{ lengthFt: 40, equipmentGround: bare("10 AWG"), route: route("JB-1") }], { offSheet: true });
   drawing.bond("MBJ", { kind: "main bonding jumper", equipment: "mm-225", fitted: true, size: "4 AWG", closes: "always", at: { x: 3.2, y: 22.4 } });
-  drawing.bond("NS-1", { kind: "neutral strap", equipment: "g-1", fitted: false, size: null, closes: "always", at: { x: 66, y: 9.6 } });
+  drawing.bond("NS-1", { kind: "neutral strap", equipment: "g-1", fitted: false, size: null, closes: "always", at: { x: 66.6, y: 9.6 } });
 }
 
 /** Current sensors: exchange at the interconnection and at the generator. */

@@ -33,7 +33,7 @@ export function addService(drawing: DrawingBuilder): void {
   }
   drawing.join("MTR-1.load", "CB-M.line", [[8, 12], [8, 14]]);
   drawing.join("CB-M.load", "MM-225.bus@0", [[8, 17], [8, 18]]);
-  drawing.add("surge-protector", "SPD-1", [6.2, 28.6], { type: "2", shortCircuitKA: 22, voltageV: 240, listing: "UL 1449" }, { page: "M3", parent: "mm-225", location: OUTSIDE, label: { x: 1.4, y: 4.2, anchor: "start" } });
+  drawing.add("surge-protector", "SPD-1", [6.2, 28.6], { type: "2", shortCircuitKA: 22, voltageV: 240, listing: "UL 1449" }, { page: "M3", parent: "mm-225", location: OUTSIDE, label: { x: 1.4, y: 4.05, anchor: "start" } });
   drawing.join("MM-225.bus@10.6", "SPD-1.line", [[8, 28.6], [6.2, 28.6]]);
 
   const ds1 = drawing.add("disconnect", "DS-1", [26, 20], {
@@ -53,7 +53,7 @@ export function addService(drawing: DrawingBuilder): void {
   const ds2 = drawing.add("disconnect", "DS-2", [24.4, 30], {
     model: "MS-30", listing: "UL 98", current: "ac", ratingA: 30, poles: 2, voltageV: 240, shortCircuitKA: 10, visibleBlade: false, lockable: true, loadBreak: true, fused: false,
     enclosureType: "3R", handleHeightIn: 48, clearDepthIn: 48, clearWidthIn: 30, clearHeightIn: 80, serviceEquipment: false,
-  }, { page: "M6", location: place("A", "pump house", "outdoor", 33), label: { x: -0.8, y: 5.7, anchor: "start" } });
+  }, { page: "M6", location: place("A", "pump house", "outdoor", 33), label: { x: -1.2, y: 5.7, anchor: "start" } });
   both(drawing, ds2, terminal(25, ["14 AWG", "8 AWG"], "M6, marking"));
   const pump = drawing.add("load", "P-1", [29.2, 36.4], { description: "Yard pump 1 hp", use: "motor", powerKW: null, currentA: 8, continuous: true, phaseV: 240 }, { page: "Nameplate", status: "existing", rotation: 90, label: { x: 1.7, y: 0, anchor: "start" }, location: place("A", "pump house", "outdoor", 33) });
   drawing.port(pump, "line", terminal(25, ["14 AWG", "8 AWG"], "marking"));

@@ -22,7 +22,7 @@ export function addRaceways(drawing: DrawingBuilder): void {
     r(tag, "nipple", [x, y], { tradeSize, from, to, vertical, ...change }, [{ lengthFt: inches * INCH, ...INSIDE }]);
   nipple("N-1", 93.6, 28.7, true, "1", 10, "inv-1", "ww-1", { label: { x: 1.3, y: 0.2, anchor: "start" } });
   nipple("N-2", 62, 28.7, true, "1", 10, "inv-2", "ww-1", { label: { x: 1.3, y: 0.2, anchor: "start" } });
-  nipple("N-3", 56.4, 23.7, false, "2", 10, "ww-1", "ic-200", { size: { width: 1, height: 5.8 }, at: { x: 55.9, y: 20.8 }, label: { x: -0.9, y: -1.3, anchor: "start" } });
+  nipple("N-3", 56.4, 23.7, false, "2", 10, "ww-1", "ic-200", { size: { width: 1, height: 5.8 }, at: { x: 55.9, y: 20.8 }, label: { x: -0.4, y: -1.3, anchor: "start" } });
   nipple("N-4", 93.1, 47.4, true, "1", 10, "ww-2", "inv-1", { size: { width: 5.8, height: 1 }, at: { x: 90.2, y: 46.9 }, label: { x: -0.4, y: 1, anchor: "end" } });
   nipple("N-5", 62.5, 47.4, true, "1", 10, "ww-2", "inv-2", { size: { width: 5.8, height: 1 }, at: { x: 59.6, y: 46.9 }, label: { x: -0.4, y: 1, anchor: "end" } });
   const bay = { location: place("A", "battery bay", "indoor dry", 40) };
@@ -33,7 +33,7 @@ export function addRaceways(drawing: DrawingBuilder): void {
   const wireway = (tag: string, x: number, y: number, width: number, height: number, label: { x: number; y: number; anchor: "start" | "middle" }, change = {}) =>
     r(tag, "wireway", [x, y], { widthIn: 6, heightIn: 6, size: { width, height }, label, ...change }, [{ lengthFt: 5, ...INSIDE }]);
   wireway("WW-1", 57, 20, 40, 7.6, { x: 7.5, y: -0.7, anchor: "start" });
-  wireway("WW-2", 57, 49.4, 40.6, 6.5, { x: 8.3, y: -0.6, anchor: "start" });
+  wireway("WW-2", 57, 49.4, 40.6, 6.5, { x: 9.4, y: -0.6, anchor: "start" });
   wireway("WW-3", 67.8, 39.9, 17.6, 3, { x: 3, y: 1.25, anchor: "middle" }, bay);
   r("JB-1", "box", [92.4, 13], { widthIn: 12, heightIn: 10, depthIn: 6, size: { width: 12, height: 2.8 }, to: "r-s", location: place("A", "roof", "roof", 33), note: "ROOF BOX, 4X", label: { x: 6.2, y: 4.3, anchor: "end" } }, [{ lengthFt: 1, ambientC: 33, exposure: "roof" }]);
   r("JB-2", "box", [88, 46], { ...listed, widthIn: 8, heightIn: 8, depthIn: 4, size: { width: 2, height: 2 }, note: "CLASS 2 ONLY" }, [{ lengthFt: 1, ...INSIDE }]);

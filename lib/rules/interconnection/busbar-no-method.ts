@@ -1,4 +1,4 @@
-import { busbarCheck } from "@/lib/calc";
+import { busbarCheck, type BusbarPathName } from "@/lib/calc";
 import { standardRatingAtMostA } from "@/lib/code";
 import { equipmentOfNode, type ConductionEdge } from "@/lib/diagram/graph";
 import { MUST_FIX_TO_2023, sections } from "@/lib/rules/engine/meta";
@@ -60,7 +60,9 @@ function opposite(context: CheckContext, bus: string, main: string, sources: rea
   return reaches && farthest > 0 && others.every((id) => rows.get(id) === null || sources.every((source) => away(id) <= away(source)));
 }
 
-interface Judged { outcome: Outcome; draft?: FindingDraft }
+/** One bus with one primary source, worked out: the path it passes by, or none. */
+export interface BusCheck { bus: string; primary: "utility" | "generator"; path: BusbarPathName | "none"; sumA: number; limitA: number }
+interface Judged { outcome: Outcome; draft?: FindingDraft; check?: BusCheck }
 function judge(context: CheckContext, bus: string, primary: "utilities" | "generators"): Judged | null {
   const list = branches(context, bus);
   const feeds = list.filter((each) => each[primary].length > 0);
@@ -90,7 +92,12 @@ function judge(context: CheckContext, bus: string, primary: "utilities" | "gener
     centerFedDwelling: context.drawing.equipment[bus]?.props.busEnds === "center" && context.drawing.site.occupancy === "one- or two-family dwelling",
   };
   const result = busbarCheck(base);
-  if (result.detail.complies) return { outcome: PASS };
+  const passing = result.detail.paths.find((path) => path.name === result.value);
+  const check: BusCheck = {
+    bus, primary: primary === "utilities" ? "utility" : "generator", path: result.value,
+    sumA: passing?.sumA ?? mainA + result.detail.sourceA, limitA: passing?.limitA ?? busA,
+  };
+  if (result.detail.complies) return { outcome: PASS, check };
   const open = !oppositeEnds && !placeReader.complete && busbarCheck({ ...base, oppositeEnds: true }).detail.complies;
   if (open) return { outcome: placeReader.outcome() };
   if (result.detail.undecided) { for (const each of unknown) reader.number(each.id, "ratingA"); return { outcome: reader.outcome() }; }
@@ -100,8 +107,15 @@ function judge(context: CheckContext, bus: string, primary: "utilities" | "gener
     message: `The ${busA} A bus of ${nameOf(context, equipmentRef(bus))} passes by no path: ${mainA} A main and ${result.detail.sourceA.toFixed(2)} A of sources are ${(mainA + result.detail.sourceA).toFixed(2)} A, the breakers but the main add up to ${sum} A.`,
     steps: result.steps,
   };
-  return { outcome: found(draft), draft };
+  return { outcome: found(draft), draft, check };
 }
+
+const acBuses = ({ drawing, graph }: CheckContext): string[] =>
+  Object.keys(drawing.equipment).sort().filter((id) => graph.kind(id).capabilities.bus && graph.port(id, "bus")?.system === "ac");
+
+/** Sum and limit of every ac bus that sources share, by primary source; for the sheet. Buses that wait for data are left out. */
+export const busChecks = (context: CheckContext): BusCheck[] => acBuses(context).flatMap((bus) =>
+  (["utilities", "generators"] as const).flatMap((primary) => judge(context, bus, primary)?.check ?? []));
 
 export const busbarNoMethod: Rule = {
   meta: {
@@ -112,7 +126,7 @@ export const busbarNoMethod: Rule = {
     reads: ["equipment.props.busA", "equipment.props.ratingA", "equipment.props.continuousA", "equipment.spaces", "equipment.props.spacesTotal", "circuits.from", "circuits.to", "interlocks"],
     absorbs: ["busbar-every-panel", "busbar-not-opposite-end", "supply-breaker-counted"],
   },
-  subjects: ({ drawing, graph }) => Object.keys(drawing.equipment).sort().filter((id) => graph.kind(id).capabilities.bus && graph.port(id, "bus")?.system === "ac").map(equipmentRef),
+  subjects: (context) => acBuses(context).map(equipmentRef),
   evaluate: ({ id }, context) => {
     const results = (["utilities", "generators"] as const).map((primary) => judge(context, id, primary)).filter((each): each is Judged => each !== null);
     if (results.length === 0) return NOT_APPLICABLE;

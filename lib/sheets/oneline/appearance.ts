@@ -89,7 +89,9 @@ export function defaultPlacement(graph: DrawingGraph, id: string): Placement {
   const down = equipment.rotation === 90 ? 1 : -1;
   if (upright) return at(1.7, down * 1.5 - (down < 0 ? 0.6 : 0) + 0.2);
   const branch = equipment.props["position"] !== "main";
-  return at(equipment.rotation === 180 || equipment.mirrored ? -3 : 0, branch ? 1.35 : 2.2, { lines: branch ? "beside" : "under" });
+  const left = equipment.rotation === 180 || equipment.mirrored ? -3 : 0;
+  // A branch letters its tag and rating in one line, under its circuit's bubble.
+  return at(branch ? left - 0.9 : left, branch ? 1.72 : 2.2, { lines: branch ? "beside" : "under" });
 }
 
 /** Letters behind the tag that say what happens to the part; new work carries none. */

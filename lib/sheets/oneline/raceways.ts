@@ -1,8 +1,8 @@
 import { stretchesOf } from "@/lib/diagram/graph";
 import type { DrawingGraph } from "@/lib/diagram/graph";
 import type { Raceway } from "@/lib/diagram/schema";
-import { letter, textSpan } from "@/lib/sheets/lettering";
-import { PX_PER_UNIT, WEIGHTS, box, ellipseData, n, owned, path, sheetPx, text, type Primitive, type TextPrimitive } from "@/lib/sheets/primitives";
+import { letter, textSpan, textWidth } from "@/lib/sheets/lettering";
+import { LETTERING, PX_PER_UNIT, WEIGHTS, box, ellipseData, n, owned, path, sheetPx, text, type Primitive, type TextPrimitive } from "@/lib/sheets/primitives";
 import { STATUS_MARK, type Box, type OneLineOptions } from "./appearance";
 import { LINE_PITCH } from "./texts";
 
@@ -10,6 +10,8 @@ import { LINE_PITCH } from "./texts";
 const MARK_ACROSS = 1.8;
 const MARK_ALONG = 0.75;
 const NIPPLE_ALONG = 1;
+/** Between a tag and the line beside it. */
+const TAG_GAP_PX = 7;
 
 /**
  * Box of a raceway on the sheet, grid units. A mark without a size takes the usual one, about its place.
@@ -54,6 +56,10 @@ function defaultLabel(raceway: Raceway): { x: number; y: number } {
   return { x, y: y - 0.6 };
 }
 
+/** A band too low for two lines of lettering shows its tag alone inside; the schedule holds its size. */
+const insideLowBand = (raceway: Raceway, y: number): boolean =>
+  raceway.kind === "wireway" && !raceway.vertical && raceway.size.height < 4 && y > 0 && y < raceway.size.height;
+
 /** Tag of a raceway and the lines beside and under it. */
 export function racewayLabel(raceway: Raceway, options: OneLineOptions = {}): { tag: TextPrimitive; lines: TextPrimitive[] } {
   const label = raceway.label ?? { ...defaultLabel(raceway), anchor: "start" as const };
@@ -62,19 +68,17 @@ export function racewayLabel(raceway: Raceway, options: OneLineOptions = {}): { 
   const small = options.detail === "tags";
   const words = raceway.tag + STATUS_MARK[raceway.status];
   const heading = raceway.kind === "wireway" && Math.max(raceway.size.width, raceway.size.height) > 20;
-  const lines = small ? [] : racewayLines(raceway);
-  const build = (at: number) => text(at, y, words, heading ? "heading" : "tag", { anchor: label.anchor, ...(small ? { size: 19.5, bold: 0.5 } : {}) });
-  const tag = build(x);
-  const span = textSpan(tag.x, words, tag.size, tag.face, tag.anchor);
-  return {
-    tag,
-    lines: lines.map((line, i) => {
-      // An end-anchored label lays the first line left of the tag's start, so that the pair ends at the anchor.
-      if (label.anchor === "middle") return text(x, y + (i + 1) * LINE_PITCH * PX_PER_UNIT, line, "note", { anchor: "middle" });
-      if (i === 0) return label.anchor === "start" ? text(span.right + 7, y, line, "note") : text(span.left - 7, y, line, "note", { anchor: "end" });
-      return text(x, y + i * LINE_PITCH * PX_PER_UNIT, line, "note", { anchor: label.anchor });
-    }),
-  };
+  const lines = small || insideLowBand(raceway, label.y) ? [] : racewayLines(raceway);
+  const first = lines[0];
+  const tag = text(x, y, words, heading ? "heading" : "tag", { anchor: label.anchor, ...(small ? { size: 19.5, bold: 0.5 } : {}) });
+  const under = (line: string, i: number) => text(x, y + i * LINE_PITCH * PX_PER_UNIT, line, "note", { anchor: label.anchor });
+  if (first === undefined) return { tag, lines: [] };
+  if (label.anchor === "middle") return { tag, lines: lines.map((line, i) => under(line, i + 1)) };
+  // Tag and first line read on from left to right; the pair ends at an end anchor.
+  const pair = textWidth(first, LETTERING.note.size, "narrow") + TAG_GAP_PX;
+  const placed = label.anchor === "end" ? { ...tag, x: x - pair } : tag;
+  const right = textSpan(placed.x, words, tag.size, tag.face, tag.anchor).right + TAG_GAP_PX;
+  return { tag: placed, lines: [text(right, y, first, "note"), ...lines.slice(1).map((line, i) => under(line, i + 1))] };
 }
 
 /** A raceway as it stands on the one-line: a band, a box, a mark across its circuits, or the two ends of a nipple. */

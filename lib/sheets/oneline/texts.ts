@@ -13,7 +13,10 @@ const TAG_GROWTH = 1.5;
 export function placementOf(graph: DrawingGraph, id: string): Placement {
   const equipment = graph.drawing.equipment[id] as Equipment;
   const placement = defaultPlacement(graph, id);
-  return equipment.label ? { ...placement, ...equipment.label } : placement;
+  if (!equipment.label) return placement;
+  // A heading that stands over its enclosure has its lines beside it, since the enclosure's edge runs below.
+  const over = placement.heading && symbolOf(graph, id) === null && equipment.label.y < 0;
+  return { ...placement, ...equipment.label, ...(over ? { lines: "beside" as const } : {}) };
 }
 
 /** Half of the free width around a centered label, px: the distance to the nearest alike part in the same row. */
@@ -76,7 +79,7 @@ function lineText(graph: DrawingGraph, id: string, line: string, index: number, 
   // A converter letters its first two lines beside the symbol and the rest under it.
   if (symbolOf(graph, id) === "inverter" && index > 1) {
     const box = equipmentBox(graph, id);
-    return text(sheetPx(box.x + 0.6), sheetPx(y + 1.2 + LINE_PITCH * index - 0.15), line, "note");
+    return text(sheetPx(box.x + 0.6), sheetPx(y + first + LINE_PITCH * index), line, "note");
   }
   return note(sheetPx(x), sheetPx(y + first + LINE_PITCH * index));
 }
