@@ -1,3 +1,4 @@
+import { execFileSync } from "node:child_process";
 import { demoPeople } from "@/seeders/demoAccounts";
 import { expect, signIn, test } from "./support/profiles";
 import { SheetHand } from "./support/sheet";
@@ -103,8 +104,6 @@ test("a new designer draws a system from an empty sheet, repairs three mistakes,
     }
     await page.getByRole("button", { name: "Close drawer" }).click();
   });
-  await page.screenshot({ path: process.env["SHOT"] ? `${process.env["SHOT"]}/drawn.png` : undefined });
-
   await test.step("sees three mistakes underlined: no interlock, a breaker above its conductor, data with power", async () => {
     await hand.expectRedline("sources-not-interlocked");
     await hand.choose(/^Hybrid inverter INV-1/);
@@ -121,6 +120,48 @@ test("a new designer draws a system from an empty sheet, repairs three mistakes,
     for (const sentence of [/can be closed together/, /CB-5 is 60 A on 8 AWG/, /K-1 \(Class 2\)/]) {
       await expect(hand.canvas.getByRole("button", { name: sentence })).toBeAttached();
     }
-    console.log(await hand.redlines());
+  });
+
+  await test.step("repairs them: a smaller breaker, the cable out of the wireway, an interlock", async () => {
+    await hand.suggestion("ocpd-above-conductor", /^Set CB-5 to/);
+    await hand.suggestion("class2-with-power", /^Take K-1/);
+    await hand.suggestion("sources-not-interlocked", /^Add a mechanical interlock/);
+    await expect(hand.canvas.getByRole("button", { name: /^Circuit breaker CB-5, 4\d A 2P|^Circuit breaker CB-5, 50 A 2P/ })).toBeAttached();
+  });
+
+  await test.step("enters what is known of the rest, and issues it", async () => {
+    await hand.choose(/^main bonding jumper/);
+    await hand.enter({ Fitted: "yes, in place" });
+    await hand.choose(/^neutral strap/);
+    await hand.enter({ Fitted: "no, removed" });
+    await hand.choose(/^PV string PV-1/);
+    await hand.enter({ "Modules in series": "9", "Module open-circuit voltage": "41.2", "Module short-circuit current": "13.9", "Coefficient of open-circuit voltage": "-0.27", "Largest series fuse": "25" });
+    await hand.choose(/^Hybrid inverter INV-1/);
+    await hand.enter({ "PV input, largest voltage": "550", "Battery current, largest dc input": "120" });
+    await expect(hand.margin.locator('li[data-severity="must-fix"]')).toHaveCount(0);
+    await hand.saved();
+    await page.getByRole("link", { name: "Issue for review" }).click();
+    await page.getByRole("dialog").getByRole("button", { name: /^Issue Rev/ }).click();
+    await page.waitForURL(/\/review\//);
+  });
+
+  await test.step("a licensee answers for each open value in writing, seals, and the set is printed", async () => {
+    const licensee = await profile("licensee");
+    await signIn(licensee, demoPeople.licensee.email, demoPeople.licensee.password);
+    await licensee.goto(page.url());
+    await licensee.getByRole("heading", { name: "Open redlines" }).waitFor();
+    const open = licensee.locator("li[data-key]", { has: licensee.getByLabel("Accept in writing") });
+    for (let left = await open.count(); left > 0; left -= 1) {
+      await open.first().getByLabel("Accept in writing").fill("To be read from the rating plate before energizing.");
+      await open.first().getByRole("button", { name: "Accept this one" }).click();
+      await expect(open).toHaveCount(left - 1);
+    }
+    await licensee.getByLabel("Your password").fill(demoPeople.licensee.password);
+    await licensee.getByRole("button", { name: /^Seal Rev/ }).click();
+    await expect(licensee.getByRole("heading", { name: /is sealed/ })).toBeVisible({ timeout: 60_000 });
+    const started = licensee.waitForEvent("download");
+    await licensee.getByRole("link", { name: "Download the sealed set" }).click();
+    const words = execFileSync("pdftotext", ["-layout", await (await started).path(), "-"], { encoding: "utf8" });
+    for (const each of ["FERNHOLLOW", "MM-1", "PNL-1", "INV-1", "BT-1", "G-1", "WW-1", "N-1", "K-1", "IL-1", "SEAL CODE"]) expect(words).toContain(each);
   });
 });

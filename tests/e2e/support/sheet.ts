@@ -78,6 +78,13 @@ export class SheetHand {
     await this.margin.getByRole("tab", { name: /^Redlines/ }).click();
     return this.margin.locator("li[data-rule]").evaluateAll((items) => items.map((item) => ({ rule: item.getAttribute("data-rule") ?? "", text: (item.textContent ?? "").trim() })));
   }
+  /** Opens a redline in the margin and takes one of its suggestions. */
+  async suggestion(rule: string, label: string | RegExp): Promise<void> {
+    await this.margin.getByRole("tab", { name: /^Redlines/ }).click();
+    await this.margin.locator(`li[data-rule="${rule}"] button`).first().click();
+    await this.margin.getByRole("button", { name: label }).first().click();
+    await this.expectRedline(rule, false);
+  }
   async expectRedline(rule: string, there = true): Promise<void> {
     await this.margin.getByRole("tab", { name: /^Redlines/ }).click();
     const item = this.margin.locator(`li[data-rule="${rule}"]`);
