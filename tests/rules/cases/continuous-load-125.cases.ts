@@ -34,7 +34,7 @@ export const cases: readonly RuleCase[] = [
     edit: (d) => { delete d.circuits["f4"]; circuitOf(d, "f3").to = { equipment: "cb-l", port: "load", offset: 0 }; },
   },
   {
-    name: "a small feeder moved between both inverters and the service", source: "1.25 × 65 = 81.25 A, 4 AWG 85 A, 6 AWG 65 A", moved: true,
+    name: "a small feeder between both inverters and the service", source: "1.25 × 65 = 81.25 A, 4 AWG 85 A, 6 AWG 65 A",
     edit: (d) => { resize(d, "f1b", "6 AWG"); },
     finds: ["f1b"],
   },
