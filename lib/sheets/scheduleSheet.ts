@@ -4,7 +4,7 @@ import type { SheetContext, SheetPage, SheetWords } from "./context";
 import { drawingArea, framePrimitives } from "./frame";
 import { layered, type Primitive } from "./primitives";
 import { sheetGeometry } from "./size";
-import { ROW_PX, fitColumns, headPx, rowHeight, tableHeight, tablePrimitives, type Column, type Table } from "./table";
+import { fitColumns, headPx, rowHeight, tableHeight, tablePrimitives, type Column, type Table } from "./table";
 import { titleBlockPrimitives } from "./titleBlock";
 
 const TITLE_PX = 26;

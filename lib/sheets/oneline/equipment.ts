@@ -1,6 +1,6 @@
 import type { DrawingGraph } from "@/lib/diagram/graph";
 import type { Equipment, Point } from "@/lib/diagram/schema";
-import { PX_PER_UNIT, WEIGHTS, box, group, owned, path, polyline, sheetPx, text, type Primitive } from "@/lib/sheets/primitives";
+import { LETTERING, PX_PER_UNIT, WEIGHTS, box, group, owned, path, polyline, sheetPx, text, type Primitive } from "@/lib/sheets/primitives";
 import { bodyOf, equipmentBox, isDrawn, symbolOf, type OneLineOptions } from "./appearance";
 import { shape } from "./shape";
 import { equipmentLabel } from "./texts";
@@ -59,7 +59,7 @@ function symbolPrimitives(graph: DrawingGraph, id: string): Primitive[] {
   // Letters in a symbol stay upright however the symbol is turned.
   const letters = inner.texts.map((each) => {
     const p = turned({ x: each.x + offset.x * PX_PER_UNIT, y: each.y - each.size * 0.36 + offset.y * PX_PER_UNIT }, equipment);
-    return text(x + p.x, y + p.y + each.size * 0.36, each.text, "callout", { size: each.size, anchor: "middle", layer: "symbol" });
+    return text(x + p.x, y + p.y + each.size * 0.36, each.text, "callout", { size: Math.max(each.size, LETTERING.keynote.size), anchor: "middle", layer: "symbol" });
   });
   return [group([strokes], { x, y, ...place }), ...letters];
 }

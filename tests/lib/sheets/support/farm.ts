@@ -1,14 +1,18 @@
 import { buildGraph, type DrawingGraph } from "@/lib/diagram/graph";
 import { drawingSchema, type Circuit, type Drawing, type Equipment, type Point, type Raceway, type Section } from "@/lib/diagram/schema";
 import { emptyDrawing } from "@/lib/diagram/new";
+import { kindDefinition } from "@/lib/equipment/registry";
 
 type Part<T> = Partial<T>;
 const p = (x: number, y: number): Point => ({ x, y });
 
 export function equipment(kind: string, tag: string, at: Point, extra: Part<Equipment> = {}): Equipment {
+  const definition = kindDefinition(kind);
+  const unknown = Object.fromEntries(Object.keys(definition.properties).map((name) => [name, null]));
   return {
     kind, tag, status: "new", parent: null, integral: false, at, rotation: 0, mirrored: false, size: null, bus: null, label: null, spaces: null,
-    location: { building: null, place: null, exposure: null, ambientC: null }, props: {}, sources: {}, ports: {}, note: "", ...extra,
+    location: { building: null, place: null, exposure: null, ambientC: null }, sources: {}, ports: {}, note: "", ...extra,
+    props: { ...unknown, ...(definition.defaults as Equipment["props"]), ...extra.props },
   };
 }
 const conductor = (count: number, size: string) => ({ count, size, metal: "Cu", insulation: "THWN-2", strands: null, outerDiameterIn: null, voltageRatingV: 600, color: null } as const);
@@ -50,17 +54,17 @@ export function farm(): Drawing {
       cbf: equipment("breaker", "CB-F1", p(10, 20), { parent: "mm", spaces: [1, 3], props: { ratingA: 125, poles: 2, position: "branch", current: "ac" } }),
       ds: equipment("disconnect", "DS-1", p(26, 20), { props: { ratingA: 200, voltageV: 240, lockable: true, current: "ac" } }),
       ic: equipment("interconnect-cabinet", "IC-200", p(31, 10.2), {
-        size: { width: 22.4, height: 23.3 }, bus: { x: 14, y: 8.4, length: 11.8, vertical: true }, props: { busA: 200, enclosureType: "1", shortCircuitKA: 10, busEnds: "top" },
+        size: { width: 23, height: 23.3 }, bus: { x: 14, y: 8.4, length: 11.8, vertical: true }, props: { busA: 200, enclosureType: "1", shortCircuitKA: 10, busEnds: "top" },
       }),
       cbu: equipment("breaker", "CB-U", p(36.4, 20), { parent: "ic", spaces: [], props: { ratingA: 125, poles: 2, position: "main", current: "ac" } }),
       k1: equipment("contactor", "K1", p(40.2, 20), { parent: "ic", props: { ratingA: 200, poles: 2, interconnectDevice: true } }),
       cbg: equipment("breaker", "CB-G", p(47, 20), { parent: "ic", spaces: [2, 4], props: { ratingA: 60, poles: 2, position: "branch", current: "ac" } }),
       cbi: equipment("breaker", "CB-I1", p(47, 26), { parent: "ic", spaces: [21, 23], props: { ratingA: 45, poles: 2, position: "branch", mount: "plug-on with hold-down", current: "ac" } }),
       gen: equipment("generator", "G-1", p(58, 1), { props: { outputKW: 14, fuel: "propane", outputV: 240, ratedA: 58.3 } }),
-      inv: equipment("hybrid-inverter", "INV-1", p(88, 29.9), { props: { model: "HB-78", outputKW: 7.8, continuousA: 32.5, role: "single", firmware: "4.2.1", trackers: 1 } }),
-      pvs: equipment("pv-switch", "PVS-1", p(90.5, 38.2), { parent: "inv", integral: true, props: { channels: 1, voltageV: 600, ratingA: 30 } }),
-      str: equipment("pv-string", "PV-1", p(104, 6.2), { props: { modules: 12 } }),
-      bat: equipment("battery", "BT-1", p(108, 43), { props: { energyKWh: 12.5, nominalV: 51.2 } }),
+      inv: equipment("hybrid-inverter", "INV-1", p(70, 29.9), { props: { model: "HB-78", outputKW: 7.8, continuousA: 32.5, role: "single", firmware: "4.2.1", trackers: 1 } }),
+      pvs: equipment("pv-switch", "PVS-1", p(72.5, 38.2), { parent: "inv", integral: true, props: { channels: 1, voltageV: 600, ratingA: 30 } }),
+      str: equipment("pv-string", "PV-1", p(101, 6.2), { props: { modules: 12 } }),
+      bat: equipment("battery", "BT-1", p(86, 40), { props: { energyKWh: 12.5, nominalV: 51.2 } }),
       rod: equipment("electrode", "GE-1", p(3.2, 36), { props: { type: "two ground rods" } }),
     },
     circuits: {
@@ -75,23 +79,23 @@ export function farm(): Drawing {
       gb: circuit("BUS-G", ["ic", "bus", 1.4], ["cbg", "line"], [], factory),
       ib: circuit("BUS-I1", ["ic", "bus", 7.4], ["cbi", "line"], [], factory),
       f5: circuit("F5", ["cbg", "load"], ["gen", "load"], [p(50, 20), p(55.2, 20), p(55.2, 21.4), p(61, 21.4), p(61, 7.6)], { calloutAt: p(54, 20), sections: { a: section({ route: [{ raceway: "n3", compartment: null }, { raceway: "ww", compartment: null }, { raceway: "r5", compartment: null }] }) } }),
-      f2: circuit("F2", ["cbi", "load"], ["inv", "ac"], [p(50, 26), p(54.6, 26), p(54.6, 24.4), p(92, 24.4), p(92, 29.9)], { calloutAt: p(52, 26), sections: { a: section({ route: [{ raceway: "n3", compartment: null }, { raceway: "ww", compartment: null }, { raceway: "n1", compartment: null }] }) } }),
-      s1: circuit("S1", ["str", "dc"], ["pvs", "line1"], [p(104, 10.2), p(104, 46), p(90.5, 46), p(90.5, 41.2)], { system: "pv-dc", calloutAt: p(104, 12) }),
+      f2: circuit("F2", ["cbi", "load"], ["inv", "ac"], [p(50, 26), p(54.6, 26), p(54.6, 24.4), p(74, 24.4), p(74, 29.9)], { calloutAt: p(52, 26), sections: { a: section({ route: [{ raceway: "n3", compartment: null }, { raceway: "ww", compartment: null }, { raceway: "n1", compartment: null }] }) } }),
+      s1: circuit("S1", ["str", "dc"], ["pvs", "line1"], [p(101, 10.2), p(101, 45), p(72.5, 45), p(72.5, 41.2)], { system: "pv-dc", calloutAt: p(101, 14) }),
       s1i: circuit("PVS", ["pvs", "load1"], ["inv", "pv1"], [], { ...factory, system: "pv-dc" }),
-      d1: circuit("D1", ["bat", "dc"], ["inv", "battery"], [p(108, 43), p(108, 37.2), p(97.6, 37.2)], { system: "battery-dc" }),
-      gec: circuit("GEC", ["mm", "ground"], ["rod", "ground"], [p(2.5, 25), p(3.2, 25), p(3.2, 36)], { system: "ground", calloutAt: p(3.2, 31.5), sections: { a: section({ ungrounded: null, equipmentGround: conductor(1, "4 AWG") }) } }),
-      kdat: circuit("K-1", ["bat", "data"], ["inv", "data"], [p(109.5, 44), p(111.5, 44), p(111.5, 49), p(96.8, 49), p(96.8, 41.2)], {
+      d1: circuit("D1", ["bat", "dc"], ["inv", "battery"], [p(86, 40), p(86, 37.2), p(79.6, 37.2)], { system: "battery-dc" }),
+      gec: circuit("GEC", ["mm", "ground"], ["rod", "ground"], [p(2.5, 25), p(2.5, 29), p(3.2, 29), p(3.2, 36)], { system: "ground", calloutAt: p(3.2, 31.5), sections: { a: section({ ungrounded: null, equipmentGround: conductor(1, "4 AWG") }) } }),
+      kdat: circuit("K-1", ["bat", "data"], ["inv", "data"], [p(87.5, 41), p(90.5, 41), p(90.5, 47), p(78.8, 47), p(78.8, 41.2)], {
         system: "data", sections: { a: section({ ungrounded: null, equipmentGround: null, cable: { type: "Cat 6", class: "class 2", count: 1, outerDiameterIn: 0.25, voltageRatingV: 300, wetListed: null } }) },
       }),
     },
     raceways: {
       ww: raceway("wireway", "WW-1", p(57, 20), { size: { width: 40, height: 7.6 }, metal: true, widthIn: 6, heightIn: 6, depthIn: 60, label: { x: 7.5, y: -0.7, anchor: "start" } }),
-      n3: raceway("nipple", "N-3", p(55.7, 20.6), { size: { width: 1, height: 5.6 }, tradeSize: "2", label: { x: -0.6, y: -1.2, anchor: "start" } }),
-      n1: raceway("nipple", "N-1", p(91.2, 28.1), { size: { width: 1.6, height: 1 }, tradeSize: "1", vertical: true }),
+      n3: raceway("nipple", "N-3", p(55.7, 20.6), { size: { width: 1, height: 5.6 }, tradeSize: "2", label: { x: -0.1, y: -1.2, anchor: "start" } }),
+      n1: raceway("nipple", "N-1", p(73.2, 28.1), { size: { width: 1.6, height: 1 }, tradeSize: "1", vertical: true }),
       r5: raceway("conduit", "R-5", p(60.1, 15.6), { size: { width: 1.8, height: 0.8 }, type: "PVC 40", tradeSize: "1", vertical: true, stretches: { a: stretch(85, 18) }, label: { x: 2.4, y: 0.2, anchor: "start" } }),
     },
     bonds: {
-      mbj: { tag: "MBJ", kind: "main bonding jumper", equipment: "mm", fitted: true, size: null, closes: "always", at: p(3.2, 17) },
+      mbj: { tag: "MBJ", kind: "main bonding jumper", equipment: "mm", fitted: true, size: null, closes: "always", at: p(3.2, 18) },
       strap: { tag: "NS-1", kind: "neutral strap", equipment: "gen", fitted: false, size: null, closes: "always", at: p(65.5, 9.5) },
     },
     interlocks: { il: { tag: "IL-1", kind: "mechanical slide", listed: true, switches: { cbu: true, cbg: true }, at: p(43, 16.4), note: "" } },
@@ -105,7 +109,7 @@ export function farm(): Drawing {
     },
   };
   drawing.sheet.subtitle = "AC, DC AND GENERATOR";
-  drawing.sheet.tables = { states: p(1.5, 49), interlocks: p(58, 51) };
+  drawing.sheet.tables = { states: p(1.5, 48), interlocks: p(58, 52) };
   return drawingSchema.parse(drawing);
 }
 export const farmGraph = (): DrawingGraph => buildGraph(farm());
