@@ -49,6 +49,7 @@ function Desk({ job, issueOpen }: { job: JobAnswer; issueOpen: boolean }) {
           <RedlineCounts counts={job.counts} />
           <span className="text-text text-ink2">changed {whenInSentence(job.changedAt)}</span>
           {job.may.viewDrawing && <LinkButton href={paths.drawing(job.id)} look="primary">Open the drawing</LinkButton>}
+          {job.may.viewDrawing && !job.empty && <LinkButton href={paths.sheets(job.id)}>Sheets</LinkButton>}
         </div>
       </div>
       <div className="grid grid-cols-[minmax(0,1fr)_440px] items-start gap-5 narrow:grid-cols-[minmax(0,1fr)_340px] phone:grid-cols-1">

@@ -4,6 +4,7 @@ export const paths = {
   newJob: "/jobs/new",
   job: (jobId: string) => `/jobs/${jobId}`,
   drawing: (jobId: string) => `/jobs/${jobId}/drawing`,
+  sheets: (jobId: string) => `/jobs/${jobId}/sheets`,
   revision: (jobId: string, revisionId: string) => `/jobs/${jobId}/review/${revisionId}`,
   counter: (jobId: string) => `/counter/${jobId}`,
 };
