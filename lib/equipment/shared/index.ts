@@ -1,4 +1,4 @@
-import { choice, flag, number, text, type InternalJoin, type PortDefinition } from "@/lib/equipment/define";
+import { choice, number, text, type InternalJoin, type PortDefinition } from "@/lib/equipment/define";
 
 /** Properties that most kinds share, declared once. */
 export const identity = {

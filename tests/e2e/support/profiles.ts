@@ -9,9 +9,9 @@ export type OpenProfile = (name: string, viewport?: { width: number; height: num
 interface Fixtures { profile: OpenProfile }
 
 export const test = base.extend<Fixtures>({
-  profile: async ({ launchOptions, baseURL }, use) => {
+  profile: async ({ launchOptions, baseURL }, provide) => {
     const opened: { context: BrowserContext; folder: string }[] = [];
-    await use(async (name, viewport = { width: 1600, height: 1000 }) => {
+    await provide(async (name, viewport = { width: 1600, height: 1000 }) => {
       const folder = await mkdtemp(path.join(tmpdir(), `profile-${name}-`));
       const context = await chromium.launchPersistentContext(folder, {
         ...launchOptions, baseURL, viewport, locale: "en-US", timezoneId: "America/New_York", acceptDownloads: true,
