@@ -22,25 +22,25 @@ export function sha256Hex(bytes: Uint8Array): string {
   view.setUint32(padded.length - 4, (bytes.length << 3) >>> 0);
   const h = new Uint32Array([0x6a09e667, 0xbb67ae85, 0x3c6ef372, 0xa54ff53a, 0x510e527f, 0x9b05688c, 0x1f83d9ab, 0x5be0cd19]);
   const w = new Uint32Array(64);
-  const at = (list: Uint32Array, i: number): number => list[i] as number;
+  // Plain locals: this runs on every edit, and array copies would be most of its time.
+  const k = K as unknown as number[];
+  const schedule = w as unknown as number[];
   for (let block = 0; block < padded.length; block += 64) {
-    for (let i = 0; i < 16; i++) w[i] = view.getUint32(block + i * 4);
+    for (let i = 0; i < 16; i++) schedule[i] = view.getUint32(block + i * 4);
     for (let i = 16; i < 64; i++) {
-      const a = at(w, i - 15), b = at(w, i - 2);
-      const s0 = rotate(a, 7) ^ rotate(a, 18) ^ (a >>> 3);
-      const s1 = rotate(b, 17) ^ rotate(b, 19) ^ (b >>> 10);
-      w[i] = (at(w, i - 16) + s0 + at(w, i - 7) + s1) | 0;
+      const x = schedule[i - 15] as number, y = schedule[i - 2] as number;
+      const s0 = rotate(x, 7) ^ rotate(x, 18) ^ (x >>> 3);
+      const s1 = rotate(y, 17) ^ rotate(y, 19) ^ (y >>> 10);
+      schedule[i] = ((schedule[i - 16] as number) + s0 + (schedule[i - 7] as number) + s1) | 0;
     }
-    const v = Uint32Array.from(h);
+    let [a, b, c, d, e, f, g, last] = h as unknown as [number, number, number, number, number, number, number, number];
     for (let i = 0; i < 64; i++) {
-      const a = at(v, 0), e = at(v, 4);
-      const t1 = (at(v, 7) + (rotate(e, 6) ^ rotate(e, 11) ^ rotate(e, 25)) + ((e & at(v, 5)) ^ (~e & at(v, 6))) + at(K, i) + at(w, i)) | 0;
-      const t2 = ((rotate(a, 2) ^ rotate(a, 13) ^ rotate(a, 22)) + ((a & at(v, 1)) ^ (a & at(v, 2)) ^ (at(v, 1) & at(v, 2)))) | 0;
-      v.copyWithin(1, 0, 7);
-      v[4] = (at(v, 4) + t1) | 0;
-      v[0] = (t1 + t2) | 0;
+      const t1 = (last + (rotate(e, 6) ^ rotate(e, 11) ^ rotate(e, 25)) + ((e & f) ^ (~e & g)) + (k[i] as number) + (schedule[i] as number)) | 0;
+      const t2 = ((rotate(a, 2) ^ rotate(a, 13) ^ rotate(a, 22)) + ((a & b) ^ (a & c) ^ (b & c))) | 0;
+      last = g; g = f; f = e; e = (d + t1) | 0; d = c; c = b; b = a; a = (t1 + t2) | 0;
     }
-    for (let i = 0; i < 8; i++) h[i] = (at(h, i) + at(v, i)) | 0;
+    const sums = [a, b, c, d, e, f, g, last];
+    for (let i = 0; i < 8; i++) h[i] = ((h[i] as number) + (sums[i] as number)) | 0;
   }
   return [...h].map((word) => word.toString(16).padStart(8, "0")).join("");
 }

@@ -8,7 +8,14 @@ const TAGGED = ["equipment", "circuits", "raceways", "bonds", "interlocks", "sen
 /** Tags are compared as they are read aloud: without case and outer blanks. */
 const spoken = (tag: string): string => tag.trim().toUpperCase();
 
+const known = new WeakMap<CheckContext["graph"], ReadonlyMap<string, readonly ElementRef[]>>();
+/** Who bears each tag; gathered once a drawing. */
 function bearers(context: CheckContext): ReadonlyMap<string, readonly ElementRef[]> {
+  let map = known.get(context.graph);
+  if (!map) { map = gather(context); known.set(context.graph, map); }
+  return map;
+}
+function gather(context: CheckContext): ReadonlyMap<string, readonly ElementRef[]> {
   const map = new Map<string, ElementRef[]>();
   for (const collection of TAGGED) {
     for (const id of Object.keys(context.drawing[collection]).sort()) {

@@ -19,7 +19,18 @@ function neutralCircuits(context: CheckContext, owner: string): readonly string[
   });
 }
 /** A second bond at an outdoor source is lawful where no metal but the neutral runs back: 250.30(A)(1) exception. */
+const separateSources = new WeakMap<CheckContext["graph"], Map<string, boolean>>();
 function noParallelPath(context: CheckContext, owner: string): boolean {
+  // Asked for every state; the answer hangs on the wiring alone.
+  const answers = separateSources.get(context.graph) ?? new Map<string, boolean>();
+  separateSources.set(context.graph, answers);
+  const before = answers.get(owner);
+  if (before !== undefined) return before;
+  const answer = outdoorWithoutPath(context, owner);
+  answers.set(owner, answer);
+  return answer;
+}
+function outdoorWithoutPath(context: CheckContext, owner: string): boolean {
   const { drawing } = context;
   if (drawing.equipment[owner]?.location.exposure !== "outdoor" || context.graph.kind(owner).capabilities.source !== "generator") return false;
   const circuits = neutralCircuits(context, owner);
@@ -56,7 +67,7 @@ export const neutralBondCount: Rule = {
       for (const island of state.islands) {
         if (!island.hasNeutral || island.sources.length + island.converters.length === 0) continue;
         judged = true;
-        const groups = separate(context, island.bondGroups);
+        const groups = island.bondGroups.length > 1 ? separate(context, island.bondGroups) : island.bondGroups;
         // Two joints are known to be too many; none may only be not known yet.
         if (groups.length === 1 || (groups.length === 0 && !reader.complete)) continue;
         const key = groups.map((bonds) => bonds.join("+")).sort().join(" ");
