@@ -3,9 +3,19 @@
 import { useMemo, useState } from "react";
 import type { RevisionAnswer } from "@/lib/api";
 import { buildGraph } from "@/lib/diagram/graph";
+import type { SealOnSheet } from "@/lib/sheets/context";
 import { sheetSet } from "@/lib/sheets/set";
 import { stateSpace } from "@/lib/states";
 import { Primitives } from "@/components/sheets/Primitives";
+
+/** The seal's words and code as the file has them; its picture stands in the file alone, and is not imitated here. */
+function sealOf({ seal, state }: RevisionAnswer): SealOnSheet | null {
+  if (!seal || state === "sealing") return null;
+  return {
+    licensee: seal.licensee, title: seal.title, state: seal.licenseState, number: seal.licenseNumber, expiresOn: seal.licenseExpiresOn,
+    signedOn: seal.sealedAt.slice(0, 10), sealCode: seal.sealCode, legend: "", graphic: "in the file",
+  };
+}
 
 /** The sheets of the frozen drawing, as they will be printed; one at a time. */
 export function SheetView({ revision }: { revision: RevisionAnswer }) {
@@ -14,7 +24,7 @@ export function SheetView({ revision }: { revision: RevisionAnswer }) {
     return sheetSet({
       drawing: revision.drawing, graph, states: stateSpace(graph), check: revision.check, digest: revision.digest,
       revisions: [{ letter: revision.letter, description: revision.description || revision.purpose, date: revision.issuedAt.slice(0, 10), by: revision.issuedBy }],
-      seal: null, sealPlace: revision.seal ? "NOT SEALED" : "DRAFT",
+      seal: sealOf(revision), sealPlace: "DRAFT",
     });
   }, [revision]);
   const [shown, setShown] = useState(0);

@@ -15,8 +15,8 @@ export interface SealOnSheet {
   expiresOn: string;
   signedOn: string;
   sealCode: string;
-  /** PNG of the licensee's seal as a data address; null draws a ring seal from the words above. */
-  graphic: { href: string; widthPx: number; heightPx: number } | null;
+  /** PNG of the licensee's seal as a data address; null draws a ring seal from the words above. A preview of sealed sheets points to the file. */
+  graphic: { href: string; widthPx: number; heightPx: number } | "in the file" | null;
   /** Printed in the ring, for example DEMONSTRATION ONLY; empty takes the state. */
   legend: string;
 }

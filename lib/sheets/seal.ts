@@ -62,10 +62,11 @@ function ringSeal(cx: number, cy: number, radius: number, seal: SealOnSheet): Pr
 
 /** The licensee's seal, or the words that stand in its place, inside a square of the given half width. */
 export function sealPrimitives(cx: number, cy: number, radius: number, seal: SealOnSheet | null, place: string): Primitive[] {
-  if (!seal) {
+  if (!seal || seal.graphic === "in the file") {
+    const words = seal ? ["SEALED", "SEE THE FILE"] : [place];
     return [
       path(ellipseData(cx, cy, radius - 2), { weight: WEIGHTS.border, dash: "placeholder", layer: "ground" }),
-      text(cx, cy + 5, place, "tag", { anchor: "middle" }),
+      ...words.map((line, i) => text(cx, cy + 5 + (i - (words.length - 1) / 2) * 16, line, words.length > 1 ? "note" : "tag", { anchor: "middle" })),
     ];
   }
   if (!seal.graphic) return ringSeal(cx, cy, radius, seal);

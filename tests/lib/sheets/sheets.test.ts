@@ -12,7 +12,7 @@ import { sheetSvg } from "@/lib/sheets/svg";
 import { tableHeight, tablePrimitives } from "@/lib/sheets/table";
 import { initials, ruleLine } from "@/lib/sheets/titleBlock";
 import type { Finding } from "@/lib/rules/engine/types";
-import { CHECK, DIGEST, contextOf } from "./support/context";
+import { CHECK, DIGEST, SEAL, contextOf } from "./support/context";
 import { farm } from "./support/farm";
 import { corners, overlaps } from "./support/overlaps";
 
@@ -128,6 +128,13 @@ describe("what a sheet says of its check and its seal", () => {
   it("prints name, license, day of signing and expiry beside a seal", () => {
     const [sheet] = sheetSet(contextOf(farm()));
     expect(words(sheet?.primitives ?? [])).toEqual(expect.arrayContaining(["TOBIAS WRENFIELD", "OR LICENSE E-00000", "APRIL 23, 2026", "DECEMBER 31, 2027", "SEAL CODE F7K2-91QD"]));
+  });
+  it("does not imitate the picture of a seal where it shows sealed sheets outside the file", () => {
+    const [sheet] = sheetSet(contextOf(farm(), { seal: { ...SEAL, graphic: "in the file" } }));
+    expect(words(sheet?.primitives ?? [])).toEqual(expect.arrayContaining(["SEE THE FILE", "SEAL CODE F7K2-91QD", "OR LICENSE E-00000"]));
+    expect(overlaps(sheet?.primitives ?? [])).toEqual([]);
+    // The ring seal letters the name one character at a time.
+    expect(words(sheet?.primitives ?? []).filter((each) => each === "W")).toEqual([]);
   });
   it("writes dates, initials and eighths as the trade does", () => {
     expect(sheetDate("2026-01-09")).toBe("JANUARY 9, 2026");
