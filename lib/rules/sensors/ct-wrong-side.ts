@@ -77,7 +77,8 @@ export const ctWrongSide: Rule = {
     const move = (circuit: string, toward: "from" | "to" | null, label: string): Suggestion => {
       const run = context.drawing.circuits[circuit];
       const [a, b] = run?.points ?? [];
-      const at = a && b ? { x: (a.x + b.x) / 2 - 1.5, y: (a.y + b.y) / 2 } : sensor.at;
+      // Off the middle, where the run's callout stands.
+      const at = a && b ? { x: a.x + (b.x - a.x) * 0.75 - 1.5, y: a.y + (b.y - a.y) * 0.75 } : sensor.at;
       return {
         label, also: "", patches: group.flatMap((id) => [
           { op: "replace" as const, path: `/sensors/${id}/circuit`, value: circuit }, { op: "replace" as const, path: `/sensors/${id}/at`, value: at },
