@@ -1,6 +1,8 @@
 /** Shapes of what browser and server say to each other. */
 export * from "./drawings";
+export * from "./files";
 export * from "./jobs";
+export * from "./library";
 export * from "./people";
 export * from "./problem";
 export * from "./revisions";

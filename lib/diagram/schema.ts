@@ -42,6 +42,10 @@ export const siteSchema = z.strictObject({
   amendments: z.record(idSchema, amendmentSchema),
 });
 
+/** A sketch or photo that lies dimmed under the drawing on screen; never printed. Place and size are grid units. */
+export const underlaySchema = z.strictObject({
+  file: z.uuid(), at: pointSchema, width: z.number().min(1).max(600), height: z.number().min(1).max(400), opacity: z.number().min(0.05).max(0.8), hidden: z.boolean(),
+});
 export const SHEET_SIZES = ["ANSI B", "ANSI C", "ANSI D", "ANSI E", "ARCH B", "ARCH C", "ARCH D", "ARCH E"] as const;
 export const titleBlockSchema = z.strictObject({
   jobName: words(120), jobNumber: words(40), addressLines: words(240), parcel: words(60), owner: words(120),
@@ -56,9 +60,13 @@ export const sheetSchema = z.strictObject({
   titleBlock: titleBlockSchema,
   /** Where derived tables stand on the one-line, by table name; a table without a place is not drawn. */
   tables: z.partialRecord(z.enum(["states", "interlocks", "bus-checks", "fault-current"]), pointSchema),
+  underlay: underlaySchema.optional(),
 });
 
-const sourceSchema = z.strictObject({ document: words(120), page: words(40) });
+/** Where a rating was read. `file` is the stored datasheet, where one was uploaded. */
+export const sourceSchema = z.strictObject({ document: words(120), page: words(40), file: z.uuid().optional() });
+/** Entry and version of the company's equipment library from which the ratings were copied. */
+export const libraryRefSchema = z.strictObject({ entry: z.uuid(), version: z.number().int().min(1).max(100_000) });
 const propertyValue = z.union([z.number(), words(400), z.boolean(), z.null()]);
 
 export const TERMINAL_METALS = ["CU", "AL", "AL9CU", "CU-AL"] as const;
@@ -113,6 +121,7 @@ export const equipmentSchema = z.strictObject({
   sources: z.record(z.string().max(48), sourceSchema),
   ports: z.record(z.string().max(24), portDataSchema),
   note: words(200),
+  library: libraryRefSchema.optional(),
 });
 
 export const endpointSchema = z.strictObject({

@@ -7,11 +7,14 @@ export const JOB_ACTIONS = [
   "drawing.view", "drawing.edit",
   "revision.view", "revision.issue", "revision.return", "finding.accept", "revision.seal",
   "sheets.preview", "sheets.download",
+  "files.view", "files.add", "files.remove", "visit.view", "visit.edit", "history.view", "job.duplicate", "job.archive",
 ] as const;
 export type JobAction = (typeof JOB_ACTIONS)[number];
 
 /** Everything a person can do in a company outside of its jobs. */
-export const COMPANY_ACTIONS = ["company.view", "company.people", "jobs.create", "jurisdictions.edit"] as const;
+export const COMPANY_ACTIONS = [
+  "company.view", "company.people", "company.settings", "jobs.create", "jurisdictions.view", "jurisdictions.edit", "library.view", "library.edit", "audit.view",
+] as const;
 export type CompanyAction = (typeof COMPANY_ACTIONS)[number];
 
 const OFFICE: readonly Role[] = ["administrator", "designer", "licensee", "installer"];
@@ -39,14 +42,27 @@ export const POLICY: Readonly<Record<JobAction, Grant>> = {
   "finding.accept": { roles: ["licensee"], states: { licensee: ["in review"] } },
   "revision.seal": { roles: ["licensee"], states: { licensee: ["in review"] } },
   "sheets.preview": { roles: OFFICE },
+  "files.view": { roles: OFFICE },
+  "files.add": { roles: OFFICE },
+  "files.remove": { roles: ["administrator", "designer"] },
+  "visit.view": { roles: OFFICE },
+  "visit.edit": { roles: ["administrator", "designer", "installer"] },
+  "history.view": { roles: OFFICE },
+  "job.duplicate": { roles: ["administrator", "designer"] },
+  "job.archive": { roles: ["administrator"] },
   "sheets.download": { roles: ALL, states: { administrator: SEALED, designer: SEALED, licensee: SEALED, installer: SEALED, "permit clerk": SEALED } },
 };
 
 const COMPANY_POLICY: Readonly<Record<CompanyAction, readonly Role[]>> = {
   "company.view": OFFICE,
   "company.people": ["administrator"],
+  "company.settings": ["administrator"],
+  "audit.view": ["administrator"],
   "jobs.create": ["administrator", "designer"],
+  "jurisdictions.view": OFFICE,
   "jurisdictions.edit": ["administrator", "designer"],
+  "library.view": OFFICE,
+  "library.edit": ["administrator", "designer"],
 };
 
 /**

@@ -25,6 +25,14 @@ const EXPECTED: Record<JobAction, { roles: Role[]; states?: (role: Role) => read
   "revision.seal": { roles: [L], states: () => IN_REVIEW },
   "sheets.preview": { roles: OFFICE },
   "sheets.download": { roles: [A, D, L, I, C], states: () => SEALED },
+  "files.view": { roles: OFFICE },
+  "files.add": { roles: OFFICE },
+  "files.remove": { roles: [A, D] },
+  "visit.view": { roles: OFFICE },
+  "visit.edit": { roles: [A, D, I] },
+  "history.view": { roles: OFFICE },
+  "job.duplicate": { roles: [A, D] },
+  "job.archive": { roles: [A] },
 };
 
 describe("the policy table", () => {
@@ -50,5 +58,8 @@ describe("the policy table", () => {
     expect(ROLES.filter((role) => mayInCompany([role], "company.people"))).toEqual([A]);
     expect(ROLES.filter((role) => mayInCompany([role], "jobs.create"))).toEqual([A, D]);
     expect(ROLES.filter((role) => mayInCompany([role], "company.view"))).not.toContain(C);
+    for (const action of ["company.settings", "audit.view"] as const) expect(ROLES.filter((role) => mayInCompany([role], action))).toEqual([A]);
+    for (const action of ["library.edit", "jurisdictions.edit"] as const) expect(ROLES.filter((role) => mayInCompany([role], action))).toEqual([A, D]);
+    for (const action of ["library.view", "jurisdictions.view"] as const) expect(ROLES.filter((role) => mayInCompany([role], action))).toEqual(OFFICE);
   });
 });
