@@ -7,6 +7,8 @@ import { FindingAcceptance, initFindingAcceptance } from "./findingAcceptance";
 import { Job, initJob } from "./job";
 import { JobMember, initJobMember } from "./jobMember";
 import { Jurisdiction, initJurisdiction } from "./jurisdiction";
+import { LibraryEntry, initLibraryEntry } from "./libraryEntry";
+import { LibraryVersion, initLibraryVersion } from "./libraryVersion";
 import { License, initLicense } from "./license";
 import { Membership, initMembership } from "./membership";
 import { Revision, initRevision } from "./revision";
@@ -21,7 +23,7 @@ import { User, initUser } from "./user";
 export function initModels(sequelize: Sequelize): void {
   for (const init of [
     initCompany, initUser, initMembership, initJurisdiction, initJob, initJobMember, initLicense, initDrawing,
-    initDrawingPatch, initRevision, initFindingAcceptance, initSeal, initSheetSet, initAuditEntry,
+    initDrawingPatch, initRevision, initFindingAcceptance, initSeal, initSheetSet, initAuditEntry, initLibraryEntry, initLibraryVersion,
   ]) init(sequelize);
 
   User.hasMany(Membership, { as: "memberships", foreignKey: "userId" });
@@ -40,6 +42,8 @@ export function initModels(sequelize: Sequelize): void {
   Revision.hasOne(Seal, { as: "seal", foreignKey: "revisionId" });
   Revision.hasMany(SheetSet, { as: "sheetSets", foreignKey: "revisionId" });
   Revision.hasMany(FindingAcceptance, { as: "acceptances", foreignKey: "revisionId" });
+  LibraryEntry.hasMany(LibraryVersion, { as: "versions", foreignKey: "entryId" });
+  LibraryVersion.belongsTo(User, { as: "maker", foreignKey: "madeBy" });
 }
 
-export { AuditEntry, Company, Drawing, DrawingPatch, FindingAcceptance, Job, JobMember, Jurisdiction, License, Membership, Revision, Seal, SheetSet, User };
+export { AuditEntry, Company, Drawing, DrawingPatch, FindingAcceptance, Job, JobMember, Jurisdiction, LibraryEntry, LibraryVersion, License, Membership, Revision, Seal, SheetSet, User };
