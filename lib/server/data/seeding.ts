@@ -6,6 +6,7 @@ import type { Role } from "@/lib/policy";
 import { putOnce } from "@/lib/server/storage";
 import type { Actor } from "./actor";
 import { database, inTransaction } from "./database";
+import { addStarterSet } from "./libraryStarter";
 import { readPngSize } from "./png";
 import { findByEmail, hashPassword } from "./users";
 
@@ -13,9 +14,10 @@ import { findByEmail, hashPassword } from "./users";
  * For seeders alone: each puts its rows in where they are missing and leaves what is there. No request leads here.
  */
 
-/** A company by name. */
+/** A company by name, with the library's starter set. */
 export async function seedCompany(name: string): Promise<string> {
   const [company] = await database().Company.findOrCreate({ where: { name }, defaults: { name } });
+  await inTransaction((transaction) => addStarterSet(company.id, transaction));
   return company.id;
 }
 

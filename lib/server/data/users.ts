@@ -9,6 +9,7 @@ import { failureAllowance } from "@/lib/server/http/rateLimit";
 import type { Actor } from "./actor";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
+import { addStarterSet } from "./libraryStarter";
 
 /** Tries with a wrong password before a pause, and the pause in seconds. */
 const TRIES = 8;
@@ -94,6 +95,7 @@ export async function setUp(input: SetupInput, requestId: string): Promise<void>
     const user = await createUser(input, transaction);
     const company = await Company.create({ name: input.companyName }, { transaction });
     await Membership.create({ companyId: company.id, userId: user.id, roles: ["administrator", "designer"] }, { transaction });
+    await addStarterSet(company.id, transaction);
     await audit(transaction, { ...person(user), requestId }, { action: "company.create", subject: `companies/${company.id}`, companyId: company.id });
   });
 }
