@@ -67,9 +67,6 @@ function equipmentFaults(drawing: Drawing): DocumentFault[] {
       const fault = property ? propertyFault(property, value) : `${definition.title} has no property of this name`;
       if (fault) faults.push({ path: at("props", name), message: fault });
     }
-    for (const name of Object.keys(definition.properties)) {
-      if (!Object.hasOwn(equipment.props, name)) faults.push({ path: at("props", name), message: "is missing; write null for a value that is not known" });
-    }
     for (const name of Object.keys(equipment.sources)) {
       if (!Object.hasOwn(definition.properties, name) && !name.startsWith("ports.")) faults.push({ path: at("sources", name), message: "is the source of no property" });
     }

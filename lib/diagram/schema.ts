@@ -30,6 +30,7 @@ export const amendmentSchema = z.strictObject({
   citation: words(120),
 });
 
+export const SERVICE_SYSTEMS = ["120/240 V, 3-wire", "208Y/120 V, 4-wire", "240/120 V, 4-wire delta with high leg", "480Y/277 V, 4-wire", "120 V, 2-wire"] as const;
 export const siteSchema = z.strictObject({
   edition: z.enum(EDITIONS),
   occupancy: z.enum(OCCUPANCIES).nullable(),
@@ -40,6 +41,16 @@ export const siteSchema = z.strictObject({
   availableFaultCurrentA: z.number().min(0).max(200000).nullable(),
   temperatureSource: words(160).nullable(),
   amendments: z.record(idSchema, amendmentSchema),
+  /** Who gave the available fault current, and on which day. */
+  faultCurrentSource: words(160).nullable().optional(),
+  faultCurrentOn: z.iso.date().nullable().optional(),
+  /** Conductors of the utility's system at the service. */
+  serviceSystem: z.enum(SERVICE_SYSTEMS).nullable().optional(),
+  /** Residential and fire code adopted with the electrical code. */
+  residentialCode: z.enum(["none", "2015", "2018", "2021", "2024"]).nullable().optional(),
+  fireCode: z.enum(["none", "2015", "2018", "2021", "2024"]).nullable().optional(),
+  /** Load of the service or of the largest feeder, and how it was worked out. */
+  load: z.strictObject({ method: words(120), resultA: z.number().min(0).max(10000).nullable(), source: words(160) }).nullable().optional(),
 });
 
 /** A sketch or photo that lies dimmed under the drawing on screen; never printed. Place and size are grid units. */
@@ -78,6 +89,10 @@ export const terminalSchema = z.strictObject({
   largest: words(16).nullable(),
   torqueLbfIn: z.number().min(0.5).max(5000).nullable(),
   torqueSource: words(80).nullable(),
+  /** Conductors that one terminal is identified for. */
+  conductorsMost: z.number().int().min(1).max(12).nullable().optional(),
+  /** Identified for finely stranded conductors. */
+  fineStrand: z.boolean().nullable().optional(),
 });
 /** Values marked at one port of one piece of equipment. Left out means: the kind asks for none here. */
 export const portDataSchema = z.strictObject({
@@ -87,13 +102,28 @@ export const portDataSchema = z.strictObject({
   maximumA: z.number().min(0).max(10000).nullable().optional(),
   maximumOvercurrentA: z.number().min(0).max(10000).nullable().optional(),
   terminal: terminalSchema.optional(),
+  /** Left without a conductor on purpose: capped or marked spare. */
+  spare: z.boolean().nullable().optional(),
 });
 
+export const ROOMS = [
+  "outside wall", "outside on the ground", "garage", "utility closet or storage room", "mechanical room", "basement", "attic", "crawl space", "kitchen", "living space",
+  "sleeping room", "closet opening into a sleeping room", "bathroom", "clothes closet", "stairway", "barn or livestock area", "workshop", "roof",
+] as const;
 export const locationSchema = z.strictObject({
   building: words(80).nullable(),
   place: words(80).nullable(),
   exposure: z.enum(["indoor dry", "indoor damp", "outdoor", "roof", "underground"]).nullable(),
   ambientC: z.number().min(-60).max(120).nullable(),
+  /** Use of the room or place, as location limits of the codes name it. */
+  room: z.enum(ROOMS).nullable().optional(),
+  /** Reached quickly without tools, ladders or climbing over things. */
+  readilyAccessible: z.boolean().nullable().optional(),
+  corrosive: z.boolean().nullable().optional(),
+  /** What stands opposite the working space: nothing live, grounded parts, or other live parts. */
+  opposite: z.enum(["no live or grounded parts", "grounded parts", "live parts"]).nullable().optional(),
+  /** From the nearest door or window into the dwelling, ft. */
+  fromOpeningFt: z.number().min(0).max(500).nullable().optional(),
 });
 
 export const equipmentSchema = z.strictObject({
@@ -277,12 +307,26 @@ export const sensorSchema = z.strictObject({
 export const labelSchema = z.strictObject({
   number: words(8), rule: words(64).nullable(), lines: words(600),
   places: z.record(idSchema, z.literal(true)), status: z.enum(["new", "existing", "relocated", "removed"]),
+  /** Height of the smallest required letters, in. */
+  letterHeightIn: z.number().min(0.05).max(6).nullable().optional(),
+  background: z.enum(["white", "yellow", "orange", "red", "black"]).nullable().optional(),
+  reflective: z.boolean().nullable().optional(),
+  handwritten: z.boolean().nullable().optional(),
 });
 /** Written acceptance of one finding by a licensee. `anchor` is collection/id, `digest` what was accepted. */
 export const acceptanceSchema = z.strictObject({
   rule: z.string().max(64), anchor: z.string().max(140), variant: z.string().max(64), reason: words(600),
   by: words(80), license: words(80), on: z.iso.date(), evidence: z.string().max(128),
 });
+/**
+ * What a person states because no drawing can show it. `anchor` is collection/id, or `site`. The server sees to it that
+ * `by` is who saved it.
+ */
+export const statementSchema = z.strictObject({
+  rule: z.string().max(64), anchor: z.string().max(140), value: z.enum(["yes", "no", "not applicable"]), by: words(80), on: z.iso.date(), note: words(300),
+});
+/** Distance between two pieces of equipment, ft, and whether one is seen from the other. */
+export const distanceSchema = z.strictObject({ a: idSchema, b: idSchema, ft: z.number().min(0).max(5000).nullable(), inSight: z.boolean().nullable() });
 export const textSchema = z.strictObject({ at: pointSchema, lines: words(600), style: z.enum(["note", "heading", "compartment"]), keynote: words(4).nullable(), vertical: z.boolean() });
 
 export const drawingSchema = z.strictObject({
@@ -298,6 +342,8 @@ export const drawingSchema = z.strictObject({
   labels: z.record(idSchema, labelSchema),
   acceptances: z.record(idSchema, acceptanceSchema),
   texts: z.record(idSchema, textSchema),
+  statements: z.record(idSchema, statementSchema).optional(),
+  distances: z.record(idSchema, distanceSchema).optional(),
 });
 
 export type Drawing = z.infer<typeof drawingSchema>;
@@ -314,6 +360,8 @@ export type Stretch = z.infer<typeof stretchSchema>;
 export type Bond = z.infer<typeof bondSchema>;
 export type Interlock = z.infer<typeof interlockSchema>;
 export type Sensor = z.infer<typeof sensorSchema>;
+export type Statement = z.infer<typeof statementSchema>;
+export type Distance = z.infer<typeof distanceSchema>;
 export type Acceptance = z.infer<typeof acceptanceSchema>;
 export type Endpoint = z.infer<typeof endpointSchema>;
 export type RouteStep = z.infer<typeof routeStepSchema>;

@@ -80,6 +80,10 @@ export interface Capabilities {
   source?: "utility" | "generator" | "pv" | "battery";
   /** Joins ac with dc ports; forms or follows ac. */
   converter?: boolean;
+  /** A converter that follows the voltage of another source and never holds an island by itself. */
+  follower?: boolean;
+  /** Its two sides have currents and a neutral of their own. */
+  transformer?: boolean;
   /** Uses energy. `motor` and `hvac` follow their own overcurrent articles. */
   load?: "general" | "motor" | "hvac";
   /** Opens and closes its line and load ports. `transfer` joins its common port to one of two. */

@@ -1,23 +1,32 @@
 import type { KindDefinition } from "./define";
 import { battery } from "./battery";
 import { breaker } from "./breaker";
+import { chargeController } from "./charge-controller";
+import { combiner } from "./combiner";
 import { contactor } from "./contactor";
 import { dcBusCabinet } from "./dc-bus-cabinet";
 import { disconnect } from "./disconnect";
 import { electrode } from "./electrode";
+import { fuseHolder } from "./fuse-holder";
+import { gateway } from "./gateway";
 import { generator } from "./generator";
 import { hybridInverter } from "./hybrid-inverter";
 import { interconnectCabinet } from "./interconnect-cabinet";
 import { load } from "./load";
 import { meter } from "./meter";
 import { meterMain } from "./meter-main";
+import { microinverterBranch } from "./microinverter-branch";
 import { panelboard } from "./panelboard";
+import { powerInlet } from "./power-inlet";
 import { pvString } from "./pv-string";
 import { pvSwitch } from "./pv-switch";
 import { shutdownInitiator } from "./shutdown-initiator";
+import { stringInverter } from "./string-inverter";
 import { surgeProtector } from "./surge-protector";
 import { transferSwitch } from "./transfer-switch";
+import { transformer } from "./transformer";
 import { utility } from "./utility";
+import { vehicleCharger } from "./vehicle-charger";
 
 /** Every kind of equipment, in the order of the parts rail. */
 const kinds = {
@@ -40,6 +49,15 @@ const kinds = {
   "electrode": electrode,
   "surge-protector": surgeProtector,
   "shutdown-initiator": shutdownInitiator,
+  "string-inverter": stringInverter,
+  "microinverter-branch": microinverterBranch,
+  "combiner": combiner,
+  "fuse-holder": fuseHolder,
+  "vehicle-charger": vehicleCharger,
+  "power-inlet": powerInlet,
+  "transformer": transformer,
+  "charge-controller": chargeController,
+  "gateway": gateway,
 } as const;
 
 export type KindId = keyof typeof kinds;

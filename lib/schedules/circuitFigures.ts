@@ -7,7 +7,8 @@ import { columnAmpacityA, correctedAmpacity, deviceRatingA, terminalsOf, wireOf,
 import { carriedBy, loadA } from "@/lib/rules/shared/currents";
 import { numberOf, Reader, textOf } from "@/lib/rules/shared/outcome";
 import { motorCircuit, topology, type Side } from "@/lib/rules/shared/topology";
-import { attempt, perGraph, readingContext } from "./context";
+import { checkContext } from "@/lib/rules/engine/context";
+import { attempt, perGraph } from "./context";
 
 /** Figures of a whole circuit. Null is not known, or has no meaning for it. */
 export interface CircuitFigures {
@@ -94,7 +95,7 @@ function dropPct(context: CheckContext, id: string, circuit: Circuit, carriedA: 
   return context.graph.sections(id).length === 0 ? null : sum;
 }
 
-const contextOf = perGraph(readingContext);
+const contextOf = perGraph((graph) => checkContext(graph));
 const circuitCache = perGraph(() => new Map<string, CircuitFigures>());
 const sectionCache = perGraph(() => new Map<string, SectionFigures>());
 

@@ -6,7 +6,8 @@ import { currentCarrying } from "@/lib/rules/shared/conductors";
 import { Reader } from "@/lib/rules/shared/outcome";
 import { fillItemsOf, isSleeve, racewayLengthFt } from "@/lib/rules/shared/raceways";
 import { parseTradeSize } from "@/lib/units";
-import { attempt, perGraph, readingContext } from "./context";
+import { checkContext } from "@/lib/rules/engine/context";
+import { attempt, perGraph } from "./context";
 
 /** Fill and number of current-carrying conductors of a raceway. Null is not known, or has no meaning for it. */
 export interface RacewayFigures {
@@ -29,7 +30,7 @@ function body(raceway: Raceway): FilledRaceway | null {
     ? null : { kind, tradeSize: parseTradeSize(raceway.tradeSize), lengthIn: lengthFt * 12 };
 }
 
-const cacheOf = perGraph((graph) => ({ context: readingContext(graph), known: new Map<string, RacewayFigures>() }));
+const cacheOf = perGraph((graph) => ({ context: checkContext(graph), known: new Map<string, RacewayFigures>() }));
 
 /** Figures of a raceway, worked out once a drawing. Nothing is claimed about the fill while the size of one conductor in it is missing. */
 export function racewayFigures(graph: DrawingGraph, id: string): RacewayFigures {

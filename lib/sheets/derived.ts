@@ -1,5 +1,6 @@
 import type { DrawingGraph } from "@/lib/diagram/graph";
 import type { OperatingState, StateGroup, StateSpace } from "@/lib/states/types";
+import { checkContext } from "@/lib/rules/engine/context";
 import { busChecks } from "@/lib/rules/interconnection/busbar-no-method";
 import type { SheetContext } from "./context";
 import { fitColumns, type Table } from "./table";
@@ -69,7 +70,7 @@ const PATH_WORDS: Readonly<Record<string, string>> = {
 /** Busbars that several sources share: sum against limit on the path each passes by. Null without any that is worked out. */
 export function busTable({ drawing, graph, states }: SheetContext): Table | null {
   const { edition } = drawing.site;
-  const rows = busChecks({ drawing, graph, edition, states: () => states, limit: () => 0 }).map((each) => [
+  const rows = busChecks(checkContext(graph, { states })).map((each) => [
     [tag(graph, each.bus), each.primary === "generator" ? "GEN" : "", PATH_WORDS[each.path] ?? each.path].filter(Boolean).join(" "), `${each.sumA.toFixed(2)} A`, `${Math.round(each.limitA * 100) / 100} A`,
   ]);
   if (rows.length === 0) return null;

@@ -90,7 +90,7 @@ export function walk(graph: DrawingGraph, net: Network, switches: readonly Netwo
   const kinds = roots.map((root) => (parts.get(root)?.sources ?? []).map((id) => graph.kind(id).capabilities.source));
   const present = (i: number, kind: "utility" | "generator", lost: readonly string[]): boolean =>
     (parts.get(roots[i] ?? 0)?.sources ?? []).some((id, j) => kinds[i]?.[j] === kind && !lost.includes(id));
-  const feedsOf = (lost: readonly string[]) => roots.map((_, i) => ({ utility: present(i, "utility", lost), generator: present(i, "generator", lost), converter: (parts.get(roots[i] ?? 0)?.converters.length ?? 0) > 0 }));
+  const feedsOf = (lost: readonly string[]) => roots.map((_, i) => ({ utility: present(i, "utility", lost), generator: present(i, "generator", lost), converter: (parts.get(roots[i] ?? 0)?.converters ?? []).some((id) => graph.kind(id).capabilities.follower !== true) }));
   const joins = switches.map((one) => one.positions.map((position) => position.joins.map(([a, b]) => [at(a), at(b)] as const)));
   const lockedWith = switches.map((one, i) => switches.flatMap((other, j) => (j < i && interlocks.some((set) => set.includes(one.id) && set.includes(other.id)) ? [j] : [])));
   const references = reference.map((root) => slot.get(root) ?? 0);

@@ -4,13 +4,13 @@ import { CodeLookupError, isInsulation, MATERIAL_BY_SYMBOL } from "@/lib/code";
 import type { Command } from "@/lib/diagram/commands";
 import type { DrawingGraph } from "@/lib/diagram/graph";
 import type { Circuit, Section } from "@/lib/diagram/schema";
+import { checkContext } from "@/lib/rules/engine/context";
 import type { CheckContext } from "@/lib/rules/engine/types";
 import { columnAmpacityA, correctedAmpacity, terminalsOf, type Wire } from "@/lib/rules/shared/conductors";
 import { carriedBy, type Carried } from "@/lib/rules/shared/currents";
 import { numberOf, Reader } from "@/lib/rules/shared/outcome";
 import { largestDevice } from "@/lib/rules/shared/protection";
 import { topology } from "@/lib/rules/shared/topology";
-import { stateSpace } from "@/lib/states";
 import { CONDUCTOR_SIZES } from "@/lib/units";
 
 /** Result of sizing: the steps with what they lead to, or why it cannot be worked out yet. */
@@ -43,7 +43,7 @@ export function sizeEdit(graph: DrawingGraph, id: string): Sizing {
   const { drawing } = graph;
   const circuit = drawing.circuits[id] as Circuit;
   const { edition } = drawing.site;
-  const context: CheckContext = { drawing, graph, edition, states: () => stateSpace(graph), limit: (name) => { throw new RangeError(`sizing reads no limit ${name}`); } };
+  const context = checkContext(graph);
   const reader = new Reader(context);
   const section = graph.sections(id)[0];
   if (!section) return { reason: "The circuit has no conductors to size." };

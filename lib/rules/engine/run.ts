@@ -3,12 +3,12 @@ import { buildGraph } from "@/lib/diagram/graph";
 import { COLLECTIONS, type Drawing, type ElementRef } from "@/lib/diagram/schema";
 import { RULE_SET_VERSION, rules as allRules } from "@/lib/rules";
 import { nameOf, refKey } from "@/lib/rules/shared/outcome";
-import { stateSpace, type StateSpace } from "@/lib/states";
 import { applyAcceptances } from "./accept";
 import { withoutRemoved } from "./active";
 import { amend, citationOf, severityOf, type Amended } from "./amend";
+import { checkContext } from "./context";
 import { fold, merge } from "./fold";
-import type { CheckContext, CheckResult, Finding, FindingDraft, Rule, Severity } from "./types";
+import type { CheckContext, CheckResult, Declaration, Finding, FindingDraft, Rule, RuleMeta, Severity } from "./types";
 
 export interface CheckOptions {
   /** Milliseconds of a clock; without one nothing is timed. */
@@ -27,20 +27,21 @@ export function check(document: Drawing, options: CheckOptions = {}): CheckResul
   const drawing = withoutRemoved(document);
   const { edition } = drawing.site;
   const graph = buildGraph(drawing);
-  let space: StateSpace | null = null;
-  const states = (): StateSpace => (space ??= stateSpace(graph));
+  const shared = checkContext(graph);
   const timing: Record<string, number> = {};
   const found: Finding[] = [];
   const asked = new Map<string, Asked>();
+  const declarations: Declaration[] = [];
   let pass = 0;
   let rulesRun = 0;
   const rules = options.rules ?? allRules;
 
   for (const rule of rules) {
+    if (!inForce(rule.meta, edition)) continue;
     const amended = amend(drawing, rule.meta);
     if (amended.off) continue;
     rulesRun += 1;
-    const context: CheckContext = { drawing, graph, edition, states, limit: (name) => limitOf(rule, amended, name) };
+    const context: CheckContext = { ...shared, limit: (name) => limitOf(rule, amended, name) };
     const started = options.clock?.();
     let subject: ElementRef | null = null;
     try {
@@ -50,6 +51,7 @@ export function check(document: Drawing, options: CheckOptions = {}): CheckResul
         for (const outcome of "outcome" in answer ? [answer] : answer) {
           if (outcome.outcome === "pass") pass += 1;
           else if (outcome.outcome === "finding") found.push(toFinding(rule, amended, context, outcome.finding));
+          else if (outcome.outcome === "declared") declarations.push(toDeclaration(rule, amended, edition, outcome));
           else if (outcome.outcome === "needs-data") ask(asked, { rule, amended, blocks: outcome.blocks === true }, outcome.fields);
         }
       }
@@ -70,10 +72,16 @@ export function check(document: Drawing, options: CheckOptions = {}): CheckResul
     ruleSet: RULE_SET_VERSION, edition, digest: drawingDigest(document, RULE_SET_VERSION), rulesRun,
     counts: {
       mustFix: bySeverity("must-fix"), shouldFix: bySeverity("should-fix"), advice: bySeverity("advice"),
-      needsData: count((one) => one.kind === "needs-data"), accepted: count((one) => one.accepted !== null), declared: 0, pass,
+      needsData: count((one) => one.kind === "needs-data"), accepted: count((one) => one.accepted !== null), declared: declarations.filter((one) => one.statement !== null).length, pass,
     },
-    findings, timing,
+    findings, declarations, timing,
   };
+}
+
+const inForce = ({ from, to }: RuleMeta, edition: Drawing["site"]["edition"]): boolean => (from === undefined || edition >= from) && (to === undefined || edition <= to);
+
+function toDeclaration({ meta }: Rule, amended: Amended, edition: Drawing["site"]["edition"], { ref, statement }: { ref: ElementRef; statement: Declaration["statement"] }): Declaration {
+  return { rule: meta.id, anchor: ref, question: meta.question ?? meta.statement, citation: citationOf(meta, edition, amended.notes).citation, statement };
 }
 
 function limitOf(rule: Rule, amended: Amended, name: string): number {

@@ -40,6 +40,11 @@ export interface RuleMeta {
   reads: readonly string[];
   /** Rules whose findings are listed inside this one's when they share an element. */
   absorbs: readonly string[];
+  /** First and last edition that knows the requirement; left out: all of them. Elsewhere the rule does not run. */
+  from?: Edition;
+  to?: Edition;
+  /** Declared rules: what a person is asked to state, as a question that yes answers well. */
+  question?: string;
 }
 
 export interface CheckContext {
@@ -50,6 +55,8 @@ export interface CheckContext {
   states: () => StateSpace;
   /** Limit of the running rule after amendments. */
   limit: (name: string) => number;
+  /** A value that several rules or elements need, worked out once a run. `name` names it across all rules. */
+  once: <T>(name: string, work: () => T) => T;
 }
 
 export type { PatchOperation };
@@ -80,7 +87,9 @@ export type Outcome =
       fields: readonly { ref: ElementRef; field: string; label: string }[];
       /** True where the value stands on a protected path, so that sealing waits for it whatever the rule's own severity is. */
       blocks?: boolean;
-    };
+    }
+  /** Only a person can tell. Without a statement (null) the question is open; neither is ever counted as a pass. */
+  | { outcome: "declared"; ref: ElementRef; statement: { by: string; on: string; value: "yes" | "not applicable"; note: string } | null };
 
 /** One rule. `subjects` lists the elements it looks at; `evaluate` judges one. */
 export interface Rule {
@@ -111,6 +120,14 @@ export interface Finding extends FindingDraft {
   blocks: boolean;
   accepted: { by: string; license: string; reason: string; on: string } | null;
 }
+/** Question of a declared rule at one place, with what was stated; null while nobody has. */
+export interface Declaration {
+  rule: string;
+  anchor: ElementRef;
+  question: string;
+  citation: string;
+  statement: { by: string; on: string; value: "yes" | "not applicable"; note: string } | null;
+}
 export interface CheckResult {
   ruleSet: string;
   edition: Edition;
@@ -118,6 +135,8 @@ export interface CheckResult {
   rulesRun: number;
   counts: { mustFix: number; shouldFix: number; advice: number; needsData: number; accepted: number; declared: number; pass: number };
   findings: readonly Finding[];
+  /** Answers and open questions of the declared rules, counted apart from everything else. */
+  declarations: readonly Declaration[];
   /** Milliseconds by rule, only where a clock was handed in. */
   timing: Readonly<Record<string, number>>;
 }

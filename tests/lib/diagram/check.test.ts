@@ -45,8 +45,9 @@ describe("checking a document", () => {
   it.each(WRONG.map(([path, value, named]) => ({ path, value, named: named ?? path })))("names $path set to $value", ({ path, value, named }) => {
     expect(faults(set(path, value))).toContain(named);
   });
-  it("asks for a property that was left out, since null must be written", () => {
-    expect(faults((drawing) => { delete drawing.equipment["cb-a"]?.props["interruptingKA"]; })).toEqual(["/equipment/cb-a/props/interruptingKA"]);
+  it("takes a property that was left out for one that is not known: drawings outlive the day on which a kind gains one", () => {
+    expect(faults((drawing) => { delete drawing.equipment["cb-a"]?.props["interruptingKA"]; })).toEqual([]);
+    expect(faults((drawing) => { (drawing.equipment["cb-a"]?.props as Record<string, unknown>)["interruptingKiloA"] = 10; })).toEqual(["/equipment/cb-a/props/interruptingKiloA"]);
   });
   it("finds equipment that stands inside itself over several steps", () => {
     expect(faults((drawing) => { set("/equipment/house/parent", "genset")(drawing); set("/equipment/genset/parent", "house")(drawing); }))

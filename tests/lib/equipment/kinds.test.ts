@@ -41,7 +41,8 @@ describe.each(KIND_IDS)("%s", (kind) => {
   it("joins power ports of one system only, except where it converts", () => {
     const system = new Map(definition.ports(empty as never).map((port) => [port.id, port.system]));
     for (const join of definition.joins(empty as never)) {
-      if (join.by === "converter") expect(system.get(join.a)).not.toBe(system.get(join.b));
+      if (definition.capabilities.transformer) expect([system.get(join.a), system.get(join.b), join.by]).toEqual(["ac", "ac", "converter"]);
+      else if (join.by === "converter") expect(system.get(join.a)).not.toBe(system.get(join.b));
       else expect(system.get(join.a)).toBe(system.get(join.b));
     }
   });

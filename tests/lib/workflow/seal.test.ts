@@ -7,7 +7,7 @@ const finding = (key: string, change: Partial<Finding> = {}): Finding => ({
   accepted: null, variant: "v", anchor: { collection: "equipment", id: key }, related: [], message: `${key} is wrong`, steps: [], ...change,
 });
 const result = (findings: Finding[], counts: Partial<CheckResult["counts"]> = {}): CheckResult => ({
-  ruleSet: "1", edition: "2023", digest: "d", rulesRun: 1, findings, timing: {},
+  ruleSet: "1", edition: "2023", digest: "d", rulesRun: 1, findings, declarations: [], timing: {},
   counts: { mustFix: 0, shouldFix: 0, advice: 0, needsData: 0, accepted: 0, declared: 0, pass: 0, ...counts },
 });
 const question = (change: Partial<SealQuestion> = {}): SealQuestion => ({
