@@ -25,6 +25,21 @@ import { pvWithOtherSystems } from "./raceways/pv-with-other-systems";
 import { ctWrongSide } from "./sensors/ct-wrong-side";
 import { sourcesNotInterlocked } from "./transfer/sources-not-interlocked";
 
+import { conductorRules } from "./conductors";
+import { terminalRules } from "./terminals";
+import { racewayRules } from "./raceways";
+import { groundingRules } from "./grounding";
+import { pvRules } from "./pv";
+import { interconnectionRules } from "./interconnection";
+import { storageRules } from "./storage";
+import { disconnectRules } from "./disconnects";
+import { transferRules } from "./transfer";
+import { faultCurrentRules } from "./fault-current";
+import { sensorRules } from "./sensors";
+import { parallelRules } from "./parallel";
+import { labelRules } from "./labels";
+import { completenessRules } from "./completeness";
+
 /** Printed on every sealed sheet and part of the drawing digest. Raised whenever a rule may answer otherwise. */
 export const RULE_SET_VERSION = "2026-1";
 
@@ -35,4 +50,6 @@ export const rules: readonly Rule[] = [
   stringOverInverter, stringOverBuildingCap, stringCurrent, class2WithPower, dcInterrupting, egcUndersized,
   conduitOverfill, nippleOverfill, wirewayOverfill, bundlingCount, ctWrongSide, parallelRole, parallelFirmware, parallelLeadLength,
   ratingUnknown, duplicateTag, racewayNotRouted,
+  ...conductorRules, ...terminalRules, ...racewayRules, ...groundingRules, ...pvRules, ...interconnectionRules, ...storageRules,
+  ...disconnectRules, ...transferRules, ...faultCurrentRules, ...sensorRules, ...parallelRules, ...labelRules, ...completenessRules,
 ];
