@@ -7,7 +7,9 @@ import { NextResponse, type NextRequest } from "next/server";
  */
 
 /** Pages that anybody may open. */
-const OPEN_PAGES = new Set(["/sign-in", "/setup"]);
+const OPEN_PAGES = new Set(["/sign-in", "/setup", "/schema/drawing.json", "/rules"]);
+/** Pages below it show what the rules are and nobody's data. */
+const OPEN_FOLDER = "/rules/";
 
 function contentPolicy(nonce: string): string {
   const development = process.env.NODE_ENV !== "production";
@@ -33,7 +35,7 @@ export default async function proxy(request: NextRequest): Promise<Response> {
   const nonce = Buffer.from(crypto.randomUUID()).toString("base64");
   const policy = contentPolicy(nonce);
   const { pathname, search } = request.nextUrl;
-  const guarded = !pathname.startsWith("/api/") && !OPEN_PAGES.has(pathname);
+  const guarded = !pathname.startsWith("/api/") && !OPEN_PAGES.has(pathname) && !pathname.startsWith(OPEN_FOLDER);
   if (guarded && !(await getToken({ req: request }))) {
     const target = request.nextUrl.clone();
     target.pathname = "/sign-in";
