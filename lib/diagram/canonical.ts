@@ -6,14 +6,29 @@ import { sha256Hex } from "@/lib/diagram/sha256";
  * @throws RangeError for a number JSON cannot hold
  */
 export function canonicalJson(value: unknown): string {
-  if (Array.isArray(value)) return `[${value.map((each) => canonicalJson(each ?? null)).join(",")}]`;
-  if (typeof value === "object" && value !== null) {
-    const entries = Object.entries(value).filter(([, each]) => each !== undefined).sort(([a], [b]) => (a < b ? -1 : 1));
-    return `{${entries.map(([key, each]) => `${JSON.stringify(key)}:${canonicalJson(each)}`).join(",")}}`;
+  if (typeof value === "string") return quoted(value);
+  if (typeof value === "number") {
+    if (!Number.isFinite(value)) throw new RangeError("a drawing cannot hold a number that is not finite");
+    return Object.is(value, -0) ? "0" : String(value);
   }
-  if (typeof value === "number" && !Number.isFinite(value)) throw new RangeError("a drawing cannot hold a number that is not finite");
-  return JSON.stringify(value) ?? "null";
+  if (typeof value !== "object" || value === null) return JSON.stringify(value) ?? "null";
+  if (Array.isArray(value)) {
+    let text = "[";
+    for (let i = 0; i < value.length; i += 1) text += (i === 0 ? "" : ",") + canonicalJson(value[i] ?? null);
+    return `${text}]`;
+  }
+  const record = value as Readonly<Record<string, unknown>>;
+  let text = "";
+  // The default order of sort() is that of UTF-16 code units, the same everywhere.
+  for (const key of Object.keys(record).sort()) {
+    const each = record[key];
+    if (each !== undefined) text += `${text === "" ? "" : ","}${quoted(key)}:${canonicalJson(each)}`;
+  }
+  return `{${text}}`;
 }
+/** Most strings of a drawing are ids and short words, which need no escapes; asking JSON for each is most of the time. */
+const PLAIN = /^[ !#-[\]-~]*$/;
+const quoted = (text: string): string => (PLAIN.test(text) ? `"${text}"` : JSON.stringify(text));
 
 /**
  * Drawing digest: SHA-256, 64 hexadecimal digits, of the canonical drawing with the rule set and the edition it was checked under.
