@@ -45,7 +45,16 @@ export interface LibraryDifference { path: string; label: string; unit: string; 
 /** Equipment of a drawing whose entry has a later version. `data` is that version, for taking it over. */
 export interface LibraryUpdate { equipment: string; tag: string; entryId: string; entryName: string; drawn: number; now: number; archived: boolean; differences: LibraryDifference[]; data: LibraryData }
 
-export const importQuery = z.strictObject({ kind: z.string().max(40) });
+/** `confirm` is the digest of the preview that is to be carried out; without it nothing is written. */
+export const importQuery = z.strictObject({ kind: z.string().max(40), confirm: z.string().max(64).optional() });
+export const templateQuery = z.strictObject({ kind: z.string().max(40), fill: z.enum(["yes", "no"]).default("no") });
+/** Largest table, bytes. */
+export const IMPORT_BYTES = 5 * 1024 * 1024;
+/** What a confirmed import did, in entries. */
+export interface ImportAnswer { added: number; changed: number; same: number }
+/** Entries that can be placed in a job's drawing, with their values. */
+export interface JobLibraryAnswer { entries: (LibraryLine & { data: LibraryData })[] }
+export interface LibraryVersionAnswer { version: number; data: LibraryData; by: string; at: string; note: string }
 /** One cell that was not understood: row as a spreadsheet numbers it (the heading is row 1), the column's heading, what stood there and why it was not taken. */
 export interface ImportFault { row: number; column: string; value: string; reason: string }
 export interface ImportRow { row: number; name: string; action: "add" | "new version" | "same"; data: LibraryData; entryId: string | null; baseVersion: number | null }

@@ -5,7 +5,7 @@ const inverter = {
   listedInteractive: true, listedStandAlone: true, listedGeneratorMode: true, role: "single" as const, neutralRelay: "disabled" as const, enclosureType: "3R" as const, listing: "UL 1741",
 };
 const trackers = (count: number) => Object.fromEntries(Array.from({ length: count }, (_, i) => [`pv${i + 1}`, { maximumV: 600, maximumA: 20, ...terminal("14 AWG", "8 AWG", 20, "CU") }]));
-const module = { cell: "monocrystalline" as const, openCircuitPercentPerC: -0.26, maximumPowerPercentPerC: -0.33, bifacialGainPercent: 0, systemVoltageV: 1000, converters: false, listing: "UL 61730" };
+const modules = { cell: "monocrystalline" as const, openCircuitPercentPerC: -0.26, maximumPowerPercentPerC: -0.33, bifacialGainPercent: 0, systemVoltageV: 1000, converters: false, listing: "UL 61730" };
 const storage = { chemistry: "LFP" as const, listedSystem: false, enclosureType: "1" as const, listing: "UL 9540, UL 1973" };
 
 /*
@@ -41,10 +41,10 @@ export const sources: readonly StarterEntry[] = [
   }, { dc: { maximumV: 394, continuousA: 40, ...terminal("10 AWG", "6 AWG", 30, "CU") } }),
   entry("dc-bus-cabinet", "Dc bus cabinet, 600 A, 80 V", { busA: 600, voltageV: 80, shortCircuitKA: 20, grounded: false, spacesTotal: 6, polesMaximum: 12, enclosureType: "1", listing: "UL 891" }),
   entry("pv-string", "PV string, 12 modules of 410 W", {
-    ...module, modules: 12, moduleW: 410, openCircuitV: 37.3, shortCircuitA: 13.9, maximumPowerV: 31.25, maximumPowerA: 13.12, seriesFuseA: 25,
+    ...modules, modules: 12, moduleW: 410, openCircuitV: 37.3, shortCircuitA: 13.9, maximumPowerV: 31.25, maximumPowerA: 13.12, seriesFuseA: 25,
   }),
   entry("pv-string", "PV string, 10 modules of 550 W", {
-    ...module, modules: 10, moduleW: 550, openCircuitV: 49.8, shortCircuitA: 14, maximumPowerV: 41.7, maximumPowerA: 13.19, seriesFuseA: 25, systemVoltageV: 1500,
+    ...modules, modules: 10, moduleW: 550, openCircuitV: 49.8, shortCircuitA: 14, maximumPowerV: 41.7, maximumPowerA: 13.19, seriesFuseA: 25, systemVoltageV: 1500,
   }),
   entry("generator", "Standby generator, 20 kW, propane", { outputKW: 20, outputV: 240, ratedA: 83.3, fuel: "propane", use: "fixed standby", listedParallelWithUtility: false, enclosureType: "3R", listing: "UL 2200" }, {
     load: { nominalV: 240, continuousA: 83.3, ...terminal("6 AWG", "1/0 AWG", 50) },

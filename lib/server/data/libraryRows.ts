@@ -2,6 +2,7 @@ import "server-only";
 import type { LibraryData, LibraryLine } from "@/lib/api";
 import { equipmentDataFaults, ratedCounts, wholeEquipmentData } from "@/lib/equipment/libraryData";
 import { isKindId, kindDefinition } from "@/lib/equipment/registry";
+import { STARTER_SOURCE } from "@/lib/equipment/starter";
 import type { LibraryEntry } from "@/models";
 import { Problem, unprocessable } from "@/lib/server/http/problem";
 
@@ -28,6 +29,9 @@ export function knownKind(kind: string): ReturnType<typeof kindDefinition> {
   if (!isKindId(kind)) throw unprocessable("kind", "is no kind of equipment");
   return kindDefinition(kind);
 }
+
+/** Whether values of the starter set are left in it, by what stands as their source. */
+export const stillInvented = (data: LibraryData): boolean => Object.values(data.sources).some((source) => source.document === STARTER_SOURCE.document);
 
 /** A stored version with the properties its kind has today. */
 export const readData = (kind: string, data: LibraryData): LibraryData => (isKindId(kind) ? wholeEquipmentData(kindDefinition(kind), data) : data);
