@@ -53,5 +53,7 @@ export default async function proxy(request: NextRequest): Promise<Response> {
   return response;
 }
 
+// Files pass it by: it would keep a copy of each upload and silently cut it off at 10 MB, and its policy would replace the
+// stricter one that a download sets for itself.
 // No exception for prefetches: it would switch the guard off for whoever sends their header.
-export const config = { matcher: ["/((?!_next/static|_next/image|icon.svg|fonts/).*)"] };
+export const config = { matcher: ["/((?!_next/static|_next/image|icon.svg|fonts/|api/files/|api/jobs/[^/]+/files|api/library/[^/]+/files).*)"] };

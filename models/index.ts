@@ -14,6 +14,7 @@ import { Membership, initMembership } from "./membership";
 import { Revision, initRevision } from "./revision";
 import { Seal, initSeal } from "./seal";
 import { SheetSet, initSheetSet } from "./sheetSet";
+import { StoredFile, initStoredFile } from "./storedFile";
 import { User, initUser } from "./user";
 
 /**
@@ -24,6 +25,7 @@ export function initModels(sequelize: Sequelize): void {
   for (const init of [
     initCompany, initUser, initMembership, initJurisdiction, initJob, initJobMember, initLicense, initDrawing,
     initDrawingPatch, initRevision, initFindingAcceptance, initSeal, initSheetSet, initAuditEntry, initLibraryEntry, initLibraryVersion,
+    initStoredFile,
   ]) init(sequelize);
 
   User.hasMany(Membership, { as: "memberships", foreignKey: "userId" });
@@ -43,7 +45,8 @@ export function initModels(sequelize: Sequelize): void {
   Revision.hasMany(SheetSet, { as: "sheetSets", foreignKey: "revisionId" });
   Revision.hasMany(FindingAcceptance, { as: "acceptances", foreignKey: "revisionId" });
   LibraryEntry.hasMany(LibraryVersion, { as: "versions", foreignKey: "entryId" });
+  StoredFile.belongsTo(User, { as: "uploader", foreignKey: "uploadedBy" });
   LibraryVersion.belongsTo(User, { as: "maker", foreignKey: "madeBy" });
 }
 
-export { AuditEntry, Company, Drawing, DrawingPatch, FindingAcceptance, Job, JobMember, Jurisdiction, LibraryEntry, LibraryVersion, License, Membership, Revision, Seal, SheetSet, User };
+export { AuditEntry, Company, Drawing, DrawingPatch, FindingAcceptance, Job, JobMember, Jurisdiction, LibraryEntry, LibraryVersion, License, Membership, Revision, Seal, SheetSet, StoredFile, User };

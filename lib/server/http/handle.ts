@@ -110,5 +110,6 @@ function problemResponse(error: unknown, requestId: string, what: string): Respo
   };
   const headers: Record<string, string> = { "content-type": "application/problem+json", "cache-control": "no-store", "x-request-id": requestId };
   if (typeof problem.members["retryAfter"] === "number") headers["retry-after"] = String(problem.members["retryAfter"]);
+  if (typeof problem.members["contentRange"] === "string") headers["content-range"] = problem.members["contentRange"];
   return new Response(JSON.stringify(body), { status: problem.status, headers });
 }

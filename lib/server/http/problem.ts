@@ -25,3 +25,6 @@ export const conflict = (code: string, detail: string, members: Readonly<Record<
   new Problem(409, code, "Conflict", detail, members);
 export const tooMany = (seconds: number) =>
   new Problem(429, "too-many", "Too many tries", `Wait ${Math.max(1, Math.ceil(seconds))} s and try again.`, { retryAfter: Math.max(1, Math.ceil(seconds)) });
+/** The object store did not answer, or could not do it. */
+export const storeDown = () =>
+  new Problem(503, "store-down", "The file store does not answer", "The store that keeps files does not answer. Nothing was changed and nothing was lost. Try again in a minute.", { retryAfter: 15 });
