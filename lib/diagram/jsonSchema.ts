@@ -38,7 +38,7 @@ function kindSchema(kind: (typeof KIND_IDS)[number]): Json {
  * beyond a schema; the checker names those that do not hold.
  */
 export function drawingJsonSchema(): Json {
-  const base = z.toJSONSchema(drawingSchema, { target: "draft-2020-12" }) as Json & { properties: { equipment: { additionalProperties: Json } } };
+  const base = z.toJSONSchema(drawingSchema, { target: "draft-2020-12" }) as unknown as Json & { properties: { equipment: { additionalProperties: Json } } };
   const equipment = base.properties.equipment.additionalProperties;
   const properties = { ...(equipment["properties"] as Json), kind: { description: "Kind of equipment", enum: [...KIND_IDS] } };
   base.properties.equipment.additionalProperties = { ...equipment, properties, allOf: KIND_IDS.map(kindSchema) };

@@ -1,5 +1,6 @@
 import { equipmentOfNode, nodeKey, type ConductionEdge, type DrawingGraph, type End } from "@/lib/diagram/graph";
 import type { Circuit } from "@/lib/diagram/schema";
+import { reacher } from "./reach";
 
 /** What lies on one side of a circuit with every switch closed. Converters end a side; two throws of one transfer switch are never taken together. */
 export interface Side {
@@ -53,7 +54,7 @@ const far = (edge: ConductionEdge, node: string): string => (edge.a === node ? e
 const endNode = (circuit: Circuit, end: End): string => nodeKey(circuit[end].equipment, circuit[end].port);
 
 function build(graph: DrawingGraph): Topology {
-  const sides = new Map<string, Side>();
+  const beyond = reacher(graph);
   const runCache = new Map<string, readonly RunEnd[]>();
   const protectorCache = new Map<string, readonly Protector[]>();
   const edgeOfCircuit = new Map(graph.edges.filter((edge) => edge.by === "circuit").map((edge) => [edge.id, edge]));
@@ -61,12 +62,6 @@ function build(graph: DrawingGraph): Topology {
   const ratingField = (id: string): "ratingA" | "fuseA" | null =>
     graph.kind(id).capabilities.overcurrent ? "ratingA" : graph.drawing.equipment[id]?.props.fused === true ? "fuseA" : null;
 
-  const beyond = (node: string, without: ConductionEdge | null): Side => {
-    const key = `${node} ${without ? `${without.by} ${without.id} ${without.a} ${without.b}` : ""}`;
-    let side = sides.get(key);
-    if (!side) { side = reach(graph, node, without); sides.set(key, side); }
-    return side;
-  };
   const circuit = (id: string): Circuit => graph.drawing.circuits[id] as Circuit;
   const runs = (id: string, end: End): readonly RunEnd[] => {
     const key = `${id} ${end}`;
@@ -92,40 +87,20 @@ function build(graph: DrawingGraph): Topology {
     }
     return list;
   };
-  return { beyond, runs, protectors, ratingField, side: (id, end) => beyond(endNode(circuit(id), end), edgeOfCircuit.get(id) ?? null), runsFrom: (node) => follow(graph, ratingField, node, null, [], [], 0) };
-}
-
-function reach(graph: DrawingGraph, start: string, without: ConductionEdge | null): Side {
-  const kinds = { utility: new Set<string>(), generator: new Set<string>(), pv: new Set<string>(), battery: new Set<string>() };
-  const converters = new Set<string>();
-  const loads = new Set<string>();
-  const buses = new Set<string>();
-  const nodes = new Set<string>();
-  const edges = new Set<string>();
-  const seen = new Set<string>();
-  const queue: { node: string; thrown: string }[] = [{ node: start, thrown: "" }];
-  for (let at = queue.pop(); at; at = queue.pop()) {
-    const key = `${at.node} ${at.thrown}`;
-    if (seen.has(key)) continue;
-    seen.add(key);
-    nodes.add(at.node);
-    const id = equipmentOfNode(at.node);
-    const { source, converter, load, bus } = graph.kind(id).capabilities;
-    if (source) kinds[source].add(id);
-    if (converter) converters.add(id);
-    if (load) loads.add(id);
-    if (bus && at.node.endsWith("/bus")) buses.add(id);
-    for (const edge of graph.edgesAt(at.node)) {
-      if (edge === without || edge.by === "converter" || (edge.by === "throw" && edge.id === at.thrown)) continue;
-      if (edge.by === "circuit") edges.add(edge.id);
-      queue.push({ node: far(edge, at.node), thrown: edge.by === "throw" ? edge.id : "" });
-    }
-  }
-  const sorted = (set: Set<string>): readonly string[] => [...set].sort();
-  return {
-    utilities: sorted(kinds.utility), generators: sorted(kinds.generator), strings: sorted(kinds.pv), batteries: sorted(kinds.battery),
-    converters: sorted(converters), loads: sorted(loads), buses: sorted(buses), nodes, edges,
+  const from = new Map<string, readonly RunEnd[]>();
+  const runsFrom = (node: string): readonly RunEnd[] => {
+    let ends = from.get(node);
+    if (!ends) { ends = follow(graph, ratingField, node, null, [], [], 0); from.set(node, ends); }
+    return ends;
   };
+  const sides = new Map<string, Side>();
+  const side = (id: string, end: End): Side => {
+    const key = `${id} ${end}`;
+    let one = sides.get(key);
+    if (!one) { one = beyond(endNode(circuit(id), end), edgeOfCircuit.get(id) ?? null); sides.set(key, one); }
+    return one;
+  };
+  return { beyond, runs, protectors, ratingField, side, runsFrom };
 }
 
 /** Follows conductors through equipment that only passes them on, to the first device, bus, source, converter or load. */
@@ -166,8 +141,14 @@ export function motorCircuit(graph: DrawingGraph, circuit: string): boolean {
 /** Number of sources and converters on a side. */
 export const supplies = (side: Side): number => side.utilities.length + side.generators.length + side.converters.length + side.batteries.length + side.strings.length;
 
+const powerCache = new WeakMap<DrawingGraph, readonly string[]>();
 /** Field circuits of the power systems, in id order. */
 export function powerCircuits(graph: DrawingGraph): readonly string[] {
+  let known = powerCache.get(graph);
+  if (!known) { known = listPowerCircuits(graph); powerCache.set(graph, known); }
+  return known;
+}
+function listPowerCircuits(graph: DrawingGraph): readonly string[] {
   return Object.keys(graph.drawing.circuits).sort().filter((id) => {
     const circuit = graph.drawing.circuits[id] as Circuit;
     return circuit.wiring === "field" && circuit.system !== "data" && circuit.system !== "ground";
