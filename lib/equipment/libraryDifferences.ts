@@ -13,6 +13,14 @@ const PORT_FIELDS: Readonly<Record<string, readonly [string, string]>> = {
   torqueLbfIn: ["torque", "lbf·in"], torqueSource: ["source of the torque", ""], conductorsMost: ["conductors in one terminal at most", ""], fineStrand: ["identified for fine strands", ""],
 };
 
+const FIELD_ORDER = Object.keys(PORT_FIELDS);
+
+/** Members in a given order, others after them: the database keeps no order of its own. */
+function inOrder<Value>(members: Readonly<Record<string, Value>>, order: readonly string[]): [string, Value][] {
+  const place = (name: string): number => (order.includes(name) ? order.indexOf(name) : order.length);
+  return Object.entries(members).sort(([a], [b]) => place(a) - place(b));
+}
+
 /** Every single value of the data by its JSON pointer, in the order in which a form shows them. */
 function values(definition: KindDefinition, data: EquipmentData): Map<string, Value> {
   const all = new Map<string, Value>();
@@ -21,20 +29,20 @@ function values(definition: KindDefinition, data: EquipmentData): Map<string, Va
   for (const [name, property] of Object.entries(definition.properties)) {
     all.set(pointer("props", name), { label: property.label, unit: property.type === "number" ? property.unit : "", value: data.props[name] ?? null });
   }
-  for (const [name, source] of Object.entries(data.sources)) {
+  for (const [name, source] of inOrder(data.sources, Object.keys(definition.properties))) {
     all.set(pointer("sources", name, "document"), { label: `${label(name)}: datasheet`, unit: "", value: source.document });
     all.set(pointer("sources", name, "page"), { label: `${label(name)}: page`, unit: "", value: source.page });
     if (source.file) all.set(pointer("sources", name, "file"), { label: `${label(name)}: stored datasheet`, unit: "", value: source.file });
   }
-  for (const [id, port] of Object.entries(data.ports)) {
+  for (const [id, port] of inOrder(data.ports, [...ports.keys()])) {
     const at = ports.get(id) ?? id;
     const { terminal, ...fields } = port;
     const put = (name: string, value: PropertyValue, ...under: string[]): void => {
       const [words, unit] = PORT_FIELDS[name] ?? [name, ""];
       all.set(pointer("ports", id, ...under, name), { label: `${at}: ${words}`, unit, value });
     };
-    for (const [name, value] of Object.entries(fields)) put(name, value ?? null);
-    for (const [name, value] of Object.entries(terminal ?? {})) put(name, value ?? null, "terminal");
+    for (const [name, value] of inOrder(fields, FIELD_ORDER)) put(name, value ?? null);
+    for (const [name, value] of inOrder(terminal ?? {}, FIELD_ORDER)) put(name, value ?? null, "terminal");
   }
   return all;
 }

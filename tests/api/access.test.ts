@@ -7,7 +7,7 @@ let owner: Person & { companyId: string };
 let stranger: Person;
 let colleague: Person;
 let people: Record<"licensee" | "installer" | "clerk", Person>;
-let ids: { jobId: string; drawingId: string; revisionId: string; memberId: string; membershipId: string; companyId: string };
+let ids: Record<"jobId" | "drawingId" | "revisionId" | "memberId" | "membershipId" | "companyId" | "entryId" | "version", string>;
 
 beforeAll(async () => {
   owner = await firstAdministrator();
@@ -23,8 +23,9 @@ beforeAll(async () => {
   const issued = await request("POST", `/api/jobs/${jobId}/revisions`, { as: owner, body: { purpose: "issued for permit" } });
   const members = await request("GET", `/api/jobs/${jobId}/members`, { as: owner });
   const company = await request("GET", `/api/companies/${owner.companyId}/people`, { as: owner });
+  const library = await request("GET", `/api/companies/${owner.companyId}/library`, { as: owner });
   ids = {
-    jobId, drawingId, revisionId: issued.body.id, companyId: owner.companyId,
+    jobId, drawingId, revisionId: issued.body.id, companyId: owner.companyId, entryId: library.body.entries[0].id, version: "1",
     memberId: members.body.members.find((each: { userId: string }) => each.userId === people.installer.id).id,
     membershipId: company.body.people.find((each: { userId: string }) => each.userId === colleague.id).id,
   };
@@ -33,7 +34,7 @@ beforeAll(async () => {
 const fill = (pattern: string) => pattern.replace(/\[(\w+)\]/g, (_, name: string) => ids[name as keyof typeof ids]);
 
 /** What the owner sends, and is answered well, on every route that belongs to something. */
-const OWNED: Record<string, { body?: unknown; query?: string; by?: "licensee" | "clerk"; status?: number }> = {
+const OWNED: Record<string, { body?: unknown; raw?: BodyInit; type?: string; query?: string; by?: "licensee" | "clerk"; status?: number }> = {
   "GET /api/companies/[companyId]/people": {},
   "POST /api/companies/[companyId]/people": { body: { email: "new@example.test", name: "New", password: "long enough, really", roles: ["installer"] }, status: 201 },
   "PATCH /api/companies/[companyId]/people/[membershipId]": { body: { roles: ["designer", "installer"] } },
@@ -58,13 +59,24 @@ const OWNED: Record<string, { body?: unknown; query?: string; by?: "licensee" | 
   "POST /api/revisions/[revisionId]/seal": { body: { password: "a password of the tests" }, by: "licensee", status: 409 },
   "POST /api/revisions/[revisionId]/return": { body: { comment: "Look again." }, by: "licensee" },
   "GET /api/counter/[jobId]": { by: "clerk" },
+  "GET /api/companies/[companyId]/library": {},
+  "POST /api/companies/[companyId]/library": { body: { kind: "breaker", name: "Own breaker", data: { props: { ratingA: 60 }, sources: {}, ports: {} } }, status: 201 },
+  "POST /api/companies/[companyId]/library/import": { query: "?kind=breaker", raw: "Name,Poles\nFrom a table,2\n", type: "text/csv" },
+  "GET /api/companies/[companyId]/library/template.csv": { query: "?kind=breaker&fill=yes" },
+  "GET /api/library/[entryId]": {},
+  "PATCH /api/library/[entryId]": { body: { baseVersion: 1, name: "Renamed entry" } },
+  "GET /api/library/[entryId]/versions/[version]": {},
+  "GET /api/jobs/[jobId]/library": { query: "?kind=breaker" },
+  "GET /api/jobs/[jobId]/library-updates": {},
 };
 /** Routes that answer each person about themselves, and the one for the first visitor. */
 const OWN = [
   "GET /api/counter", "GET /api/jobs", "POST /api/jobs", "GET /api/jurisdictions", "GET /api/me", "GET /api/me/license", "PUT /api/me/license",
   "GET /api/me/license/seal-graphic", "PUT /api/me/license/seal-graphic", "POST /api/me/password", "GET /api/setup", "POST /api/setup",
 ];
-const call = (entry: (typeof OWNED)[string]): Call => (entry.body === undefined ? {} : { body: entry.body });
+const call = (entry: (typeof OWNED)[string]): Call => ({
+  ...(entry.body === undefined ? {} : { body: entry.body }), ...(entry.raw === undefined ? {} : { raw: entry.raw, headers: { "content-type": entry.type ?? "" } }),
+});
 const address = (route: string, entry: (typeof OWNED)[string]) => `${fill(route.split(" ")[1] ?? "")}${entry.query ?? ""}`;
 const method = (route: string) => route.split(" ")[0] ?? "";
 

@@ -9,6 +9,7 @@ import { conflict, notFound, unprocessable } from "@/lib/server/http/problem";
 import { companyAccess, type Actor } from "./actor";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
+import { filesOf } from "./files";
 import { usesOf } from "./libraryUse";
 import { identityOf, libraryLine, readData, soundData, stillInvented } from "./libraryRows";
 import { findEntries } from "./librarySearch";
@@ -51,15 +52,15 @@ export async function getEntry(actor: Actor, entryId: string): Promise<LibraryEn
   const row = await LibraryEntry.findByPk(entryId);
   if (!row) throw notFound();
   const roles = await companyAccess(actor, row.companyId, "library.view");
-  const [current, versions, usedBy] = await Promise.all([
+  const edit = mayInCompany(roles, "library.edit");
+  const [current, versions, usedBy, files] = await Promise.all([
     currentVersion(row),
     LibraryVersion.findAll({ where: { entryId }, attributes: ["version", "madeAt", "note"], include: [{ model: User, as: "maker", attributes: ["name"] }], order: [["version", "DESC"]] }),
-    usesOf(actor, row.companyId, entryId),
+    usesOf(actor, row.companyId, entryId), filesOf({ libraryEntryId: entryId }, edit),
   ]);
   const data = readData(row.kind, current.data);
   return {
-    ...libraryLine(row, data), companyId: row.companyId, data, versions: versions.map(versionLine), files: [], usedBy,
-    may: { edit: mayInCompany(roles, "library.edit") },
+    ...libraryLine(row, data), companyId: row.companyId, data, versions: versions.map(versionLine), files, usedBy, may: { edit },
   };
 }
 
