@@ -4,6 +4,7 @@ import type { JobAnswer } from "@/lib/api";
 import { ApiProblem } from "@/lib/client/api";
 import { whenInSentence } from "@/lib/client/dates";
 import { useJob } from "@/lib/client/queries";
+import { DocumentsPanel } from "@/components/files/DocumentsPanel";
 import { BarCell } from "@/components/ui/Bar";
 import { LinkButton } from "@/components/ui/Button";
 import { Caution } from "@/components/ui/Caution";
@@ -55,6 +56,7 @@ function Desk({ job, issueOpen }: { job: JobAnswer; issueOpen: boolean }) {
       <div className="grid grid-cols-[minmax(0,1fr)_440px] items-start gap-5 narrow:grid-cols-[minmax(0,1fr)_340px] phone:grid-cols-1">
         <div className="grid gap-5">
           <RevisionsPanel job={job} issueOpen={issueOpen} />
+          <DocumentsPanel job={job} />
           <SitePanel job={job} />
         </div>
         <div className="grid gap-5">

@@ -3,7 +3,7 @@ import type { Transaction } from "sequelize";
 import type { z } from "zod";
 import { FILE_BYTES, type FileAnswer, type uploadQuery } from "@/lib/api";
 import type { StoredFile } from "@/models";
-import { readUpload } from "@/lib/server/files/upload";
+import { interrupted, readUpload } from "@/lib/server/files/upload";
 import { fileTooLarge, inspectFile, type InspectedFile } from "@/lib/server/files/inspect";
 import { displayName } from "@/lib/server/files/names";
 import { conflict, notFound } from "@/lib/server/http/problem";
@@ -47,6 +47,7 @@ export async function addFile(actor: Actor, owner: FileOwner, about: z.output<ty
   // Before a byte is read: a stranger does not get to send twenty megabytes.
   await addAccess(actor, owner);
   const file = await inspectFile(await readUpload(request, FILE_BYTES, fileTooLarge), about.purpose);
+  if (request.signal.aborted) throw interrupted();
   const stored = await putOnce(FOLDER, file.bytes, file.contentType);
   try {
     return await inTransaction(async (transaction) => {

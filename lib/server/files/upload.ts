@@ -2,7 +2,8 @@ import "server-only";
 import { readBytes } from "@/lib/server/http/body";
 import { Problem } from "@/lib/server/http/problem";
 
-const interrupted = () =>
+/** Whoever sent it is gone, or has stopped. */
+export const interrupted = () =>
   new Problem(400, "interrupted", "The upload broke off", "The upload broke off before its end. Nothing was stored. Send the file again.");
 
 /**
