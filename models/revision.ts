@@ -1,7 +1,7 @@
 import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes, type NonAttribute, type Sequelize } from "sequelize";
 import type { Drawing as DrawingDocument } from "@/lib/diagram/schema";
 import type { CheckResult } from "@/lib/rules/engine/types";
-import type { RevisionState } from "@/lib/workflow";
+import type { IssuedJurisdiction, RevisionState } from "@/lib/workflow";
 import type { FindingAcceptance } from "./findingAcceptance";
 import type { Job } from "./job";
 import type { Seal } from "./seal";
@@ -23,6 +23,8 @@ export class Revision extends Model<InferAttributes<Revision>, InferCreationAttr
   declare digest: string;
   declare ruleSet: string;
   declare checkResult: CheckResult;
+  /** What the authority asked for on the day of issue; null where the job had none. */
+  declare jurisdiction: CreationOptional<IssuedJurisdiction | null>;
   declare issuedBy: string;
   declare issuedAt: CreationOptional<Date>;
   declare returnedBy: CreationOptional<string | null>;
@@ -54,6 +56,7 @@ export function initRevision(sequelize: Sequelize): void {
       digest: { type: DataTypes.TEXT, allowNull: false },
       ruleSet: { type: DataTypes.TEXT, allowNull: false },
       checkResult: { type: DataTypes.JSONB, allowNull: false },
+      jurisdiction: { type: DataTypes.JSONB },
       issuedBy: { type: DataTypes.UUID, allowNull: false },
       issuedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
       returnedBy: { type: DataTypes.UUID },

@@ -2,6 +2,7 @@
 export * from "./drawings";
 export * from "./files";
 export * from "./jobs";
+export * from "./jurisdictions";
 export * from "./library";
 export * from "./people";
 export * from "./problem";

@@ -3,6 +3,7 @@ import { EDITIONS, OCCUPANCIES, type Edition, type Site } from "@/lib/diagram/sc
 import type { Role } from "@/lib/policy";
 import type { CheckResult } from "@/lib/rules/engine/types";
 import type { JobState } from "@/lib/workflow";
+import type { JurisdictionAnswer } from "./jurisdictions";
 import { filledLine, line, paragraph } from "./text";
 
 /** Site data as a form holds it; null means not known yet. */
@@ -48,7 +49,6 @@ export const jobChange = z.strictObject({
 });
 export type JobChange = z.input<typeof jobChange>;
 
-export interface JurisdictionAnswer { id: string; name: string; edition: Edition; ordinance: string; amendments: Site["amendments"]; shared: boolean }
 export type Counts = CheckResult["counts"];
 /** One line of the register. */
 export interface JobLine {

@@ -1,7 +1,7 @@
 import { z } from "zod";
 import type { Drawing } from "@/lib/diagram/schema";
 import type { CheckResult } from "@/lib/rules/engine/types";
-import type { Refusal, RevisionState } from "@/lib/workflow";
+import type { Refusal, RevisionState, Signer } from "@/lib/workflow";
 import { filledLine, filledParagraph, line } from "./text";
 
 export const PURPOSES = ["issued for permit", "plan-check response", "issued for construction", "field change", "as-built"] as const;
@@ -24,6 +24,8 @@ export interface RevisionAnswer {
   state: RevisionState; issuedBy: string; issuedAt: string; returnedBy: string | null; returnedAt: string | null; returnComment: string | null;
   voidedAt: string | null; supersededAt: string | null;
   digest: string; ruleSet: string; drawing: Drawing; check: CheckResult;
+  /** The authority and whom it asks to sign, as on the day of issue. */
+  jurisdiction: { name: string; signs: Signer } | null;
   /** Last sealed revision before this one, to compare with. */
   previous: { id: string; letter: string } | null;
   seal: SealAnswer | null; preview: SheetSetAnswer | null; sealedSet: SheetSetAnswer | null;

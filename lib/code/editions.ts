@@ -1,4 +1,5 @@
 import { checkOneOf } from "@/lib/units";
+import { PREVIEW_REMARK } from "./adoption";
 import { CodeLookupError } from "./errors";
 import { GROUNDING_SECTIONS } from "./sections/grounding";
 import { LOAD_SECTIONS } from "./sections/loads";
@@ -49,7 +50,7 @@ const NOTES: Readonly<Record<Confirmation, string>> = {
   read: "",
   agreed: " (section to be verified)",
   unconfirmed: " (verify in the adopted book)",
-  preview: " (preview, edition not read)",
+  preview: ` (${PREVIEW_REMARK})`,
 };
 const TEXTS = new WeakMap<Citation, string>();
 

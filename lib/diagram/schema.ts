@@ -28,6 +28,15 @@ export const amendmentSchema = z.strictObject({
   unit: words(16).default(""),
   severity: z.enum(["must-fix", "should-fix", "advice"]).nullable().default(null),
   citation: words(120),
+  /** Limit of the rule that is amended; left out: every limit of that unit. */
+  limitName: words(48).optional(),
+});
+
+/** What the utility or the authority asks of every installation, copied from the jurisdiction; null is not known. */
+export const requirementsSchema = z.strictObject({
+  lockableVisibleSwitch: z.enum(["yes", "no"]).nullable(),
+  separateMeter: z.enum(["yes", "no"]).nullable(),
+  notes: words(400),
 });
 
 export const SERVICE_SYSTEMS = ["120/240 V, 3-wire", "208Y/120 V, 4-wire", "240/120 V, 4-wire delta with high leg", "480Y/277 V, 4-wire", "120 V, 2-wire"] as const;
@@ -41,6 +50,7 @@ export const siteSchema = z.strictObject({
   availableFaultCurrentA: z.number().min(0).max(200000).nullable(),
   temperatureSource: words(160).nullable(),
   amendments: z.record(idSchema, amendmentSchema),
+  requirements: requirementsSchema.optional(),
   /** Who gave the available fault current, and on which day. */
   faultCurrentSource: words(160).nullable().optional(),
   faultCurrentOn: z.iso.date().nullable().optional(),
@@ -348,6 +358,8 @@ export const drawingSchema = z.strictObject({
 
 export type Drawing = z.infer<typeof drawingSchema>;
 export type Site = z.infer<typeof siteSchema>;
+export type Amendment = z.infer<typeof amendmentSchema>;
+export type Requirements = z.infer<typeof requirementsSchema>;
 export type Sheet = z.infer<typeof sheetSchema>;
 export type Equipment = z.infer<typeof equipmentSchema>;
 export type PortData = z.infer<typeof portDataSchema>;

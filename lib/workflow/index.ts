@@ -1,3 +1,4 @@
 export * from "./letters";
 export * from "./revision";
 export * from "./seal";
+export * from "./signing";

@@ -1,3 +1,4 @@
+import { isPreview, previewNote } from "@/lib/code/adoption";
 import { findingEvidence } from "@/lib/rules/engine/accept";
 import type { CheckResult, Finding } from "@/lib/rules/engine/types";
 import type { Refusal, RevisionState } from "./revision";
@@ -62,6 +63,8 @@ export function sealRefusals(question: SealQuestion): Refusal[] {
   if (draftDigest !== check.digest) {
     refusals.push({ code: "draft-moved-on", detail: "The drawing was changed after this revision was issued. Return it and have it issued again." });
   }
+  // Limits of another edition are no ground on which a licensee can answer for a permit.
+  if (isPreview(check.edition)) refusals.push({ code: "edition-preview", detail: previewNote(check.edition) });
   const blocking = check.findings.filter(blocksSeal);
   const mustFix = blocking.filter((finding) => finding.kind === "finding");
   const needsData = blocking.filter((finding) => finding.kind === "needs-data");

@@ -1,3 +1,4 @@
+import { PREVIEW_REMARK } from "@/lib/code/adoption";
 import type { Drawing, Edition } from "@/lib/diagram/schema";
 import type { FindingDraft, Limit, RuleMeta, Severity } from "./types";
 
@@ -10,14 +11,14 @@ export interface Amended {
   notes: readonly string[];
 }
 
-/** Reads the local amendments of a rule. An amended limit replaces every limit of the same unit. */
+/** Reads the local amendments of a rule. An amended limit replaces the limit it names, or else every limit of the same unit. */
 export function amend(drawing: Drawing, meta: RuleMeta): Amended {
   const own = Object.entries(drawing.site.amendments).sort(([a], [b]) => (a < b ? -1 : 1)).map(([, amendment]) => amendment).filter((amendment) => amendment.rule === meta.id);
   const limits: Record<string, Limit> = { ...meta.limits };
   for (const amendment of own) {
     if (amendment.effect !== "limit" || amendment.limit === null) continue;
     for (const [name, limit] of Object.entries(limits)) {
-      if (amendment.unit === "" || amendment.unit.split(" ")[0] === limit.unit) limits[name] = { ...limit, value: amendment.limit, source: amendment.citation };
+      if (amendment.limitName !== undefined ? amendment.limitName === name : amendment.unit === "" || amendment.unit.split(" ")[0] === limit.unit) limits[name] = { ...limit, value: amendment.limit, source: amendment.citation };
     }
   }
   return {
@@ -32,7 +33,7 @@ export function amend(drawing: Drawing, meta: RuleMeta): Amended {
 export function citationOf(meta: RuleMeta, edition: Edition, notes: readonly string[]): { citation: string; verifySection: boolean } {
   const citation = meta.citations.find((one) => one.edition === edition);
   const verifySection = citation !== undefined && citation.book !== "" && citation.confirmation !== "read";
-  const remark = !verifySection ? "" : citation?.confirmation === "preview" ? " (preview, edition not read)" : " (section to be verified)";
+  const remark = !verifySection ? "" : citation?.confirmation === "preview" ? ` (${PREVIEW_REMARK})` : " (section to be verified)";
   const own = !citation ? "" : citation.book === "" ? citation.section : `${citation.book ?? "NEC"} ${edition} ${citation.section}${remark}`;
   return { citation: [own, ...notes].filter((text) => text !== "").join("; "), verifySection };
 }

@@ -3,6 +3,7 @@ import { randomUUID } from "node:crypto";
 import { Op, UniqueConstraintError } from "sequelize";
 import type { z } from "zod";
 import type { JobAnswer, JobLine, jobChange, jobInput } from "@/lib/api";
+import { protectedPatches, siteFrom } from "@/lib/diagram/jurisdiction";
 import { emptyDrawing } from "@/lib/diagram/new";
 import type { Drawing as DrawingDocument, Site } from "@/lib/diagram/schema";
 import { may, type Role } from "@/lib/policy";
@@ -31,12 +32,13 @@ export async function createJob(actor: Actor, input: z.output<typeof jobInput>):
       const jurisdiction = "id" in input.jurisdiction
         ? await visibleJurisdiction(input.jurisdiction.id, input.companyId, transaction)
         : await makeJurisdiction(actor, input.companyId, input.jurisdiction, transaction);
-      const site: Site = { ...input.site, amendments: jurisdiction.amendments };
-      const document = emptyDrawing(site, {
+      const site: Site = { ...input.site, ...siteFrom(jurisdiction) };
+      const empty = emptyDrawing(site, {
         jobName: input.name, jobNumber: input.number, addressLines: input.addressLines, parcel: input.parcel, owner: input.owner,
         designedBy: roles.includes("designer") ? actor.name : "", checkedBy: "", preparer: input.preparer, contractor: input.contractor || company.name,
         permitNumber: input.permitNumber, codes: codesLine(site, jurisdiction), scope: input.scope,
       });
+      const document = { ...empty, sheet: { ...empty.sheet, size: jurisdiction.exportProfile.sheetSize } };
       const job = await Job.create(
         { companyId: company.id, number: input.number, name: input.name, jurisdictionId: jurisdiction.id, createdBy: actor.id }, { transaction },
       );
@@ -162,13 +164,13 @@ export async function updateJob(actor: Actor, jobId: string, change: z.output<ty
 
 function documentChange(document: DrawingDocument, change: z.output<typeof jobChange>, jurisdiction: Jurisdiction | null): PatchOperation[] {
   const { number, jurisdictionId: _, site: siteChange, name, ...block } = change;
-  const site = { ...siteChange, ...(jurisdiction ? { amendments: jurisdiction.amendments } : {}) };
   const codes = jurisdiction || siteChange?.edition
     ? { codes: codesOf(document, siteChange?.edition ?? document.site.edition, jurisdiction) }
     : {};
   const titleBlock = { ...block, ...(name === undefined ? {} : { jobName: name }), ...(number === undefined ? {} : { jobNumber: number }), ...codes };
   return [
-    ...replacements("/site", document.site, site),
+    ...replacements("/site", document.site, siteChange ?? {}),
+    ...(jurisdiction ? protectedPatches(document.site, jurisdiction) : []),
     ...replacements("/sheet/titleBlock", document.sheet.titleBlock, titleBlock),
   ];
 }

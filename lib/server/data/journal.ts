@@ -87,6 +87,9 @@ function refuseProtected(before: DrawingDocument, after: DrawingDocument, save: 
   if (!save.amends && !same(after.site?.amendments, before.site.amendments)) {
     throw unprocessable("site.amendments", "come with the jurisdiction; choose it on the job's page", "protected");
   }
+  if (!save.amends && !same(after.site?.requirements, before.site.requirements)) {
+    throw unprocessable("site.requirements", "come with the jurisdiction; choose it on the job's page", "protected");
+  }
   const kept = Object.entries(after.acceptances ?? {}).every(([id, acceptance]) => same(acceptance, before.acceptances[id]));
   if (!kept) throw unprocessable("acceptances", "are written in review, by a licensee", "protected");
 }

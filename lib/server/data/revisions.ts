@@ -11,6 +11,7 @@ import { conflict, notFound, unprocessable } from "@/lib/server/http/problem";
 import { demand, jobAccess, rolesInJob, type Actor } from "./actor";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
+import { issuedJurisdiction } from "./jurisdictions";
 import { draftLetter } from "./letters";
 import { licenseOf, today } from "./licenses";
 import { checkOf, queueSheets, sheetSetAnswer } from "./sheetSets";
@@ -39,7 +40,7 @@ export function step(revision: Revision, event: RevisionEvent) {
 export async function issueRevision(actor: Actor, jobId: string, input: z.output<typeof issueInput>): Promise<{ id: string }> {
   const { Drawing, Revision } = database();
   return inTransaction(async (transaction) => {
-    await jobAccess(actor, jobId, "revision.issue", { transaction });
+    const { job } = await jobAccess(actor, jobId, "revision.issue", { transaction });
     const drawing = await Drawing.findOne({ where: { jobId }, transaction, lock: transaction.LOCK.UPDATE });
     if (!drawing) throw notFound();
     const open = await Revision.findOne({ where: { jobId, state: [...OPEN_STATES] }, attributes: ["letter"], transaction });
@@ -52,6 +53,7 @@ export async function issueRevision(actor: Actor, jobId: string, input: z.output
       {
         jobId, drawingId: drawing.id, letter, issue, purpose: input.purpose, description: input.description, state: "in review",
         sequence: drawing.sequence, snapshot: drawing.document, digest: result.digest, ruleSet: result.ruleSet, checkResult: result, issuedBy: actor.id,
+        jurisdiction: job.jurisdictionId ? await issuedJurisdiction(job.jurisdictionId, transaction) : null,
       },
       { transaction },
     );
@@ -135,6 +137,7 @@ export async function getRevision(actor: Actor, revisionId: string): Promise<Rev
     returnedBy: revision.returner?.name ?? null, returnedAt: revision.returnedAt?.toISOString() ?? null, returnComment: revision.returnComment,
     voidedAt: revision.voidedAt?.toISOString() ?? null, supersededAt: revision.supersededAt?.toISOString() ?? null,
     digest: revision.digest, ruleSet: revision.ruleSet, drawing: revision.snapshot, check: checked,
+    jurisdiction: revision.jurisdiction && { name: revision.jurisdiction.name, signs: revision.jurisdiction.signs },
     previous: previous && { id: previous.id, letter: previous.letter },
     seal: !seal ? null : {
       licensee: seal.licenseeName, title: seal.licenseTitle, licenseState: seal.licenseState, licenseNumber: seal.licenseNumber,

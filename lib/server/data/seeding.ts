@@ -35,7 +35,9 @@ export async function seedPerson(facts: { email: string; name: string; password:
 
 /** A jurisdiction that every company knows. */
 export async function seedJurisdiction(facts: { name: string; edition: Edition; ordinance: string; amendments: Site["amendments"] }): Promise<string> {
-  const [row] = await database().Jurisdiction.findOrCreate({ where: { companyId: null, name: facts.name }, defaults: { ...facts, companyId: null } });
+  const { edition, ...rest } = facts;
+  const editions = [{ edition, effectiveFrom: null, effectiveTo: null }];
+  const [row] = await database().Jurisdiction.findOrCreate({ where: { companyId: null, name: facts.name }, defaults: { ...rest, editions, companyId: null } });
   return row.id;
 }
 

@@ -1,6 +1,8 @@
 import "server-only";
 import { may } from "@/lib/policy";
+import { DEFAULT_FILE_NAME, fileName } from "@/lib/sheets/fileName";
 import { SEALED_STATES } from "@/lib/workflow";
+import type { Job, Revision } from "@/models";
 import { Problem, notFound } from "@/lib/server/http/problem";
 import { getBytes } from "@/lib/server/storage";
 import type { Actor } from "./actor";
@@ -30,11 +32,13 @@ export async function sheetFile(actor: Actor, revisionId: string): Promise<Sheet
       action: "sheets.download", subject: `revisions/${revision.id}`, jobId: job.id, detail: { letter: revision.letter, fileDigest: set.digest },
     }));
   }
-  return { bytes, fileName: sheetFileName(job.number, revision.letter, sealed), digest: set.digest, sealed };
+  return { bytes, fileName: sheetFileName(job, revision, sealed), digest: set.digest, sealed };
 }
 
-/** For example 26-031-SET-B.PDF; what is not a letter, digit or hyphen in the number becomes a hyphen. */
-export function sheetFileName(jobNumber: string, letter: string, sealed: boolean): string {
-  const safe = jobNumber.replace(/[^A-Za-z0-9-]+/g, "-").replace(/^-+|-+$/g, "") || "job";
-  return `${safe}-${sealed ? "SET" : "PREVIEW"}-${letter}.pdf`;
+/** Name of the whole set by the jurisdiction's template as it was at issue, for example 26-031-SET-B.pdf. */
+export function sheetFileName(job: Pick<Job, "number">, revision: Pick<Revision, "letter" | "issuedAt" | "jurisdiction" | "seal">, sealed: boolean): string {
+  const on = sealed && revision.seal ? revision.seal.sealedAt : revision.issuedAt;
+  return fileName(revision.jurisdiction?.fileNameTemplate ?? DEFAULT_FILE_NAME, {
+    job: job.number, set: sealed ? "SET" : "PREVIEW", revision: revision.letter, sheet: "ALL", date: on.toISOString().slice(0, 10),
+  });
 }

@@ -26,6 +26,8 @@ export interface SheetSource {
   purpose: string;
   issuedAt: Date;
   revisions: RevisionTableRow[];
+  /** Whether the file gets a bookmark for each sheet. */
+  bookmarks: boolean;
   /** Null on a preview. `graphicKey` leads to the seal graphic (PNG) in the store. */
   seal: {
     licensee: string; title: string; state: string; number: string; expiresOn: string; sealCode: string; sealedAt: Date; graphicKey: string;
@@ -72,6 +74,7 @@ export async function sheetSource(revisionId: string, sealed: boolean): Promise<
   return {
     revisionId, kind: sealed ? "sealed" : "preview", drawing: revision.snapshot, check: checkOf(revision), digest: revision.digest, ruleSet: revision.ruleSet,
     letter: revision.letter, issue: revision.issue, purpose: revision.purpose, issuedAt: revision.issuedAt,
+    bookmarks: revision.jurisdiction?.bookmarks ?? true,
     revisions: rows.map((each) => ({
       letter: each.letter, description: each.description || each.purpose, date: each.issuedAt.toISOString().slice(0, 10), by: each.issuer?.name ?? "",
     })),

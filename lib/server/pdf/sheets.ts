@@ -38,7 +38,7 @@ export async function renderSheets(source: SheetSource): Promise<{ bytes: Buffer
   const { titleBlock } = source.drawing.sheet;
   const bytes = await writePdf(pages, {
     title: `${titleBlock.jobName}, Rev ${source.letter}`, subject: `${titleBlock.jobNumber} ${source.purpose}`.trim(), author: titleBlock.preparer || titleBlock.designedBy,
-    createdAt: source.seal?.sealedAt ?? source.issuedAt, fileId: source.digest.slice(0, 32),
+    createdAt: source.seal?.sealedAt ?? source.issuedAt, fileId: source.digest.slice(0, 32), bookmarks: source.bookmarks,
   });
   return { bytes, sheets: pages.length };
 }

@@ -10,8 +10,11 @@ import { withBrowserGlobals } from "./shims";
 const POINTS_PER_INCH = 72;
 const FONT_FILES = { [FACE_FAMILIES.normal]: "ferrule-lettering.ttf", [FACE_FAMILIES.narrow]: "ferrule-lettering-narrow.ttf" } as const;
 
-/** Facts in the file's own description. `fileId` is 32 hexadecimal digits; with it and the date the same sheets give the same bytes. */
-export interface PdfFacts { title: string; subject: string; author: string; createdAt: Date; fileId: string }
+/**
+ * Facts in the file's own description. `fileId` is 32 hexadecimal digits; with it and the date the same sheets give the same
+ * bytes. Each sheet gets a bookmark unless `bookmarks` is false.
+ */
+export interface PdfFacts { title: string; subject: string; author: string; createdAt: Date; fileId: string; bookmarks?: boolean }
 
 const fontData = new Map<string, string>();
 function font(file: string): string {
@@ -34,7 +37,7 @@ function alone<T>(work: () => Promise<T>): Promise<T> {
 const isImage = (each: Primitive): each is Extract<Primitive, { type: "image" }> => each.type === "image";
 
 /**
- * Writes sheets as one vector PDF at plotted size: fonts embedded, words searchable, a bookmark for each sheet.
+ * Writes sheets as one vector PDF at plotted size: fonts embedded, words searchable, a bookmark for each sheet unless it is not wanted.
  * The same sheets and facts give the same bytes.
  * @throws Error when there is no sheet
  */
@@ -61,7 +64,7 @@ export function writePdf(pages: readonly SheetPage[], facts: PdfFacts): Promise<
       const svg = sheetSvg(page.primitives.filter((each) => !isImage(each)), page.widthPx, page.heightPx);
       await withBrowserGlobals(pdf, svg, (element) => svg2pdf(element, pdf, { x: 0, y: 0, width, height }));
       for (const image of page.primitives.filter(isImage)) pdf.addImage(image.href, "PNG", image.x * scale, image.y * scale, image.width * scale, image.height * scale, undefined, "FAST");
-      pdf.outline.add(null, `${page.number} ${page.title}`, { pageNumber: index + 1 });
+      if (facts.bookmarks !== false) pdf.outline.add(null, `${page.number} ${page.title}`, { pageNumber: index + 1 });
     }
     return Buffer.from(pdf.output("arraybuffer"));
   });
