@@ -11,7 +11,15 @@ import { compareSizes, isConductorSize, type ConductorSize } from "@/lib/units";
 
 /** Circuits whose fault current the conductor of one section may carry: its own, and those drawn to share it. */
 function served(context: CheckContext, id: string): readonly string[] {
-  return [id, ...Object.keys(context.drawing.circuits).sort().filter((other) => other !== id && Object.values(context.drawing.circuits[other]?.sections ?? {}).some((section) => section.sharesGroundOf === id))];
+  const sharing = context.once("circuits that share a grounding conductor", () => {
+    const map = new Map<string, string[]>();
+    for (const other of Object.keys(context.drawing.circuits).sort()) {
+      const owners = new Set(Object.values(context.drawing.circuits[other]?.sections ?? {}).flatMap((section) => (section.sharesGroundOf === null ? [] : [section.sharesGroundOf])));
+      for (const owner of owners) if (owner !== other) map.set(owner, [...(map.get(owner) ?? []), other]);
+    }
+    return map;
+  });
+  return [id, ...(sharing.get(id) ?? [])];
 }
 /** Largest device ahead of the circuits, A; PV circuits without one by the rating a device would have. */
 function deviceA(context: CheckContext, circuits: readonly string[], reader: Reader): { amperes: number; from: readonly string[] } | null {

@@ -111,12 +111,13 @@ function partsFrom(n: Numbered, start: number, without: ConductionEdge | null): 
   return parts;
 }
 
+type ListName = "utility" | "generator" | "pv" | "battery" | "converter" | "load" | "bus";
 interface Item { id: string; region: number; entry: number }
 
 /** Makes the reader of sides for one drawing. What a side holds is worked out when it is asked for. */
 export function reacher(graph: DrawingGraph): (node: string, without: ConductionEdge | null) => Side {
   const n = numberNodes(graph);
-  const lists = { utility: [] as Item[], generator: [] as Item[], pv: [] as Item[], battery: [] as Item[], converter: [] as Item[], load: [] as Item[], bus: [] as Item[] };
+  const lists: Record<ListName, Item[]> = { utility: [], generator: [], pv: [], battery: [], converter: [], load: [], bus: [] };
   const circuits: Item[] = [];
   n.names.forEach((name, i) => {
     const id = equipmentOfNode(name);
@@ -132,10 +133,18 @@ export function reacher(graph: DrawingGraph): (node: string, without: Conduction
     const at = n.index.get(edge.a) as number;
     circuits.push({ id: edge.id, region: n.region[at] as number, entry: n.entry[at] as number });
   }
-  for (const list of [...Object.values(lists), circuits]) list.sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : 0));
+  for (const list of [...Object.values(lists), circuits]) list.sort(byId);
+  const numbered = new Map<readonly Item[], ReadonlyMap<number, readonly Item[]>>([...Object.values(lists), circuits].map((list) => [list, inOrderOfEntry(list)]));
 
   const pick = (list: readonly Item[], parts: readonly Part[], not: string | null): readonly string[] => {
     const found: string[] = [];
+    const [only] = parts;
+    // What hangs from a bridge is few things among many: they stand next to each other by number.
+    if (only?.inside && parts.length === 1) {
+      const region = numbered.get(list)?.get(only.region) ?? [];
+      for (let i = firstFrom(region, only.first); i < region.length && (region[i] as Item).entry <= only.last; i += 1) found.push((region[i] as Item).id);
+      return [...new Set(found)].sort().filter((id) => id !== not);
+    }
     for (const item of list) {
       if (item.id === not || found.at(-1) === item.id) continue;
       if (parts.some((part) => holds(part, item.region, item.entry))) found.push(item.id);
@@ -152,32 +161,57 @@ export function reacher(graph: DrawingGraph): (node: string, without: Conduction
     const key = `${parts.map((part) => `${part.region}${part.inside ? "+" : "-"}${part.first}`).join(" ")} ${own ?? ""}`;
     let side = known.get(key);
     if (!side) {
-      side = lazily({
-        utilities: () => pick(lists.utility, parts, null), generators: () => pick(lists.generator, parts, null), strings: () => pick(lists.pv, parts, null),
-        batteries: () => pick(lists.battery, parts, null), converters: () => pick(lists.converter, parts, null), loads: () => pick(lists.load, parts, null),
-        buses: () => pick(lists.bus, parts, null), edges: () => new Set(pick(circuits, parts, own)),
-        nodes: () => new Set(n.names.filter((_, i) => parts.some((part) => holds(part, n.region[i] as number, n.entry[i] as number)))),
-      });
+      side = new LazySide(
+        (list) => pick(lists[list], parts, null), () => new Set(pick(circuits, parts, own)),
+        () => new Set(n.names.filter((_, i) => parts.some((part) => holds(part, n.region[i] as number, n.entry[i] as number)))),
+      );
       known.set(key, side);
     }
     return side;
   };
 }
 
+const byId = (a: Item, b: Item): number => (a.id < b.id ? -1 : a.id > b.id ? 1 : 0);
+function inOrderOfEntry(list: readonly Item[]): ReadonlyMap<number, readonly Item[]> {
+  const map = new Map<number, Item[]>();
+  for (const item of list) {
+    const own = map.get(item.region);
+    if (own) own.push(item);
+    else map.set(item.region, [item]);
+  }
+  for (const own of map.values()) own.sort((a, b) => a.entry - b.entry);
+  return map;
+}
+/** Place of the first item whose number is not below `entry`. */
+function firstFrom(list: readonly Item[], entry: number): number {
+  let [low, high] = [0, list.length];
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if ((list[middle] as Item).entry < entry) low = middle + 1;
+    else high = middle;
+  }
+  return low;
+}
 const EMPTY: Side = { utilities: [], generators: [], strings: [], batteries: [], converters: [], loads: [], buses: [], nodes: new Set(), edges: new Set() };
 
 /** A side whose lists are made on first use and kept. */
-function lazily(make: { [K in keyof Side]: () => Side[K] }): Side {
-  const side = {} as Side;
-  for (const name of Object.keys(make) as (keyof Side)[]) {
-    Object.defineProperty(side, name, {
-      configurable: true, enumerable: true,
-      get: () => {
-        const value = make[name]();
-        Object.defineProperty(side, name, { value, enumerable: true });
-        return value;
-      },
-    });
+class LazySide implements Side {
+  private readonly made = new Map<ListName, readonly string[]>();
+  private madeEdges: ReadonlySet<string> | null = null;
+  private madeNodes: ReadonlySet<string> | null = null;
+  constructor(private readonly list: (name: ListName) => readonly string[], private readonly makeEdges: () => ReadonlySet<string>, private readonly makeNodes: () => ReadonlySet<string>) {}
+  private of(name: ListName): readonly string[] {
+    let list = this.made.get(name);
+    if (!list) { list = this.list(name); this.made.set(name, list); }
+    return list;
   }
-  return side;
+  get utilities(): readonly string[] { return this.of("utility"); }
+  get generators(): readonly string[] { return this.of("generator"); }
+  get strings(): readonly string[] { return this.of("pv"); }
+  get batteries(): readonly string[] { return this.of("battery"); }
+  get converters(): readonly string[] { return this.of("converter"); }
+  get loads(): readonly string[] { return this.of("load"); }
+  get buses(): readonly string[] { return this.of("bus"); }
+  get edges(): ReadonlySet<string> { return (this.madeEdges ??= this.makeEdges()); }
+  get nodes(): ReadonlySet<string> { return (this.madeNodes ??= this.makeNodes()); }
 }

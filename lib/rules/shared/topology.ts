@@ -131,13 +131,23 @@ export function motorLoads(graph: DrawingGraph, side: Side): readonly string[] {
 }
 /** True for a circuit that ends in motors or air conditioning alone, so that Table 240.4(G) sends it to their articles. */
 export function motorCircuit(graph: DrawingGraph, circuit: string): boolean {
-  const { side } = topology(graph);
-  return (["from", "to"] as const).some((end) => {
-    const one = side(circuit, end);
-    const motors = motorLoads(graph, one).length;
-    return motors > 0 && motors === one.loads.length && supplies(one) === 0;
-  });
+  let known = motorCache.get(graph);
+  if (!known) { known = new Map(); motorCache.set(graph, known); }
+  let answer = known.get(circuit);
+  if (answer === undefined) {
+    const { side } = topology(graph);
+    answer = (["from", "to"] as const).some((end) => {
+      const one = side(circuit, end);
+      // Asked first, since the supplied side of a branch may hold every other load of the site.
+      if (supplies(one) > 0) return false;
+      const motors = motorLoads(graph, one).length;
+      return motors > 0 && motors === one.loads.length;
+    });
+    known.set(circuit, answer);
+  }
+  return answer;
 }
+const motorCache = new WeakMap<DrawingGraph, Map<string, boolean>>();
 /** Number of sources and converters on a side. */
 export const supplies = (side: Side): number => side.utilities.length + side.generators.length + side.converters.length + side.batteries.length + side.strings.length;
 
