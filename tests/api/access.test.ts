@@ -1,19 +1,23 @@
 import { beforeAll, describe, expect, it } from "vitest";
 import { drawingOf, place, save } from "./support/drawings";
-import { firstAdministrator, inCompany, newJob, onJob, type Person } from "./support/people";
+import { uploadPath, uploaded } from "./support/files";
+import { png } from "./support/png";
+import { firstAdministrator, inCompany, newJob, ofAnotherCompany, onJob, type Person } from "./support/people";
 import { allRoutes, request, type Call } from "./support/server";
 
 let owner: Person & { companyId: string };
 let stranger: Person;
+let twin: Person;
 let colleague: Person;
 let people: Record<"licensee" | "installer" | "clerk", Person>;
-let ids: Record<"jobId" | "drawingId" | "revisionId" | "memberId" | "membershipId" | "companyId" | "entryId" | "version", string>;
+let ids: Record<"jobId" | "drawingId" | "revisionId" | "memberId" | "membershipId" | "companyId" | "jurisdictionId" | "entryId" | "version" | "fileId", string>;
 
 beforeAll(async () => {
   owner = await firstAdministrator();
   const jobId = await newJob(owner);
   const elsewhere = await newJob(owner);
   stranger = await onJob(owner, elsewhere, ["designer", "licensee", "installer", "permit clerk"], "Stranger");
+  twin = await ofAnotherCompany(owner);
   colleague = await inCompany(owner, owner.companyId, ["designer"]);
   people = {
     licensee: await onJob(owner, jobId, ["licensee"]), installer: await onJob(owner, jobId, ["installer"]), clerk: await onJob(owner, jobId, ["permit clerk"]),
@@ -24,8 +28,11 @@ beforeAll(async () => {
   const members = await request("GET", `/api/jobs/${jobId}/members`, { as: owner });
   const company = await request("GET", `/api/companies/${owner.companyId}/people`, { as: owner });
   const library = await request("GET", `/api/companies/${owner.companyId}/library`, { as: owner });
+  const made = await request("POST", "/api/jurisdictions", { as: owner, body: { companyId: owner.companyId, name: "Test barn township", editions: [{ edition: "2023", effectiveFrom: null, effectiveTo: null }] } });
   ids = {
+    jurisdictionId: made.body.id,
     jobId, drawingId, revisionId: issued.body.id, companyId: owner.companyId, entryId: library.body.entries[0].id, version: "1",
+    fileId: (await uploaded(owner, `/api/jobs/${jobId}`, png(80, 80), "meter.png")).id,
     memberId: members.body.members.find((each: { userId: string }) => each.userId === people.installer.id).id,
     membershipId: company.body.people.find((each: { userId: string }) => each.userId === colleague.id).id,
   };
@@ -34,7 +41,7 @@ beforeAll(async () => {
 const fill = (pattern: string) => pattern.replace(/\[(\w+)\]/g, (_, name: string) => ids[name as keyof typeof ids]);
 
 /** What the owner sends, and is answered well, on every route that belongs to something. */
-const OWNED: Record<string, { body?: unknown; raw?: BodyInit; type?: string; query?: string; by?: "licensee" | "clerk"; status?: number }> = {
+const OWNED: Record<string, { body?: unknown; raw?: BodyInit; type?: string; query?: string; by?: "licensee" | "clerk"; status?: number; /** A designer of another of the company's jobs reads it too. */ shared?: true }> = {
   "GET /api/companies/[companyId]/people": {},
   "POST /api/companies/[companyId]/people": { body: { email: "new@example.test", name: "New", password: "long enough, really", roles: ["installer"] }, status: 201 },
   "PATCH /api/companies/[companyId]/people/[membershipId]": { body: { roles: ["designer", "installer"] } },
@@ -46,6 +53,11 @@ const OWNED: Record<string, { body?: unknown; raw?: BodyInit; type?: string; que
   "POST /api/jobs/[jobId]/members": { body: { email: "other@example.test", name: "Other", password: "long enough, really", roles: ["installer"] }, status: 201 },
   "PATCH /api/jobs/[jobId]/members/[memberId]": { body: { roles: ["installer"] } },
   "DELETE /api/jobs/[jobId]/members/[memberId]": { status: 204 },
+  "GET /api/jobs/[jobId]/jurisdiction-update": {},
+  "POST /api/jobs/[jobId]/jurisdiction-update": { body: { version: 1 } },
+  "GET /api/jurisdictions/[jurisdictionId]": {},
+  "PATCH /api/jurisdictions/[jurisdictionId]": { body: { version: 1, notes: "Counter open on Tuesdays." } },
+  "DELETE /api/jurisdictions/[jurisdictionId]": { status: 204 },
   "GET /api/jobs/[jobId]/revisions": {},
   "POST /api/jobs/[jobId]/revisions": { body: { purpose: "issued for permit" }, status: 409 },
   "GET /api/drawings/[drawingId]/patches": { query: "?since=0" },
@@ -68,10 +80,16 @@ const OWNED: Record<string, { body?: unknown; raw?: BodyInit; type?: string; que
   "GET /api/library/[entryId]/versions/[version]": {},
   "GET /api/jobs/[jobId]/library": { query: "?kind=breaker" },
   "GET /api/jobs/[jobId]/library-updates": {},
+  "GET /api/jobs/[jobId]/files": {},
+  "POST /api/jobs/[jobId]/files": { query: uploadPath("", "roof.png", "site photo").slice("/files".length), raw: new Uint8Array(png(90, 90)), type: "image/png", status: 201 },
+  "GET /api/library/[entryId]/files": { shared: true },
+  "POST /api/library/[entryId]/files": { query: uploadPath("", "breaker.png", "picture").slice("/files".length), raw: new Uint8Array(png(70, 70)), type: "image/png", status: 201 },
+  "GET /api/files/[fileId]": {},
+  "DELETE /api/files/[fileId]": { status: 204 },
 };
 /** Routes that answer each person about themselves, and the one for the first visitor. */
 const OWN = [
-  "GET /api/counter", "GET /api/jobs", "POST /api/jobs", "GET /api/jurisdictions", "GET /api/me", "GET /api/me/license", "PUT /api/me/license",
+  "GET /api/counter", "GET /api/jobs", "POST /api/jobs", "GET /api/jurisdictions", "POST /api/jurisdictions", "GET /api/me", "GET /api/me/license", "PUT /api/me/license",
   "GET /api/me/license/seal-graphic", "PUT /api/me/license/seal-graphic", "POST /api/me/password", "GET /api/setup", "POST /api/setup",
 ];
 const call = (entry: (typeof OWNED)[string]): Call => ({
@@ -91,7 +109,14 @@ describe("every route", () => {
     expect(await request(method(route), address(route, entry), call(entry))).toMatchObject({ status: 401, body: { code: "sign-in" } });
   });
 
-  it.each(Object.keys(OWNED))("%s is not there for a stranger, whatever their roles elsewhere", async (route) => {
+  it.each(Object.keys(OWNED))("%s is not there for somebody who has every role in another company", async (route) => {
+    const entry = OWNED[route] ?? {};
+    const answer = await request(method(route), address(route, entry), { ...call(entry), as: twin });
+    expect(answer).toMatchObject({ status: 404, body: { code: "not-found" } });
+    expect(JSON.stringify(answer.body)).not.toContain("Test barn");
+  });
+
+  it.each(Object.keys(OWNED).filter((route) => !OWNED[route]?.shared))("%s is not there for a stranger, whatever their roles elsewhere", async (route) => {
     const entry = OWNED[route] ?? {};
     const answer = await request(method(route), address(route, entry), { ...call(entry), as: stranger });
     expect(answer).toMatchObject({ status: 404, body: { code: "not-found" } });

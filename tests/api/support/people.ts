@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import { encode } from "next-auth/jwt";
 import type { CredentialsConfig } from "next-auth/providers/credentials";
 import type { Role } from "@/lib/policy";
+import { database } from "@/lib/server/data/database";
 import { authOptions } from "@/lib/server/auth/options";
 import { request } from "./server";
 
@@ -54,6 +55,18 @@ export async function inCompany(administrator: Person, companyId: string, roles:
   const made = await request("POST", `/api/companies/${companyId}/people`, { as: administrator, body: { email, name: "Of the company", password: PASSWORD, roles } });
   if (made.status !== 201) throw new Error(`adding ${email} answered ${made.status}`);
   return signedIn(email, "Of the company");
+}
+
+/** Somebody with every role of a company of their own, and of a job in it: the twin who must see nothing of the first one. */
+export async function ofAnotherCompany(administrator: Person & { companyId: string }): Promise<Person & { companyId: string }> {
+  const person = await inCompany(administrator, administrator.companyId, ["administrator", "designer", "licensee", "installer"]);
+  const { Company, Membership } = database();
+  const company = await Company.create({ name: "Southlight Works" });
+  await Membership.update({ companyId: company.id }, { where: { userId: person.id } });
+  const twin = { ...person, companyId: company.id };
+  const jobId = await newJob(twin, { name: "Twin barn" });
+  await database().JobMember.update({ roles: ["administrator", "designer", "licensee", "installer", "permit clerk"] }, { where: { jobId, userId: person.id } });
+  return twin;
 }
 
 export const site = {
