@@ -1,5 +1,4 @@
 import { equipmentOfNode, type ConductionEdge, type DrawingGraph } from "@/lib/diagram/graph";
-import type { Side } from "./topology";
 
 /*
  * What lies beyond an edge is asked for every circuit, so it is not walked each time: regions (what is joined without a
@@ -7,6 +6,19 @@ import type { Side } from "./topology";
  * numbers or the rest of its region. Time and memory grow with the drawing, not with its square.
  */
 
+/** What lies on one side of a circuit with every switch closed. Converters end a side; two throws of one transfer switch are never taken together. */
+export interface Side {
+  utilities: readonly string[];
+  generators: readonly string[];
+  strings: readonly string[];
+  batteries: readonly string[];
+  converters: readonly string[];
+  loads: readonly string[];
+  buses: readonly string[];
+  nodes: ReadonlySet<string>;
+  /** Circuits whose both ends lie here. */
+  edges: ReadonlySet<string>;
+}
 /** Nodes of one region between two numbers, or all of it but those. */
 interface Part { region: number; first: number; last: number; inside: boolean }
 interface Throw { equipment: string; from: number; to: number }

@@ -1,20 +1,9 @@
 import { equipmentOfNode, nodeKey, type ConductionEdge, type DrawingGraph, type End } from "@/lib/diagram/graph";
 import type { Circuit } from "@/lib/diagram/schema";
-import { reacher } from "./reach";
+import { reacher, type Side } from "./reach";
 
-/** What lies on one side of a circuit with every switch closed. Converters end a side; two throws of one transfer switch are never taken together. */
-export interface Side {
-  utilities: readonly string[];
-  generators: readonly string[];
-  strings: readonly string[];
-  batteries: readonly string[];
-  converters: readonly string[];
-  loads: readonly string[];
-  buses: readonly string[];
-  nodes: ReadonlySet<string>;
-  /** Circuits whose both ends lie here. */
-  edges: ReadonlySet<string>;
-}
+export type { Side };
+
 /** Where a walk along a run of conductors ended. */
 export interface RunEnd {
   stop: "device" | "bus" | "source" | "converter" | "load" | "open" | "junction";
