@@ -1,6 +1,6 @@
 import { readFile } from "node:fs/promises";
 import path from "node:path";
-import type { Site } from "@/lib/diagram/schema";
+import type { Drawing, Site } from "@/lib/diagram/schema";
 import { seedCompany, seedJob, seedJurisdiction, seedLicense, seedPerson } from "@/lib/server/data/seeding";
 import { DEMO_COMPANY, demoPeople } from "./demoAccounts";
 import { cleanDrawing } from "./demo/cleanDrawing";
@@ -31,8 +31,10 @@ export async function up(): Promise<void> {
   const members = people.map((each) => ({ userId: each.actor.id, roles: each.roles }));
   const author = actorOf(demoPeople.designer.email);
   const common = { companyId, jurisdictionId, author, members };
-  const planted = plantedDrawing();
+  // As the job page copies them, so that the demo's jobs and their county agree.
+  const here = (drawing: Drawing): Drawing => ({ ...drawing, site: { ...drawing.site, amendments: AMENDMENTS } });
+  const planted = here(plantedDrawing());
   const owners = { ...planted, sheet: { ...planted.sheet, titleBlock: { ...planted.sheet.titleBlock, jobNumber: "26-031P" } } };
   await seedJob({ ...common, number: "26-031P", name: "Teasel Hill Creamery, as drawn by the owner", drawing: owners });
-  await seedJob({ ...common, number: "26-031", name: "Teasel Hill Creamery", drawing: cleanDrawing() });
+  await seedJob({ ...common, number: "26-031", name: "Teasel Hill Creamery", drawing: here(cleanDrawing()) });
 }

@@ -37,7 +37,7 @@ const web = line(200).refine((text) => text === "" || (URL.canParse(text) && /^h
 export const contactInput = z.strictObject({ name: filledLine(80), role: line(80), email: z.union([z.literal(""), z.email("is no mail address").max(254)]), phone: line(40), web });
 export type Contact = z.infer<typeof contactInput>;
 
-const facts = z.strictObject({
+export const jurisdictionFacts = z.strictObject({
   name: filledLine(120),
   ordinance: line(160),
   editions: adoptionsInput,
@@ -49,15 +49,15 @@ const facts = z.strictObject({
   contacts: z.array(contactInput).max(20, "are more than 20"),
   notes: paragraph(4000),
 });
-export type JurisdictionFacts = z.infer<typeof facts>;
+export type JurisdictionFacts = z.infer<typeof jurisdictionFacts>;
 /** A jurisdiction of a company's own: entered anew, or begun as a copy of one it can see. */
 export const jurisdictionMake = z.union([
   z.strictObject({ companyId: z.uuid(), copyOf: z.uuid(), name: filledLine(120).optional() }),
-  z.strictObject({ companyId: z.uuid(), ...facts.partial().shape, name: facts.shape.name, editions: facts.shape.editions }),
+  z.strictObject({ companyId: z.uuid(), ...jurisdictionFacts.partial().shape, name: jurisdictionFacts.shape.name, editions: jurisdictionFacts.shape.editions }),
 ]);
 export type JurisdictionMake = z.input<typeof jurisdictionMake>;
 /** `version` is the one that was edited. */
-export const jurisdictionChange = z.strictObject({ version: z.number().int().min(1), ...facts.partial().shape });
+export const jurisdictionChange = z.strictObject({ version: z.number().int().min(1), ...jurisdictionFacts.partial().shape });
 export type JurisdictionChange = z.input<typeof jurisdictionChange>;
 
 /** What whoever draws a job needs of its jurisdiction. `edition` is the one in force today. */

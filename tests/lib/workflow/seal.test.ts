@@ -36,6 +36,7 @@ describe("what stands in the way of a seal", () => {
     const refusals = sealRefusals(question({ check, draftDigest: "other", license: { state: "S", number: "L-1", expiresOn: "2026-11-30", hasSealGraphic: false } }));
     expect(refusals.map((each) => each.code)).toEqual(["draft-moved-on", "must-fix-open", "needs-data-open", "license-expired", "seal-graphic-missing"]);
     expect(refusals.flatMap((each) => each.findings ?? []).map((each) => each.key)).toEqual(["a", "b"]);
+    expect(codes({ check: { ...result([]), edition: "2026" } })).toEqual(["edition-preview"]);
     expect(codes({ license: null })).toEqual(["license-missing"]);
     expect(codes({ state: "returned" })).toEqual(["not-in-review"]);
   });
