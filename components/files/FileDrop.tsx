@@ -14,7 +14,7 @@ const ACCEPT: Readonly<Record<FilePurpose, string>> = {
 const limits = (purpose: FilePurpose) => {
   const size = `up to ${Math.round(FILE_BYTES / 1024 / 1024)} MB`;
   if (purpose === "datasheet") return `PDF, ${size}.`;
-  const pictures = `PNG, JPEG or WebP, ${size} and ${Math.round(FILE_PIXELS / 1e6)} megapixels. Location and camera data are taken out.`;
+  const pictures = `PNG, JPEG or WebP, ${size} and ${FILE_PIXELS / 1e6} megapixels. Location and camera data are taken out.`;
   return purpose === "document" ? `PDF, ${pictures}` : pictures;
 };
 

@@ -12,7 +12,7 @@ export function SendingRow({ sending, onStop, onRetry }: { sending: Sending; onS
   const failed = state === "failed";
   const again = failed && (!error || worthRetrying(error.status));
   const percent = Math.round(sent * 100);
-  const words = state === "waiting" ? "Waits for its turn" : sent < 1 ? `${percent} % of ${sizeWords(file.size)}` : "Sent; being checked";
+  const words = state === "waiting" ? "Waits for its turn" : sent < 1 ? `${percent} % of ${sizeWords(file.size)}` : "Sent; the server looks at it";
   return (
     <li className="flex flex-wrap items-center gap-x-4 gap-y-2 border-b border-g2 px-4 py-2.5 last:border-b-0">
       <div className="min-w-0 flex-1 basis-56">
@@ -24,8 +24,8 @@ export function SendingRow({ sending, onStop, onRetry }: { sending: Sending; onS
           </p>
         ) : (
           <>
-            <progress value={state === "sending" && sent === 1 ? undefined : percent} max={100} aria-label={`Sending ${file.name}`} className="mt-1 block h-1.5 w-full appearance-none border border-rule bg-paper [&::-moz-progress-bar]:bg-ink [&::-webkit-progress-bar]:bg-paper [&::-webkit-progress-value]:bg-ink" />
-            <p className="mt-1 text-label text-ink2">{words}</p>
+            {state === "sending" && <progress value={percent} max={100} aria-label={`Sending ${file.name}`} className="mt-1 block h-1.5 w-full appearance-none border border-rule bg-paper [&::-moz-progress-bar]:bg-ink [&::-webkit-progress-bar]:bg-paper [&::-webkit-progress-value]:bg-ink" />}
+            <p className="mt-1 text-label text-ink2" role={state === "sending" && sent === 1 ? "status" : undefined}>{words}</p>
           </>
         )}
       </div>

@@ -81,26 +81,28 @@ async function open(key: string, range?: ByteRange) {
   }
 }
 
+async function read(key: string): Promise<Buffer> {
+  const body = await open(key);
+  try {
+    return Buffer.from(await body.transformToByteArray());
+  } catch (error) {
+    throw failed("read", key, error);
+  }
+}
+
 /**
  * Bytes of a stored file, checked against the digest in its key.
  * @throws Problem 503 when the store does not give them; Error when they are not what the key says
  */
 export async function getBytes(key: string): Promise<Buffer> {
-  const body = await open(key);
-  let bytes: Buffer;
-  try {
-    bytes = Buffer.from(await body.transformToByteArray());
-  } catch (error) {
-    throw failed("read", key, error);
-  }
+  const bytes = await read(key);
   if (digestOf(bytes) !== key.slice(key.lastIndexOf("/") + 1)) throw new Error(`stored file ${key} was changed`);
   return bytes;
 }
 
 /** Bytes under a key that is not made of their own digest, or null where there are none. @throws Problem 503 `store-down` */
 export async function getIfPresent(key: string): Promise<Buffer | null> {
-  if (!(await exists(key))) return null;
-  return Buffer.from(await (await open(key)).transformToByteArray());
+  return (await exists(key)) ? read(key) : null;
 }
 
 /** A part of a stored file as a stream. @throws Problem 503 `store-down` */
