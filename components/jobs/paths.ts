@@ -6,5 +6,7 @@ export const paths = {
   drawing: (jobId: string) => `/jobs/${jobId}/drawing`,
   sheets: (jobId: string) => `/jobs/${jobId}/sheets`,
   revision: (jobId: string, revisionId: string) => `/jobs/${jobId}/review/${revisionId}`,
+  jurisdictions: "/jurisdictions",
+  jurisdiction: (id: string) => `/jurisdictions/${id}`,
   counter: (jobId: string) => `/counter/${jobId}`,
 };
