@@ -11,6 +11,14 @@ export class Job extends Model<InferAttributes<Job>, InferCreationAttributes<Job
   declare number: string;
   declare name: string;
   declare jurisdictionId: string | null;
+  declare dueOn: string | null;
+  declare officeStatus: CreationOptional<"open" | "on hold" | "closed">;
+  declare archivedAt: Date | null;
+  declare archivedBy: string | null;
+  /** In cents; a string, as the driver gives 64-bit numbers. */
+  declare permitFeeCents: string | null;
+  declare permitFeePaidOn: string | null;
+  declare permitReceipt: CreationOptional<string>;
   declare createdBy: string;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
@@ -28,6 +36,13 @@ export function initJob(sequelize: Sequelize): void {
       number: { type: DataTypes.TEXT, allowNull: false },
       name: { type: DataTypes.TEXT, allowNull: false },
       jurisdictionId: { type: DataTypes.UUID },
+      dueOn: { type: DataTypes.DATEONLY },
+      officeStatus: { type: DataTypes.TEXT, allowNull: false, defaultValue: "open" },
+      archivedAt: { type: DataTypes.DATE },
+      archivedBy: { type: DataTypes.UUID },
+      permitFeeCents: { type: DataTypes.BIGINT },
+      permitFeePaidOn: { type: DataTypes.DATEONLY },
+      permitReceipt: { type: DataTypes.TEXT, allowNull: false, defaultValue: "" },
       createdBy: { type: DataTypes.UUID, allowNull: false },
       createdAt: { type: DataTypes.DATE, allowNull: false },
       updatedAt: { type: DataTypes.DATE, allowNull: false },
