@@ -12,6 +12,8 @@ export class AuditEntry extends Model<InferAttributes<AuditEntry>, InferCreation
   declare subject: string;
   declare detail: Record<string, unknown>;
   declare requestId: string | null;
+  declare fromAddress: string | null;
+  declare userAgent: string | null;
 }
 
 export function initAuditEntry(sequelize: Sequelize): void {
@@ -26,6 +28,8 @@ export function initAuditEntry(sequelize: Sequelize): void {
       subject: { type: DataTypes.TEXT, allowNull: false },
       detail: { type: DataTypes.JSONB, allowNull: false },
       requestId: { type: DataTypes.TEXT },
+      fromAddress: { type: DataTypes.INET },
+      userAgent: { type: DataTypes.TEXT },
     },
     { sequelize, modelName: "auditEntry", tableName: "audit_log", underscored: true, timestamps: false },
   );

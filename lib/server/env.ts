@@ -10,6 +10,8 @@ const schema = z.object({
   DATABASE_POOL: z.coerce.number().int().min(1).max(100).default(10),
   NEXTAUTH_URL: z.url({ protocol: /^https?$/ }),
   NEXTAUTH_SECRET: z.string().min(32),
+  /** "yes" when a proxy that writes x-forwarded-for stands before the server and nobody can pass it by. */
+  TRUST_PROXY: flag.default(false),
   S3_ENDPOINT: z.url({ protocol: /^https?$/ }).optional(),
   S3_REGION: z.string().min(1).default("us-east-1"),
   S3_BUCKET: z.string().min(3),

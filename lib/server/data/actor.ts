@@ -3,11 +3,12 @@ import type { Transaction } from "sequelize";
 import { may, mayInCompany, type CompanyAction, type JobAction, type Role } from "@/lib/policy";
 import type { RevisionState } from "@/lib/workflow";
 import type { Job } from "@/models";
+import type { Origin } from "@/lib/server/http/connection";
 import { forbidden, notFound } from "@/lib/server/http/problem";
 import { database } from "./database";
 
-/** The signed-in person on whose behalf something is done. */
-export interface Actor { id: string; name: string; email: string; requestId: string | null }
+/** The signed-in person on whose behalf something is done, by which request and from where; null for both in seeders and scripts. */
+export interface Actor { id: string; name: string; email: string; requestId: string | null; from: Origin | null }
 
 export interface JobAccess { job: Job; roles: Role[] }
 

@@ -30,7 +30,7 @@ export async function seedPerson(facts: { email: string; name: string; password:
       where: { companyId: facts.companyId, userId: user.id }, defaults: { companyId: facts.companyId, userId: user.id, roles: facts.roles },
     });
   }
-  return { id: user.id, name: user.name, email: user.email, requestId: null };
+  return { id: user.id, name: user.name, email: user.email, requestId: null, from: null };
 }
 
 /** A jurisdiction that every company knows. */

@@ -86,7 +86,7 @@ export async function isEmpty(): Promise<boolean> {
  * First company and its administrator, on an installation without accounts.
  * @throws Problem 404 once there is an account
  */
-export async function setUp(input: SetupInput, requestId: string): Promise<void> {
+export async function setUp(input: SetupInput, request: Pick<Actor, "requestId" | "from">): Promise<void> {
   const { sequelize, Company, Membership, User } = database();
   await inTransaction(async (transaction) => {
     // Two first visitors at once must not both become administrator.
@@ -96,7 +96,7 @@ export async function setUp(input: SetupInput, requestId: string): Promise<void>
     const company = await Company.create({ name: input.companyName }, { transaction });
     await Membership.create({ companyId: company.id, userId: user.id, roles: ["administrator", "designer"] }, { transaction });
     await addStarterSet(company.id, transaction);
-    await audit(transaction, { ...person(user), requestId }, { action: "company.create", subject: `companies/${company.id}`, companyId: company.id });
+    await audit(transaction, { ...person(user), ...request }, { action: "company.create", subject: `companies/${company.id}`, companyId: company.id });
   });
 }
 

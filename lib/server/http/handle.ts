@@ -7,6 +7,7 @@ import { personOf } from "@/lib/server/auth/session";
 import type { Actor } from "@/lib/server/data/actor";
 import { env } from "@/lib/server/env";
 import { readJson } from "./body";
+import { originOf, watchConnections, type Origin } from "./connection";
 import { Problem, forbidden, notFound, signInNeeded } from "./problem";
 import { takeAllowance } from "./rateLimit";
 
@@ -24,9 +25,12 @@ interface Route<Params, Query, Body> {
   status?: number;
   run: (context: Context<Params, Query, Body>) => Promise<unknown>;
 }
-interface OpenContext<Body> { body: Body; request: NextRequest; requestId: string }
+interface OpenContext<Body> { body: Body; request: NextRequest; requestId: string; from: Origin }
 interface OpenRoute<Body> { body?: ZodType<Body>; perMinute?: number; status?: number; run: (context: OpenContext<Body>) => Promise<unknown> }
 type Handler = (request: NextRequest, segment: Segment) => Promise<Response>;
+
+// The server does it before its first request; whoever runs handlers without that start does it here.
+watchConnections();
 
 const SAFE = new Set(["GET", "HEAD"]);
 /** Most requests a person makes in a minute by one route, where it says nothing else. */
@@ -47,7 +51,7 @@ export function handle<Params = undefined, Query = undefined, Body = undefined>(
     const params = parse(route.params, await segment.params, () => notFound());
     const query = parse(route.query, Object.fromEntries(request.nextUrl.searchParams), invalid);
     const body = parse(route.body, route.body ? await readJson(request, route.maxBytes ?? BODY_BYTES) : undefined, invalid);
-    return route.run({ actor: { ...person, requestId }, params, query, body, request, requestId });
+    return route.run({ actor: { ...person, requestId, from: originOf(request.headers, env().TRUST_PROXY) }, params, query, body, request, requestId });
   });
 }
 
@@ -55,9 +59,10 @@ export function handle<Params = undefined, Query = undefined, Body = undefined>(
 export function handleOpen<Body = undefined>(route: OpenRoute<Body>): Handler {
   return (request) => answered(request, route.status, async (requestId) => {
     checkOrigin(request);
-    takeAllowance(`open:${request.nextUrl.pathname}:${request.headers.get("x-forwarded-for") ?? "local"}`, route.perMinute ?? 60, 60);
+    const from = originOf(request.headers, env().TRUST_PROXY);
+    takeAllowance(`open:${request.nextUrl.pathname}:${from.address ?? "local"}`, route.perMinute ?? 60, 60);
     const body = parse(route.body, route.body ? await readJson(request, 64 * 1024) : undefined, invalid);
-    return route.run({ body, request, requestId });
+    return route.run({ body, request, requestId, from });
   });
 }
 
