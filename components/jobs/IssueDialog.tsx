@@ -6,6 +6,8 @@ import { z } from "zod";
 import { PURPOSES, line, type Counts } from "@/lib/api";
 import { api } from "@/lib/client/api";
 import { keys, useChange } from "@/lib/client/queries";
+import { previewNote } from "@/lib/code/adoption";
+import type { Edition } from "@/lib/diagram/schema";
 import { Button } from "@/components/ui/Button";
 import { Caution } from "@/components/ui/Caution";
 import { Dialog } from "@/components/ui/Dialog";
@@ -17,13 +19,13 @@ const schema = z.object({ purpose: z.enum(PURPOSES), description: line(200) });
 type Form = z.infer<typeof schema>;
 
 interface IssueDialogProps {
-  jobId: string; letter: string; counts: Counts | null; open: boolean;
+  jobId: string; letter: string; counts: Counts | null; edition: Edition; open: boolean;
   onOpenChange: (open: boolean) => void;
   onIssued?: (revisionId: string) => void;
 }
 
 /** Issues the drawing for review, and says which redlines go along. */
-export function IssueDialog({ jobId, letter, counts, open, onOpenChange, onIssued }: IssueDialogProps) {
+export function IssueDialog({ jobId, letter, counts, edition, open, onOpenChange, onIssued }: IssueDialogProps) {
   const issue = useChange((form: Form) => api.issue(jobId, form), [keys.jobs, keys.job(jobId)]);
   const { register, handleSubmit, formState: { errors } } = useForm<Form>({ resolver: zodResolver(schema), defaultValues: { purpose: PURPOSES[0], description: "" } });
   const submit = handleSubmit(async (form) => {
@@ -40,6 +42,7 @@ export function IssueDialog({ jobId, letter, counts, open, onOpenChange, onIssue
         </SelectField>
         <TextField label="Description" hint="One line for the revision table." error={errors.description?.message} {...register("description")} />
         {counts && <GoesAlong counts={counts} />}
+        {previewNote(edition) && <p className="border-l-[3px] border-ochre pl-3 text-text">{previewNote(edition)}</p>}
         <Caution compact />
         <Refused error={issue.error} />
         <div className="flex gap-2">

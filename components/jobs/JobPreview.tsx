@@ -1,4 +1,5 @@
 import type { JobLine } from "@/lib/api";
+import { editionName } from "@/lib/code/adoption";
 import { LinkButton } from "@/components/ui/Button";
 import { RedlineMark, type MarkKind } from "@/components/ui/RedlineMark";
 import { Caution } from "@/components/ui/Caution";
@@ -14,7 +15,7 @@ export function JobPreview({ job }: { job: JobLine }) {
       <h2 className="mt-5 text-[25px] leading-tight font-heading stretch-heading tracking-[-0.01em] narrow:text-heading">{job.name}</h2>
       <p className="mt-1 text-finding text-ink2 narrow:text-text"><PlaceLine addressLines={job.addressLines} parcel={job.parcel} empty="No address yet" /></p>
       <dl className="mt-4 grid grid-cols-[86px_minmax(0,1fr)] border-t border-ink text-text">
-        <Fact name="Code">{`NEC ${job.edition}${job.jurisdiction ? `, ${job.jurisdiction}` : ""}`}</Fact>
+        <Fact name="Code">{`${editionName(job.edition)}${job.jurisdiction ? `, ${job.jurisdiction}` : ""}`}</Fact>
         <Fact name="Licensee">{job.licensees.join(", ") || "none on the job yet"}</Fact>
         <Fact name="You are">{job.roles.join(", ")}</Fact>
       </dl>

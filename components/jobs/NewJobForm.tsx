@@ -8,6 +8,7 @@ import { z } from "zod";
 import { line } from "@/lib/api";
 import type { JurisdictionAnswer } from "@/lib/api";
 import { ApiProblem, api } from "@/lib/client/api";
+import { editionName } from "@/lib/code/adoption";
 import { keys, useChange, useJurisdictions, useMe } from "@/lib/client/queries";
 import { Button, LinkButton } from "@/components/ui/Button";
 import { SelectField, TextField } from "@/components/ui/Field";
@@ -127,7 +128,7 @@ function KnownJurisdiction({ jurisdiction }: { jurisdiction: JurisdictionAnswer 
   const amendments = Object.values(jurisdiction.amendments);
   return (
     <div className="col-span-2 border-l-[3px] border-blue pl-3 text-text">
-      <p>Adopted: NEC {jurisdiction.edition}{jurisdiction.ordinance && `, ${jurisdiction.ordinance}`}.</p>
+      <p>Adopted: {editionName(jurisdiction.edition)}{jurisdiction.ordinance && `, ${jurisdiction.ordinance}`}.</p>
       {amendments.map((each) => (
         <p key={each.citation} className="text-ink2">{each.citation}</p>
       ))}

@@ -42,7 +42,7 @@ export function RevisionsPanel({ job, issueOpen = false }: { job: JobAnswer; iss
       )}
       {rows.map((row) => <RevisionRow key={row.id} jobId={job.id} row={row} />)}
       {rows.length > 0 && <Caution compact className="m-5" />}
-      <IssueDialog jobId={job.id} letter={job.nextLetter} counts={job.counts} open={issuing && job.may.issue && !open && !job.empty} onOpenChange={setIssuing} onIssued={(id) => router.push(paths.revision(job.id, id))} />
+      <IssueDialog jobId={job.id} letter={job.nextLetter} counts={job.counts} edition={job.site.edition} open={issuing && job.may.issue && !open && !job.empty} onOpenChange={setIssuing} onIssued={(id) => router.push(paths.revision(job.id, id))} />
     </Panel>
   );
 }

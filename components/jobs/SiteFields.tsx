@@ -1,4 +1,5 @@
 import { useFormContext } from "react-hook-form";
+import { editionName } from "@/lib/code/adoption";
 import { EDITIONS, OCCUPANCIES } from "@/lib/diagram/schema";
 import { SelectField, TextField } from "@/components/ui/Field";
 import type { SiteForm } from "./siteForm";
@@ -9,7 +10,7 @@ export function SiteFields() {
   return (
     <>
       <SelectField label="Adopted code" error={errors.edition?.message} {...register("edition")}>
-        {EDITIONS.map((edition) => <option key={edition} value={edition}>NEC {edition}</option>)}
+        {EDITIONS.map((edition) => <option key={edition} value={edition}>{editionName(edition)}</option>)}
       </SelectField>
       <SelectField label="Occupancy" error={errors.occupancy?.message} {...register("occupancy")}>
         <option value="">not known yet</option>

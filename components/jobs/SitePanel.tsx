@@ -11,6 +11,7 @@ import { Button } from "@/components/ui/Button";
 import { SelectField, TextField } from "@/components/ui/Field";
 import { Refused } from "@/components/ui/Notes";
 import { FormSection } from "./FormSection";
+import { JurisdictionNotice } from "./JurisdictionNotice";
 import { Panel } from "./Panel";
 import { PlaceFields } from "./PlaceFields";
 import { SiteFields } from "./SiteFields";
@@ -62,12 +63,14 @@ export function SitePanel({ job }: { job: JobAnswer }) {
           <TextField label="Name" error={errors.name?.message} {...register("name")} />
           <PlaceFields />
         </FormSection>
-        <FormSection title="Jurisdiction" text="Its amendments come along when another is chosen.">
+        <FormSection title="Jurisdiction" text="Its amendments and requirements come along when another is chosen.">
           <SelectField label="Authority having jurisdiction" className="col-span-2" {...register("jurisdictionId")}>
             {!job.jurisdiction && <option value="">not known yet</option>}
             {job.jurisdiction && !jurisdictions.data && <option value={job.jurisdiction.id}>{job.jurisdiction.name}</option>}
+            {job.jurisdiction && jurisdictions.data && !jurisdictions.data.jurisdictions.some((each) => each.id === job.jurisdiction?.id) && <option value={job.jurisdiction.id}>{job.jurisdiction.name}</option>}
             {jurisdictions.data?.jurisdictions.map((each) => <option key={each.id} value={each.id}>{each.name}</option>)}
           </SelectField>
+          <JurisdictionNotice job={job} />
           {Object.values(job.site.amendments).map((each) => (
             <p key={each.citation} className="col-span-2 border-l-[3px] border-blue pl-3 text-text text-ink2">{each.citation}</p>
           ))}

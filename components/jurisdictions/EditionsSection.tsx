@@ -10,7 +10,9 @@ export function EditionsSection({ inForce, next, edit }: { inForce: Adoption; ne
   const { control, register, watch, formState: { errors } } = useFormContext<Form>();
   const { fields, append, remove } = useFieldArray({ control, name: "editions" });
   const chosen = watch("editions").map((each) => each.edition);
-  const left = EDITIONS.find((edition) => !chosen.includes(edition));
+  const free = EDITIONS.filter((edition) => !chosen.includes(edition));
+  // What is adopted next is most often the one after the last.
+  const left = free.find((edition) => chosen.every((each) => each < edition)) ?? free[0];
   const preview = chosen.find((edition) => previewNote(edition) !== "");
   const list = errors.editions?.root?.message ?? errors.editions?.message;
   return (
@@ -23,7 +25,7 @@ export function EditionsSection({ inForce, next, edit }: { inForce: Adoption; ne
           </SelectField>
           <TextField label="In effect from" type="date" hint="Empty: since before." error={errors.editions?.[index]?.effectiveFrom?.message} {...register(`editions.${index}.effectiveFrom`)} />
           <TextField label="Until" type="date" hint="Empty: open." error={errors.editions?.[index]?.effectiveTo?.message} {...register(`editions.${index}.effectiveTo`)} />
-          {edit && <Button className="mt-6" disabled={fields.length === 1} aria-label={`Remove edition ${index + 1}`} onClick={() => remove(index)}>Remove</Button>}
+          {edit && <Button className="mt-[22px]" disabled={fields.length === 1} aria-label={`Remove edition ${index + 1}`} onClick={() => remove(index)}>Remove</Button>}
         </div>
       ))}
       {list && <p role="alert" className="text-label font-strong text-red">Editions {list}.</p>}

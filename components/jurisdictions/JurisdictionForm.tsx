@@ -30,18 +30,14 @@ export function JurisdictionForm({ jurisdiction, onReload }: { jurisdiction: Jur
   const form = useForm<Form, unknown, JurisdictionFacts>({ resolver: resolverFor(loaded), defaultValues: formOf(loaded), disabled: !edit });
   const { register, handleSubmit, reset, setError, getValues, formState: { errors, isDirty } } = form;
   // A change by somebody else is shown as long as nothing was typed here; otherwise saving says so.
-  useEffect(() => {
-    if (isDirty || jurisdiction.version === loaded.version) return;
-    setLoaded(jurisdiction);
-    reset(formOf(jurisdiction));
-  }, [jurisdiction, loaded.version, isDirty, reset]);
+  if (!isDirty && jurisdiction.version > loaded.version) setLoaded(jurisdiction);
+  useEffect(() => reset(formOf(loaded)), [loaded, reset]);
 
   const submit = handleSubmit(async (facts) => {
     setSaved(false);
     try {
       const answer = await save.mutateAsync(facts);
       setLoaded(answer);
-      reset(formOf(answer));
       setSaved(true);
     } catch (error) {
       if (!(error instanceof ApiProblem)) return;

@@ -4,6 +4,7 @@ import { useState } from "react";
 import type { RevisionAnswer } from "@/lib/api";
 import { api } from "@/lib/client/api";
 import { keys, useChange } from "@/lib/client/queries";
+import { editionName } from "@/lib/code/adoption";
 import type { Finding } from "@/lib/rules/engine/types";
 import { blocksSeal } from "@/lib/workflow";
 import { Worksheet } from "@/components/diagram/redlines/worksheet";
@@ -20,7 +21,7 @@ export function Redlines({ revision }: { revision: RevisionAnswer }) {
   return (
     <section aria-labelledby="open-redlines">
       <h2 id="open-redlines" className="text-heading font-heading stretch-heading">Open redlines <span className="font-normal text-ink2">{open.length}</span></h2>
-      <p className="text-label text-ink2">{revision.check.rulesRun} rules run on the server at issue, NEC {revision.check.edition}, rule set {revision.ruleSet}.</p>
+      <p className="text-label text-ink2">{revision.check.rulesRun} rules run on the server at issue, {editionName(revision.check.edition)}, rule set {revision.ruleSet}.</p>
       {open.length === 0 && <p className="mt-2 border border-ink bg-vellum p-3 text-text">Nothing is open by these rules. That is not an approval: the adopted code and the authority having jurisdiction decide.</p>}
       <ol className="mt-2 list-none">{open.map((finding, index) => <Redline key={finding.key} revision={revision} finding={finding} number={index + 1} />)}</ol>
       {accepted.length > 0 && (

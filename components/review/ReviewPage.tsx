@@ -5,6 +5,7 @@ import type { RevisionAnswer } from "@/lib/api";
 import { ApiProblem, api } from "@/lib/client/api";
 import { dateWords } from "@/lib/client/dates";
 import { useRevision } from "@/lib/client/queries";
+import { editionName } from "@/lib/code/adoption";
 import { OfficeBar } from "@/components/jobs/OfficeBar";
 import { paths } from "@/components/jobs/paths";
 import { BarCell } from "@/components/ui/Bar";
@@ -32,7 +33,7 @@ export function ReviewPage({ revisionId }: { revisionId: string }) {
             <BarCell label={`Job ${revision.data.jobNumber}`}><Link href={paths.job(revision.data.jobId)} className="border-b border-dotted border-ink3">{revision.data.jobName}</Link></BarCell>
             <BarCell label="Revision">Rev {revision.data.letter}, {revision.data.purpose}</BarCell>
             <BarCell label="Issued by">{revision.data.issuedBy}, {dateWords(revision.data.issuedAt)}</BarCell>
-            <BarCell label="Adopted code">NEC {revision.data.check.edition}</BarCell>
+            <BarCell label="Adopted code">{editionName(revision.data.check.edition)}</BarCell>
           </>
         )}
       </OfficeBar>

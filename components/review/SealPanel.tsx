@@ -5,6 +5,7 @@ import type { RevisionAnswer } from "@/lib/api";
 import { ApiProblem, api } from "@/lib/client/api";
 import { calendarWords, momentWords } from "@/lib/client/dates";
 import { keys, useChange } from "@/lib/client/queries";
+import { previewNote } from "@/lib/code/adoption";
 import { Digest } from "@/components/counter/Digest";
 import { Button } from "@/components/ui/Button";
 import { Dialog } from "@/components/ui/Dialog";
@@ -37,6 +38,22 @@ function Sealed({ revision }: { revision: RevisionAnswer }) {
   );
 }
 
+/** Whom the authority asks to sign, and why nobody can under an edition that was not read. */
+function Asked({ revision }: { revision: RevisionAnswer }) {
+  const { jurisdiction, check, sealRefusals } = revision;
+  const preview = sealRefusals.some((each) => each.code === "edition-preview") ? "" : previewNote(check.edition);
+  return (
+    <>
+      {jurisdiction && (
+        <p className="mt-1 text-text text-ink2">
+          {jurisdiction.signs === "licensed professional" ? `${jurisdiction.name} asks for the seal of a licensed professional.` : `${jurisdiction.name} accepts a preparer's declaration as well. Declaring is not done here yet; this set is signed by a licensee's seal.`}
+        </p>
+      )}
+      {preview && <p className="mt-2 border-l-[3px] border-ochre pl-3 text-text">{preview}</p>}
+    </>
+  );
+}
+
 function Sealing({ revision }: { revision: RevisionAnswer }) {
   return <p role="status" className="mt-1 text-text">The sheets of Rev {revision.letter} are being drawn and their bytes frozen. This takes some seconds; the page goes on by itself.</p>;
 }
@@ -52,6 +69,7 @@ function Seal({ revision }: { revision: RevisionAnswer }) {
   const wrong = seal.error instanceof ApiProblem && seal.error.field === "password";
   return (
     <>
+      <Asked revision={revision} />
       <ul className="mt-2 list-none border-t border-g1">
         {revision.sealRefusals.map((refusal) => (
           <li key={refusal.code} className="flex gap-2.5 border-b border-g1 py-2 text-text"><RedlineMark kind={refusal.code.includes("data") ? "needs-data" : "must-fix"} label="blocks the seal" /><span>{refusal.detail}</span></li>

@@ -1,3 +1,4 @@
+import { PREVIEW_REMARK, isPreview } from "@/lib/code/adoption";
 import type { SheetContext as WholeContext, SheetWords } from "./context";
 import { BORDER_PX, INNER_PX, TITLE_PX } from "./frame";
 import { fitText, letter, textWidth, wrapText } from "./lettering";
@@ -184,10 +185,11 @@ function titleAndNumber(block: Block, words: SheetWords, bottom: number): void {
 
 function foot(block: Block, context: SheetContext, rules: RuleLine, top: number): void {
   const { check, seal } = context;
+  const edition = check?.edition ?? context.drawing.site.edition;
   const lines = [
     "DRAWING DIGEST, SHA-256", ...digestLines(context.digest),
     `SEAL CODE ${seal?.sealCode ?? "NONE"}`,
-    `NEC ${check?.edition ?? context.drawing.site.edition}, RULE SET ${check?.ruleSet ?? "NONE"}`,
+    ...wrapText(`NEC ${edition}${isPreview(edition) ? ` (${letter(PREVIEW_REMARK)})` : ""}, RULE SET ${check?.ruleSet ?? "NONE"}`, 13, "narrow", TITLE_PX - PAD - 6),
     ...wrapText(ruleLine(context, rules), 13, "narrow", TITLE_PX - PAD - 6),
   ];
   lines.slice(0, 10).forEach((line, i) => block.words(PAD, top + 17 + i * 15.6, line));

@@ -1,6 +1,7 @@
 "use client";
 import { setSheetCommand } from "@/components/diagram/actions/commandsOf";
 import { useEditor, useEditorStore } from "@/components/diagram/editorContext";
+import { editionName } from "@/lib/code/adoption";
 import { readNumber, showValue } from "@/lib/client/readField";
 import { OCCUPANCIES, type Drawing } from "@/lib/diagram/schema";
 import { ChoiceField, FieldGroup, TextField } from "./fields";
@@ -23,7 +24,7 @@ export function SheetForm() {
     <>
       <div className="flex items-baseline gap-2.5 border-b-[1.5px] border-ink pb-1.5"><h2 className="font-lettering text-[24px] leading-none [-webkit-text-stroke:.5px]">{sheet.number}</h2><span className="text-label text-ink2">{sheet.size}, nothing selected</span></div>
       <p className="mt-2 text-label leading-snug text-ink2">Select anything on the sheet to see its data here. These values hold for the whole drawing.</p>
-      <FieldGroup title="Site" note={`NEC ${site.edition}`}>
+      <FieldGroup title="Site" note={editionName(site.edition)}>
         <ChoiceField label="Occupancy" wide value={site.occupancy ?? ""} options={OCCUPANCIES} readOnly={readOnly} onCommit={(value) => set("site.occupancy", value || null, "occupancy")} />
         {number("recordLowC", "Record low", "°C", -60, 40)}
         {number("designHighC", "Design high", "°C", -10, 60)}
