@@ -2,13 +2,23 @@ import "server-only";
 import type { Counts } from "@/lib/api";
 import { RULE_SET_VERSION } from "@/lib/rules";
 import { check } from "@/lib/rules/engine/run";
-import type { Drawing, Revision } from "@/models";
+import type { Drawing, FindingAcceptance, Revision } from "@/models";
 import { database } from "./database";
 import { checkOf } from "./sheetSets";
 
-/** Counts of the draft's check for lists, kept until the drawing or the rule set changes. */
-async function draftCounts(drawing: Drawing): Promise<Counts> {
-  if (drawing.checkCounts && drawing.checkedSequence === drawing.sequence && drawing.checkedRuleSet === RULE_SET_VERSION) return drawing.checkCounts;
+/** What tells whether kept counts still hold, without the drawing itself. */
+export interface CountedRow {
+  id: string; drawingId: string; sequence: number; checkedSequence: number | null; checkedRuleSet: string | null; checkCounts: Counts | null;
+  revisionId: string | null; state: string; revisionSequence: number | null; revisionRuleSet: string | null;
+}
+/** Drawings that one list checks before it answers; the rest is worked out after it, so that a list never waits for all. */
+const AT_ONCE = 3;
+
+const holds = (row: Pick<CountedRow, "sequence" | "checkedSequence" | "checkedRuleSet" | "checkCounts">): Counts | null =>
+  (row.checkCounts && row.checkedSequence === row.sequence && row.checkedRuleSet === RULE_SET_VERSION ? row.checkCounts : null);
+
+/** Checks a draft and keeps its counts until the drawing or the rule set changes. */
+async function work(drawing: Pick<Drawing, "id" | "sequence" | "document">): Promise<Counts> {
   const { counts } = check(drawing.document);
   // Not part of anyone's edit: `silent` leaves the time of the last change alone.
   await database().Drawing.update(
@@ -18,14 +28,58 @@ async function draftCounts(drawing: Drawing): Promise<Counts> {
   return counts;
 }
 
-/** Counts of a job's open redlines: with what was accepted in review, while the drawing is the one that was issued. */
-export async function shownCounts(drawing: Drawing, latest: Pick<Revision, "id" | "state" | "sequence" | "ruleSet"> | null): Promise<Counts> {
-  // A sealed revision that is not void is the drawing, whatever was done and undone since.
-  const same = latest && latest.ruleSet === RULE_SET_VERSION && (latest.state === "sealed" || latest.sequence === drawing.sequence);
-  const { FindingAcceptance, Revision } = database();
-  const accepted = same ? await FindingAcceptance.findAll({ where: { revisionId: latest.id } }) : [];
-  if (!same || accepted.length === 0) return draftCounts(drawing);
-  const issued = await Revision.findByPk(latest.id, { attributes: ["id", "checkResult"], rejectOnEmpty: true });
+/** A sealed revision that is not void is the drawing, whatever was done and undone since. */
+const isIssued = (revision: { state: string; sequence: number; ruleSet: string }, sequence: number): boolean =>
+  revision.ruleSet === RULE_SET_VERSION && (revision.state === "sealed" || revision.sequence === sequence);
+
+async function acceptedCounts(revisionId: string, accepted: FindingAcceptance[]): Promise<Counts> {
+  const issued = await database().Revision.findByPk(revisionId, { attributes: ["id", "checkResult"], rejectOnEmpty: true });
   issued.acceptances = accepted;
   return checkOf(issued).counts;
+}
+
+/** Counts of a job's open redlines: with what was accepted in review, while the drawing is the one that was issued. */
+export async function shownCounts(drawing: Drawing, latest: Pick<Revision, "id" | "state" | "sequence" | "ruleSet"> | null): Promise<Counts> {
+  const accepted = latest && isIssued(latest, drawing.sequence) ? await database().FindingAcceptance.findAll({ where: { revisionId: latest.id } }) : [];
+  if (latest && accepted.length > 0) return acceptedCounts(latest.id, accepted);
+  return holds(drawing) ?? work(drawing);
+}
+
+/** The same for the lines of a list, by drawing. What is not known yet is left out and worked out after the answer. */
+export async function countsOfRows(rows: readonly CountedRow[]): Promise<Map<string, Counts>> {
+  const { Drawing, FindingAcceptance } = database();
+  const found = new Map<string, Counts>();
+  const issued = rows.filter((row) => row.revisionId !== null && isIssued({ state: row.state, sequence: row.revisionSequence ?? -1, ruleSet: row.revisionRuleSet ?? "" }, row.sequence));
+  const accepted = issued.length === 0 ? [] : await FindingAcceptance.findAll({ where: { revisionId: issued.map((row) => row.revisionId as string) } });
+  const unknown: string[] = [];
+  for (const row of rows) {
+    const own = accepted.filter((each) => each.revisionId === row.revisionId);
+    const kept = own.length > 0 && row.revisionId ? await acceptedCounts(row.revisionId, own) : holds(row);
+    if (kept) found.set(row.drawingId, kept);
+    else unknown.push(row.drawingId);
+  }
+  const one = async (id: string): Promise<void> => {
+    const drawing = await Drawing.findByPk(id, { attributes: ["id", "sequence", "document"] });
+    if (drawing) found.set(id, await work(drawing));
+  };
+  for (const id of unknown.slice(0, AT_ONCE)) await one(id);
+  later(unknown.slice(AT_ONCE), one);
+  return found;
+}
+
+const waiting = new Set<string>();
+/** One after the other, each in a turn of its own: requests come in between. A failure is told and the next one goes on. */
+function later(ids: readonly string[], one: (id: string) => Promise<void>): void {
+  const idle = waiting.size === 0;
+  for (const id of ids) waiting.add(id);
+  if (!idle || waiting.size === 0) return;
+  const next = (): void => {
+    const [id] = waiting;
+    if (id === undefined) return;
+    void one(id).catch((error: unknown) => console.error(`counts of drawing ${id}`, error)).finally(() => {
+      waiting.delete(id);
+      setImmediate(next);
+    });
+  };
+  setImmediate(next);
 }

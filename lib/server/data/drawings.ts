@@ -5,6 +5,7 @@ import { notFound } from "@/lib/server/http/problem";
 import { jobAccess, type Actor } from "./actor";
 import { database, inTransaction } from "./database";
 import { entriesAfter, writeSave, type Save } from "./journal";
+import { refuseArchived } from "./jobs";
 import { draftLetter } from "./letters";
 
 /** The drawing of a job as it is now, and what the person may do with it. */
@@ -15,7 +16,7 @@ export async function getDrawing(actor: Actor, jobId: string): Promise<DrawingAn
   return {
     id: drawing.id, jobId, jobNumber: job.number, jobName: job.name, sequence: drawing.sequence, drawing: drawing.document,
     revisionLetter: await draftLetter(jobId),
-    may: { edit: may(roles, "drawing.edit"), issue: may(roles, "revision.issue"), seal: may(roles, "revision.seal", "in review") },
+    may: { edit: may(roles, "drawing.edit") && job.archivedAt === null, issue: may(roles, "revision.issue") && job.archivedAt === null, seal: may(roles, "revision.seal", "in review") },
   };
 }
 
@@ -24,7 +25,8 @@ export async function saveDrawing(actor: Actor, drawingId: string, save: Save): 
   return inTransaction(async (transaction) => {
     const drawing = await database().Drawing.findByPk(drawingId, { transaction, lock: transaction.LOCK.UPDATE });
     if (!drawing) throw notFound();
-    await jobAccess(actor, drawing.jobId, "drawing.edit", { transaction });
+    const { job } = await jobAccess(actor, drawing.jobId, "drawing.edit", { transaction });
+    refuseArchived(job);
     return writeSave(drawing, save, actor, transaction);
   });
 }

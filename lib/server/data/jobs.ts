@@ -1,8 +1,8 @@
 import "server-only";
 import { randomUUID } from "node:crypto";
-import { Op, UniqueConstraintError } from "sequelize";
+import { UniqueConstraintError } from "sequelize";
 import type { z } from "zod";
-import type { JobAnswer, JobLine, jobChange, jobInput } from "@/lib/api";
+import type { JobAnswer, jobChange, jobInput } from "@/lib/api";
 import { protectedPatches, siteFrom } from "@/lib/diagram/jurisdiction";
 import { emptyDrawing } from "@/lib/diagram/new";
 import type { Drawing as DrawingDocument, Site } from "@/lib/diagram/schema";
@@ -17,7 +17,6 @@ import { shownCounts } from "./counts";
 import { writeSave } from "./journal";
 import { jurisdictionAnswer, makeJurisdiction, visibleJurisdiction } from "./jurisdictions";
 import { draftLetter } from "./letters";
-import { waitsFor } from "./waitsFor";
 
 const numberTaken = (error: unknown) =>
   error instanceof UniqueConstraintError ? conflict("number-taken", "Another job of the company has this number.", { field: "number" }) : error;
@@ -57,52 +56,6 @@ function codesLine(site: Site, jurisdiction: Jurisdiction): string {
   return [`NEC ${site.edition}`, jurisdiction.ordinance].filter(Boolean).join(", ");
 }
 
-const LIST_LIMIT = 500;
-
-/** The register: jobs in which the person has an office role, last changed first. */
-export async function listJobs(actor: Actor): Promise<JobLine[]> {
-  const { Drawing, Job, JobMember, Jurisdiction, Membership, User } = database();
-  const [own, administered] = await Promise.all([
-    JobMember.findAll({ where: { userId: actor.id }, attributes: ["jobId", "roles"] }),
-    Membership.findAll({ where: { userId: actor.id, roles: { [Op.contains]: ["administrator"] } }, attributes: ["companyId"] }),
-  ]);
-  const ownRoles = new Map(own.map((each) => [each.jobId, each.roles]));
-  const companies = administered.map((each) => each.companyId);
-  const jobs = await Job.findAll({
-    where: { [Op.or]: [{ id: [...ownRoles.keys()] }, { companyId: companies }] },
-    include: [
-      { model: Drawing, as: "drawing" }, { model: Jurisdiction, as: "jurisdiction" },
-      { model: JobMember, as: "members", include: [{ model: User, as: "user", attributes: ["id", "name"] }] },
-    ],
-    order: [["updatedAt", "DESC"]], limit: LIST_LIMIT,
-  });
-  const latest = await latestRevisions(jobs.map((job) => job.id));
-  const lines: JobLine[] = [];
-  for (const job of jobs) {
-    const roles: Role[] = [...new Set([...(ownRoles.get(job.id) ?? []), ...(companies.includes(job.companyId) ? ["administrator" as const] : [])])];
-    if (job.drawing && may(roles, "drawing.view")) lines.push(await jobLine(job, roles, latest.get(job.id) ?? null, actor));
-  }
-  return lines;
-}
-
-async function jobLine(job: Job, roles: Role[], revision: Revision | null, actor: Actor): Promise<JobLine> {
-  const { drawing } = job;
-  if (!drawing) throw notFound();
-  const counts = await shownCounts(drawing, revision);
-  const licensees = (job.members ?? []).filter((each) => each.roles.includes("licensee"));
-  const block = drawing.document.sheet.titleBlock;
-  return {
-    id: job.id, number: job.number, name: job.name, place: placeLine(block.addressLines), jurisdiction: job.jurisdiction?.name ?? null,
-    permitNumber: block.permitNumber, revision: revision?.letter ?? null, state: revision?.state ?? "draft", counts, roles,
-    waitsFor: waitsFor({ roles, revision, counts, licensees: licensees.map((each) => ({ id: each.userId, name: each.user?.name ?? "" })), userId: actor.id }),
-    edition: drawing.document.site.edition, addressLines: block.addressLines, parcel: block.parcel,
-    licensees: licensees.map((each) => each.user?.name ?? ""), changedAt: job.updatedAt.toISOString(),
-  };
-}
-
-/** Town of an address: its last part that is no street. */
-const placeLine = (addressLines: string) => addressLines.split(/[\n,]/).map((part) => part.trim()).filter(Boolean)[1] ?? addressLines.trim();
-
 /** Latest revision of each job; of one that was taken to review while another is sealed, the one in review. */
 async function latestRevisions(jobIds: readonly string[]): Promise<Map<string, Revision>> {
   const rows = await database().Revision.findAll({
@@ -130,9 +83,12 @@ export async function getJob(actor: Actor, jobId: string): Promise<JobAnswer> {
     parcel: block.parcel, owner: block.owner, scope: block.scope, permitNumber: block.permitNumber, preparer: block.preparer, contractor: block.contractor,
     jurisdiction: jurisdiction && jurisdictionAnswer(jurisdiction), site: drawing.document.site, roles, state: shown?.state ?? "draft",
     revision: shown?.letter ?? null, nextLetter: await draftLetter(jobId), counts: office ? await shownCounts(drawing, revision) : null,
+    dueOn: job.dueOn, officeStatus: job.officeStatus, archivedAt: job.archivedAt?.toISOString() ?? null,
+    permitFeeCents: office && job.permitFeeCents !== null ? Number(job.permitFeeCents) : null, permitFeePaidOn: office ? job.permitFeePaidOn : null, permitReceipt: office ? job.permitReceipt : "",
     changedAt: job.updatedAt.toISOString(), empty: Object.keys(drawing.document.equipment).length === 0,
     may: {
-      edit: may(roles, "job.edit"), manageMembers: may(roles, "members.manage"), viewDrawing: office, editDrawing: may(roles, "drawing.edit"),
+      duplicate: may(roles, "job.duplicate"), archive: may(roles, "job.archive"), history: may(roles, "history.view"),
+      edit: may(roles, "job.edit") && job.archivedAt === null, manageMembers: may(roles, "members.manage"), viewDrawing: office, editDrawing: may(roles, "drawing.edit") && job.archivedAt === null,
       issue: may(roles, "revision.issue"), seal: may(roles, "revision.seal", "in review"),
     },
   };
@@ -143,6 +99,7 @@ export async function updateJob(actor: Actor, jobId: string, change: z.output<ty
   try {
     await inTransaction(async (transaction) => {
       const { job } = await jobAccess(actor, jobId, "job.edit", { transaction });
+      refuseArchived(job);
       const drawing = await database().Drawing.findOne({ where: { jobId }, transaction, lock: transaction.LOCK.UPDATE });
       if (!drawing) throw notFound();
       const jurisdiction = change.jurisdictionId ? await visibleJurisdiction(change.jurisdictionId, job.companyId, transaction) : null;
@@ -151,7 +108,10 @@ export async function updateJob(actor: Actor, jobId: string, change: z.output<ty
         await writeSave(drawing, { saveId: randomUUID(), baseSequence: drawing.sequence, patches, title: "Change the job's data", amends: jurisdiction !== null }, actor, transaction);
       }
       await job.update(
-        { ...(change.number === undefined ? {} : { number: change.number }), ...(change.name === undefined ? {} : { name: change.name }), ...(jurisdiction ? { jurisdictionId: jurisdiction.id } : {}) },
+        {
+          ...(change.number === undefined ? {} : { number: change.number }), ...(change.name === undefined ? {} : { name: change.name }), ...(jurisdiction ? { jurisdictionId: jurisdiction.id } : {}),
+          ...officeFacts(change),
+        },
         { transaction },
       );
       await audit(transaction, actor, { action: "job.edit", subject: `jobs/${jobId}`, jobId, detail: { fields: Object.keys(change) } });
@@ -162,8 +122,22 @@ export async function updateJob(actor: Actor, jobId: string, change: z.output<ty
   return getJob(actor, jobId);
 }
 
+/** What the office notes about a job and no sheet shows. */
+function officeFacts({ dueOn, officeStatus, permitFeeCents, permitFeePaidOn, permitReceipt }: z.output<typeof jobChange>) {
+  return {
+    ...(dueOn === undefined ? {} : { dueOn }), ...(officeStatus === undefined ? {} : { officeStatus }),
+    ...(permitFeeCents === undefined ? {} : { permitFeeCents: permitFeeCents === null ? null : String(permitFeeCents) }),
+    ...(permitFeePaidOn === undefined ? {} : { permitFeePaidOn }), ...(permitReceipt === undefined ? {} : { permitReceipt }),
+  };
+}
+
+/** @throws Problem 409 where the job was put into the archive */
+export function refuseArchived(job: Pick<Job, "archivedAt">): void {
+  if (job.archivedAt) throw conflict("job-archived", "This job is in the archive and stays as it is. An administrator can take it out again.");
+}
+
 function documentChange(document: DrawingDocument, change: z.output<typeof jobChange>, jurisdiction: Jurisdiction | null): PatchOperation[] {
-  const { number, jurisdictionId: _, site: siteChange, name, ...block } = change;
+  const { number, jurisdictionId: _, site: siteChange, name, dueOn: _due, officeStatus: _status, permitFeeCents: _cents, permitFeePaidOn: _paid, permitReceipt: _receipt, ...block } = change;
   const codes = jurisdiction || siteChange?.edition
     ? { codes: codesOf(document, siteChange?.edition ?? document.site.edition, jurisdiction) }
     : {};

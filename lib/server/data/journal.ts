@@ -63,7 +63,7 @@ export async function writeSave(drawing: Drawing, save: Save, actor: Actor, tran
   const merged = merge(drawing.document, save.patches, (error) => (theirs.length > 0
     ? clash([error.path], "Somebody changed what this edit rests on.")
     : unprocessable(`patches.${error.index}`, error.message, "patch")));
-  refuseProtected(drawing.document, merged, save);
+  refuseProtected(drawing.document, merged, save, actor);
   const wrong = checkDocument(merged);
   if (wrong.length > 0) {
     // Apart, both saves may well be whole: one deletes an end, the other draws a circuit to it.
@@ -80,9 +80,9 @@ export async function writeSave(drawing: Drawing, save: Save, actor: Actor, tran
 
 /**
  * Parts of the drawing that decide whether a rule counts are no edits: amendments come from the jurisdiction, and a
- * finding is accepted in review, under a license.
+ * finding is accepted in review, under a license. A statement carries the name of who saves it.
  */
-function refuseProtected(before: DrawingDocument, after: DrawingDocument, save: Save): void {
+function refuseProtected(before: DrawingDocument, after: DrawingDocument, save: Save, actor: Actor): void {
   const same = (one: unknown, other: unknown) => canonicalJson(one ?? null) === canonicalJson(other ?? null);
   if (!save.amends && !same(after.site?.amendments, before.site.amendments)) {
     throw unprocessable("site.amendments", "come with the jurisdiction; choose it on the job's page", "protected");
@@ -92,6 +92,9 @@ function refuseProtected(before: DrawingDocument, after: DrawingDocument, save: 
   }
   const kept = Object.entries(after.acceptances ?? {}).every(([id, acceptance]) => same(acceptance, before.acceptances[id]));
   if (!kept) throw unprocessable("acceptances", "are written in review, by a licensee", "protected");
+  // Who states something stands for it: nobody states in another's name.
+  const foreign = Object.entries(after.statements ?? {}).find(([id, statement]) => statement?.by !== actor.name && !same(statement, before.statements?.[id]));
+  if (foreign) throw unprocessable(`statements.${foreign[0]}.by`, "is the name of whoever makes the statement", "protected");
 }
 
 function merge(document: DrawingDocument, patches: PatchOperation[], refuse: (error: PatchError) => Problem): DrawingDocument {

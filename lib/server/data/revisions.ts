@@ -12,6 +12,7 @@ import { demand, jobAccess, rolesInJob, type Actor } from "./actor";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
 import { issuedJurisdiction } from "./jurisdictions";
+import { refuseArchived } from "./jobs";
 import { draftLetter } from "./letters";
 import { licenseOf, today } from "./licenses";
 import { checkOf, queueSheets, sheetSetAnswer } from "./sheetSets";

@@ -6,7 +6,8 @@ import type { Revision } from "@/models";
 interface Question {
   roles: readonly Role[];
   revision: Pick<Revision, "state"> | null;
-  counts: Counts;
+  /** Null while they are being worked out. */
+  counts: Counts | null;
   licensees: readonly { id: string; name: string }[];
   userId: string;
 }
@@ -29,7 +30,7 @@ export function waitsFor({ roles, revision, counts, licensees, userId }: Questio
     case "void":
       return { mine: designer, text: designer ? "You: issue the change" : "The designer, changed after the seal" };
     default: {
-      const open = counts.mustFix > 0 ? `${counts.mustFix} must-fix` : counts.needsData > 0 ? `${counts.needsData} needs data` : "issue for review";
+      const open = !counts ? "checking" : counts.mustFix > 0 ? `${counts.mustFix} must-fix` : counts.needsData > 0 ? `${counts.needsData} needs data` : "issue for review";
       return { mine: designer, text: designer ? `You: ${open}` : "The designer" };
     }
   }
