@@ -125,12 +125,12 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
 }
 
 function KnownJurisdiction({ jurisdiction }: { jurisdiction: JurisdictionAnswer }) {
-  const amendments = Object.values(jurisdiction.amendments);
+  const amendments = Object.entries(jurisdiction.amendments);
   return (
     <div className="col-span-2 border-l-[3px] border-blue pl-3 text-text">
       <p>Adopted: {editionName(jurisdiction.edition)}{jurisdiction.ordinance && `, ${jurisdiction.ordinance}`}.</p>
-      {amendments.map((each) => (
-        <p key={each.citation} className="text-ink2">{each.citation}</p>
+      {amendments.map(([id, each]) => (
+        <p key={id} className="text-ink2">{each.citation}</p>
       ))}
     </div>
   );

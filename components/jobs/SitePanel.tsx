@@ -66,13 +66,13 @@ export function SitePanel({ job }: { job: JobAnswer }) {
         <FormSection title="Jurisdiction" text="Its amendments and requirements come along when another is chosen.">
           <SelectField label="Authority having jurisdiction" className="col-span-2" {...register("jurisdictionId")}>
             {!job.jurisdiction && <option value="">not known yet</option>}
-            {job.jurisdiction && !jurisdictions.data && <option value={job.jurisdiction.id}>{job.jurisdiction.name}</option>}
-            {job.jurisdiction && jurisdictions.data && !jurisdictions.data.jurisdictions.some((each) => each.id === job.jurisdiction?.id) && <option value={job.jurisdiction.id}>{job.jurisdiction.name}</option>}
-            {jurisdictions.data?.jurisdictions.map((each) => <option key={each.id} value={each.id}>{each.name}</option>)}
+            {/* One option stays where it is while the others load: a select without its option shows another. */}
+            {job.jurisdiction && <option key={job.jurisdiction.id} value={job.jurisdiction.id}>{job.jurisdiction.name}</option>}
+            {jurisdictions.data?.jurisdictions.filter((each) => each.id !== job.jurisdiction?.id).map((each) => <option key={each.id} value={each.id}>{each.name}</option>)}
           </SelectField>
           <JurisdictionNotice job={job} />
-          {Object.values(job.site.amendments).map((each) => (
-            <p key={each.citation} className="col-span-2 border-l-[3px] border-blue pl-3 text-text text-ink2">{each.citation}</p>
+          {Object.entries(job.site.amendments).map(([id, each]) => (
+            <p key={id} className="col-span-2 border-l-[3px] border-blue pl-3 text-text text-ink2">{each.citation}</p>
           ))}
         </FormSection>
         <FormSection title="Site" text="Temperatures set string voltage and conductor ampacity; the fault current sets interrupting ratings.">

@@ -25,7 +25,7 @@ export function AmendmentsSection({ jurisdiction, edition }: { jurisdiction: Jur
   return (
     <div className="col-span-2 grid gap-4 phone:col-span-1">
       {fields.length === 0 && <p className="text-text text-ink2">No amendment: the adopted code applies as written.</p>}
-      {fields.map((field, index) => <AmendmentCard key={field.id} index={index} edition={edition} edit={edit} onRemove={() => remove(index)} />)}
+      {fields.map((field, index) => <AmendmentCard key={field.id} index={index} edition={edition} edit={edit} unnamed={isUnnamed(jurisdiction, field.key)} onRemove={() => remove(index)} />)}
       {edit && (
         <div>
           <Button onClick={() => append({ key: newId("a"), rule: "", effect: "limit", limitName: "", limit: "", severity: "", citation: "" })}>Add an amendment</Button>
@@ -35,7 +35,12 @@ export function AmendmentsSection({ jurisdiction, edition }: { jurisdiction: Jur
   );
 }
 
-function AmendmentCard({ index, edition, edit, onRemove }: { index: number; edition: Edition; edit: boolean; onRemove: () => void }) {
+/** An older amendment that names no limit changes each one of its unit. */
+const isUnnamed = ({ amendments }: JurisdictionDetail, key: string) => amendments[key]?.effect === "limit" && amendments[key].limitName === undefined;
+
+interface CardProps { index: number; edition: Edition; edit: boolean; unnamed: boolean; onRemove: () => void }
+
+function AmendmentCard({ index, edition, edit, unnamed, onRemove }: CardProps) {
   const { control, register, setValue, formState: { errors } } = useFormContext<Form>();
   const value = useWatch({ control, name: `amendments.${index}` });
   const meta = ruleMeta(value.rule);
@@ -68,7 +73,7 @@ function AmendmentCard({ index, edition, edit, onRemove }: { index: number; edit
       </SelectField>
       {value.effect === "limit" && limits.length > 1 && (
         <SelectField label="Which limit" error={fault?.limitName?.message} {...register(`amendments.${index}.limitName`)}>
-          <option value="">choose</option>
+          <option value="">{unnamed ? "every limit of its unit" : "choose"}</option>
           {limits.map(([name, limit]) => <option key={name} value={name}>{name}, now {limit.value} {limit.unit}</option>)}
         </SelectField>
       )}

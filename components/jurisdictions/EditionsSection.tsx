@@ -1,5 +1,5 @@
 import { useFieldArray, useFormContext } from "react-hook-form";
-import { editionName, previewNote, type Adoption } from "@/lib/code/adoption";
+import { editionName, isPreview, previewNote, type Adoption } from "@/lib/code/adoption";
 import { EDITIONS } from "@/lib/diagram/schema";
 import { Button } from "@/components/ui/Button";
 import { SelectField, TextField } from "@/components/ui/Field";
@@ -21,7 +21,7 @@ export function EditionsSection({ inForce, next, edit }: { inForce: Adoption; ne
       {fields.map((field, index) => (
         <div key={field.id} className="grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)_minmax(0,1fr)_auto] items-start gap-x-4 gap-y-2 phone:grid-cols-1">
           <SelectField label="Edition" error={errors.editions?.[index]?.edition?.message} {...register(`editions.${index}.edition`)}>
-            {EDITIONS.map((edition) => <option key={edition} value={edition}>{editionName(edition)}</option>)}
+            {EDITIONS.map((edition) => <option key={edition} value={edition}>NEC {edition}{isPreview(edition) ? " (preview)" : ""}</option>)}
           </SelectField>
           <TextField label="In effect from" type="date" hint="Empty: since before." error={errors.editions?.[index]?.effectiveFrom?.message} {...register(`editions.${index}.effectiveFrom`)} />
           <TextField label="Until" type="date" hint="Empty: open." error={errors.editions?.[index]?.effectiveTo?.message} {...register(`editions.${index}.effectiveTo`)} />

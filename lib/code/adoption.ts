@@ -15,7 +15,7 @@ export const editionName = (edition: Edition): string => (isPreview(edition) ? `
 /** What a preview means for who draws under it; empty for an edition that was read. */
 export function previewNote(edition: Edition): string {
   const limits = PREVIEWS[edition];
-  return limits ? `NEC ${edition} is a preview here: the rules run with the limits of ${limits} and every section reads ${PREVIEW_REMARK}. It can be issued for review; it cannot be sealed for permit.` : "";
+  return limits ? `NEC ${edition} is a preview here: the rules run with the limits of ${limits} and every section reads "${PREVIEW_REMARK}". It can be issued for review; it cannot be sealed for permit.` : "";
 }
 
 const from = (adoption: Adoption): string => adoption.effectiveFrom ?? "";

@@ -3,7 +3,7 @@ import { useEffect, useRef } from "react";
 import { suggestionEdit } from "@/components/diagram/actions/suggestionEdit";
 import { useEditor, useEditorStore } from "@/components/diagram/editorContext";
 import { BUTTON, PRIMARY } from "@/components/diagram/chrome/controls";
-import { editionName, isPreview, previewNote } from "@/lib/code/adoption";
+import { isPreview, previewNote } from "@/lib/code/adoption";
 import { tagOf } from "@/lib/client/describe";
 import { Mark } from "./mark";
 import { MARK_WORDS, numbered, type MarkKind } from "./markKind";
@@ -35,7 +35,7 @@ export function RedlineList({ opened }: { opened: string | null }) {
   return (
     <>
       <p className="pb-2 pl-1 text-label leading-snug text-ink2 stretch-label" role="status" aria-label="Redlines">
-        {summary ? `${summary}.` : "No redlines."}<br />{check.rulesRun} rules run, {editionName(check.edition)}.{isPreview(check.edition) && <span className="mt-1 block border-l-[3px] border-ochre pl-2">{previewNote(check.edition)}</span>}
+        {summary ? `${summary}.` : "No redlines."}<br />{check.rulesRun} rules run, NEC {check.edition}.{isPreview(check.edition) && <span className="mt-1 block border-l-[3px] border-ochre pl-2">{previewNote(check.edition)}</span>}
       </p>
       {list.length === 0 && <p className="border border-ink bg-vellum p-3 text-body">Nothing found by these rules. That is not an approval: the adopted code and the authority having jurisdiction decide.</p>}
       <ol className="list-none">

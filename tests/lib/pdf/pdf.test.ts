@@ -9,7 +9,7 @@ import { sheetSet } from "@/lib/sheets/set";
 import { letter } from "@/lib/sheets/lettering";
 import type { SheetPage } from "@/lib/sheets/context";
 import { writePdf, type PdfFacts } from "@/lib/server/pdf/write";
-import { DIGEST, SEAL, contextOf } from "@/tests/lib/sheets/support/context";
+import { CHECK, DIGEST, SEAL, contextOf } from "@/tests/lib/sheets/support/context";
 import { farm } from "@/tests/lib/sheets/support/farm";
 
 /** Debian's tools read the file independently of the program that wrote it; without them the check fails. */
@@ -63,6 +63,21 @@ describe("the sheet set as PDF", () => {
     expect(squeezed).toContain(DIGEST.slice(0, 24).toUpperCase());
     for (const phrase of ["SEAL CODE F7K2-91QD", "125 A 2P", "ORRIN RURAL ELECTRIC", "27 RULES RUN", "OR LICENSE E-00000"]) expect(printed).toContain(phrase);
   });
+  it("has no bookmark where none is wanted, and is then the same file each time too", async () => {
+    const plain = await writePdf(pages, { ...FACTS, bookmarks: false });
+    const other = path.join(folder, "plain.pdf");
+    writeFileSync(other, plain);
+    expect(JSON.parse(tool("qpdf", "--json", "--json-key=outlines", other)).outlines).toEqual([]);
+    expect(sha256(await writePdf(pages, { ...FACTS, bookmarks: false }))).toBe(sha256(plain));
+    expect(sha256(plain)).not.toBe(sha256(bytes));
+  });
+
+  it("says on each sheet that an edition is not confirmed, and of one that was read nothing", () => {
+    const words = (edition: "2023" | "2026"): string[] => sheetSet(contextOf(farm(), { check: { ...CHECK, edition } })).map((page) => JSON.stringify(page.primitives));
+    expect(words("2026").every((page) => page.includes(`(${letter("not confirmed")})`))).toBe(true);
+    expect(words("2023").some((page) => page.includes(letter("not confirmed")))).toBe(false);
+  });
+
   it("has a page of the plotted size and a bookmark for each sheet, and says who and when", () => {
     const facts = tool("pdfinfo", "-isodates", file);
     expect(facts).toMatch(new RegExp(`Pages: +${pages.length}\\n`));
