@@ -39,6 +39,7 @@ export const ACTION_WORDS: Readonly<Record<string, Words>> = {
   "person.active": { what: "Closed or opened an account", detail: (d) => (d["active"] === true ? "opened" : "closed") },
   "person.remove": { what: "Took somebody out of the company", detail: nothing },
   "person.roles": { what: "Changed somebody's roles in the company", detail: (d) => list(d["roles"]) || null },
+  "records.export": { what: "Exported the records", detail: (d) => (text(d["rows"]) === null ? null : `${text(d["rows"])} rows`) },
   "revision.issue": { what: "Issued a revision for review", detail: revision },
   "revision.return": { what: "Returned a revision with comments", detail: revision },
   "revision.seal": { what: "Sealed a revision", detail: revision },

@@ -42,6 +42,7 @@ export async function issueRevision(actor: Actor, jobId: string, input: z.output
   const { Drawing, Revision } = database();
   return inTransaction(async (transaction) => {
     const { job } = await jobAccess(actor, jobId, "revision.issue", { transaction });
+    refuseArchived(job);
     const drawing = await Drawing.findOne({ where: { jobId }, transaction, lock: transaction.LOCK.UPDATE });
     if (!drawing) throw notFound();
     const open = await Revision.findOne({ where: { jobId, state: [...OPEN_STATES] }, attributes: ["letter"], transaction });

@@ -1,0 +1,194 @@
+import { QueryTypes } from "sequelize";
+import { beforeAll, describe, expect, it } from "vitest";
+import { RULE_SET_VERSION } from "@/lib/rules";
+import { ACTION_WORDS } from "@/lib/server/data/historyWords";
+import { database } from "@/lib/server/data/database";
+import { waitsFor } from "@/lib/server/data/waitsFor";
+import { drawingOf, place, save } from "./support/drawings";
+import { firstAdministrator, inCompany, newJob, ofAnotherCompany, onJob, type Person } from "./support/people";
+import { request } from "./support/server";
+
+let owner: Person & { companyId: string };
+const list = async (as: Person, query = "") => (await request("GET", `/api/jobs${query}`, { as })).body;
+const numbers = async (as: Person, query = "") => (await list(as, query)).jobs.map((job: { number: string }) => job.number);
+const make = (number: string, name: string, change: Record<string, unknown> = {}) => newJob(owner, { number, name, ...change });
+
+beforeAll(async () => { owner = await firstAdministrator(); });
+
+describe("the register", () => {
+  let ids: Record<"barn" | "mill" | "kiln", string>;
+  beforeAll(async () => {
+    ids = {
+      barn: await make("26-001", "Long barn", { addressLines: "5 Hazel Road\nNettlecombe", parcel: "07-9" }),
+      mill: await make("26-002", "Mill house", { addressLines: "9 Weir Lane\nAlderby", owner: "Orla Finch" }),
+      kiln: await make("26-003", "Kiln 100%_yard", { addressLines: "2 Clay Pit\nAlderby" }),
+    };
+  });
+
+  it.each([
+    ["hazel", ["26-001"]], ["ALDERBY mill", ["26-002"]], ["finch", ["26-002"]], ["07-9", ["26-001"]], ["26-003", ["26-003"]], ["nobody", []],
+    // Signs of the database's own patterns stand for themselves.
+    ["100%_", ["26-003"]], ["%", ["26-003"]], ["_", ["26-003"]], ["\\", []], ["' or 1=1 --", []],
+  ])("finds %s", async (words, found) => {
+    expect((await numbers(owner, `?q=${encodeURIComponent(words)}`)).sort()).toEqual(found);
+  });
+  it("counts what it pages, and sorts", async () => {
+    const first = await list(owner, "?sort=number&limit=2");
+    expect(first).toMatchObject({ total: 3, tabs: { all: 3, mine: 3, draft: 3, review: 0, sealed: 0 } });
+    expect(first.jobs.map((job: { number: string }) => job.number)).toEqual(["26-003", "26-002"]);
+    expect(await numbers(owner, "?sort=number&limit=2&offset=2")).toEqual(["26-001"]);
+    expect(await numbers(owner, "?sort=name")).toEqual(["26-003", "26-001", "26-002"]);
+  });
+  it("knows what is due, and what is late", async () => {
+    const day = (offset: number) => new Date(Date.now() + offset * 86_400_000).toISOString().slice(0, 10);
+    await request("PATCH", `/api/jobs/${ids.barn}`, { as: owner, body: { dueOn: day(-1) } });
+    await request("PATCH", `/api/jobs/${ids.mill}`, { as: owner, body: { dueOn: day(7) } });
+    await request("PATCH", `/api/jobs/${ids.kiln}`, { as: owner, body: { dueOn: day(40) } });
+    expect(await numbers(owner, "?due=late")).toEqual(["26-001"]);
+    expect(await numbers(owner, "?due=soon&sort=due")).toEqual(["26-001", "26-002"]);
+    await request("PATCH", `/api/jobs/${ids.barn}`, { as: owner, body: { officeStatus: "closed" } });
+    expect(await numbers(owner, "?due=late")).toEqual([]);
+    expect(await numbers(owner, "?status=closed")).toEqual(["26-001"]);
+  });
+  it("says in the database what it says in words: who a job waits for", async () => {
+    const { id: drawingId } = await drawingOf(owner, ids.mill);
+    await save(owner, drawingId, 0, place("ds-1", "DS-1"));
+    await request("POST", `/api/jobs/${ids.mill}/revisions`, { as: owner, body: { purpose: "issued for permit" } });
+    const licensee = await onJob(owner, ids.mill, ["licensee"]);
+    for (const person of [owner, licensee]) {
+      const { jobs } = await list(person);
+      const mine = new Set(await numbers(person, "?tab=mine"));
+      for (const job of jobs) expect([job.number, mine.has(job.number)]).toEqual([job.number, job.waitsFor?.mine ?? false]);
+    }
+    expect(await numbers(licensee, "?tab=mine")).toEqual(["26-002"]);
+    expect(await numbers(owner, "?tab=review")).toEqual(["26-002"]);
+    expect(waitsFor({ roles: ["designer"], revision: null, counts: null, licensees: [], userId: owner.id })).toEqual({ mine: true, text: "You: checking" });
+  });
+  it("shows kept counts, and works the rest out without being asked twice", async () => {
+    await database().sequelize.query("update drawings set check_counts = null, checked_sequence = null", { type: QueryTypes.UPDATE });
+    await list(owner);
+    const rows = await database().Drawing.findAll({ attributes: ["checkedRuleSet"] });
+    expect(rows.filter((row) => row.checkedRuleSet === RULE_SET_VERSION).length).toBeGreaterThan(0);
+    const { jobs } = await list(owner);
+    expect(jobs.every((job: { counts: unknown }) => job.counts !== null)).toBe(true);
+  });
+  it("shows a person of another company none of it, whatever they search", async () => {
+    const twin = await ofAnotherCompany(owner);
+    expect(await numbers(twin, "?q=mill")).toEqual([]);
+    expect((await list(twin, "?q=barn")).jobs.map((job: { name: string }) => job.name)).toEqual(["Twin barn"]);
+    expect((await list(twin)).jurisdictions).toHaveLength(1);
+  });
+  it.each(["?limit=0", "?limit=201", "?tab=secret", "?sort=password", "?offset=-1", `?q=${"x".repeat(121)}`, "?unknown=1", "?jurisdiction=1"])("refuses %s by name", async (query) => {
+    expect(await request("GET", `/api/jobs${query}`, { as: owner })).toMatchObject({ status: 422, body: { code: "field" } });
+  });
+});
+
+describe("a job's office data", () => {
+  it("keeps the fee as amount, day and receipt number, and names a wrong one", async () => {
+    const id = await make("F-1", "Fee");
+    const answer = await request("PATCH", `/api/jobs/${id}`, { as: owner, body: { permitFeeCents: 41250, permitFeePaidOn: "2026-11-30", permitReceipt: "R-7741" } });
+    expect(answer.body).toMatchObject({ permitFeeCents: 41250, permitFeePaidOn: "2026-11-30", permitReceipt: "R-7741" });
+    for (const [field, value] of [["permitFeeCents", -1], ["permitFeeCents", 12.5], ["permitFeePaidOn", "30.11.2026"], ["dueOn", "soon"], ["officeStatus", "lost"], ["permitReceipt", "x".repeat(61)]] as const) {
+      expect(await request("PATCH", `/api/jobs/${id}`, { as: owner, body: { [field]: value } })).toMatchObject({ status: 422, body: { field } });
+    }
+  });
+  it("does not touch the drawing: the seal would be void for a due date", async () => {
+    const id = await make("F-2", "Due");
+    const before = await drawingOf(owner, id);
+    await request("PATCH", `/api/jobs/${id}`, { as: owner, body: { dueOn: "2027-01-15" } });
+    expect((await drawingOf(owner, id)).sequence).toBe(before.sequence);
+  });
+  it("proposes the next number by the company's scheme", async () => {
+    const year = String(new Date().getUTCFullYear()).slice(2);
+    await make(`${year}-417`, "Numbered");
+    expect((await request("GET", `/api/companies/${owner.companyId}/next-job-number`, { as: owner })).body).toEqual({ number: `${year}-418`, scheme: "{yy}-{nnn}" });
+    const installer = await inCompany(owner, owner.companyId, ["installer"]);
+    expect((await request("GET", `/api/companies/${owner.companyId}/next-job-number`, { as: installer })).status).toBe(403);
+  });
+});
+
+describe("a copy of a job", () => {
+  it("has the drawing and the site, and nothing that was granted for the first one", async () => {
+    const id = await make("D-1", "First", { permitNumber: "BP-9", owner: "Orla Finch" });
+    const { id: drawingId } = await drawingOf(owner, id);
+    await save(owner, drawingId, 0, place("ds-1", "DS-1"));
+    const licensee = await onJob(owner, id, ["licensee"]);
+    const made = await request("POST", `/api/jobs/${id}/duplicate`, { as: owner, body: { number: "D-2", name: "Second" } });
+    expect(made.status).toBe(201);
+    const copy = (await drawingOf(owner, made.body.id)).drawing;
+    expect(copy.sheet.titleBlock).toMatchObject({ jobName: "Second", jobNumber: "D-2", permitNumber: "", owner: "Orla Finch" });
+    expect(Object.keys(copy.equipment)).toEqual(["ds-1"]);
+    expect((await request("GET", `/api/jobs/${made.body.id}/revisions`, { as: owner })).body.revisions).toEqual([]);
+    expect((await request("GET", `/api/jobs/${made.body.id}`, { as: licensee })).status).toBe(404);
+  });
+  it("can begin empty, with the people", async () => {
+    const id = await make("D-3", "Third");
+    const licensee = await onJob(owner, id, ["licensee"]);
+    const made = await request("POST", `/api/jobs/${id}/duplicate`, { as: owner, body: { number: "D-4", name: "Fourth", drawing: false, people: true } });
+    expect((await drawingOf(owner, made.body.id)).drawing.equipment).toEqual({});
+    expect((await request("GET", `/api/jobs/${made.body.id}`, { as: licensee })).status).toBe(200);
+  });
+  it("needs a number of its own and the right to make jobs", async () => {
+    const id = await make("D-5", "Fifth");
+    expect(await request("POST", `/api/jobs/${id}/duplicate`, { as: owner, body: { number: "D-5", name: "x" } })).toMatchObject({ status: 409, body: { code: "number-taken", field: "number" } });
+    const outside = await onJob(owner, id, ["designer"]);
+    expect((await request("POST", `/api/jobs/${id}/duplicate`, { as: outside, body: { number: "D-6", name: "x" } })).status).toBe(404);
+  });
+});
+
+describe("the archive", () => {
+  it("keeps a job as it is, out of the register, until it is taken out again", async () => {
+    const id = await make("A-1", "Old");
+    const drawing = await drawingOf(owner, id);
+    expect((await request("POST", `/api/jobs/${id}/archive`, { as: owner, body: { archived: true } })).body).toMatchObject({ may: { edit: false, editDrawing: false } });
+    expect(await numbers(owner, "?q=A-1")).toEqual([]);
+    expect(await numbers(owner, "?q=A-1&archived=yes")).toEqual(["A-1"]);
+    for (const answer of [
+      await save(owner, drawing.id, 0, place("ds-1", "DS-1")), await request("PATCH", `/api/jobs/${id}`, { as: owner, body: { parcel: "1" } }),
+      await request("POST", `/api/jobs/${id}/revisions`, { as: owner, body: { purpose: "issued for permit" } }),
+    ]) expect(answer).toMatchObject({ status: 409, body: { code: "job-archived" } });
+    await request("POST", `/api/jobs/${id}/archive`, { as: owner, body: { archived: false } });
+    expect((await save(owner, drawing.id, 0, place("ds-1", "DS-1"))).status).toBe(200);
+  });
+  it("is for administrators", async () => {
+    const id = await make("A-2", "Other");
+    const designer = await onJob(owner, id, ["designer"]);
+    expect((await request("POST", `/api/jobs/${id}/archive`, { as: designer, body: { archived: true } })).status).toBe(403);
+  });
+});
+
+describe("the history of a job", () => {
+  it("tells who did what, saves in a row as one line, and pages back", async () => {
+    const id = await make("H-1", "Told");
+    const { id: drawingId } = await drawingOf(owner, id);
+    for (const n of [0, 1, 2]) await save(owner, drawingId, n, place(`ds-${n}`, `DS-${n}`));
+    await request("PATCH", `/api/jobs/${id}`, { as: owner, body: { dueOn: "2027-01-15" } });
+    const { entries, more } = (await request("GET", `/api/jobs/${id}/history`, { as: owner })).body;
+    expect(entries.map((each: { what: string }) => each.what)).toEqual(["Changed the job's data", "Changed the drawing, 3 saves", "Made the job"]);
+    expect(entries[0]).toMatchObject({ by: owner.name, detail: "dueOn" });
+    expect(more).toBe(false);
+    const first = (await request("GET", `/api/jobs/${id}/history?limit=1`, { as: owner })).body;
+    expect(first).toMatchObject({ more: true, entries: [{ what: "Changed the job's data" }] });
+    const next = (await request("GET", `/api/jobs/${id}/history?limit=5&before=${first.entries[0].id}`, { as: owner })).body;
+    expect(next.entries.map((each: { what: string }) => each.what)).toEqual(["Changed the drawing, 3 saves", "Made the job"]);
+  });
+  it("has words for every action that the code writes", async () => {
+    const { readdirSync, readFileSync } = await import("node:fs");
+    const { join } = await import("node:path");
+    const folder = join(import.meta.dirname, "../../lib/server");
+    const files = readdirSync(folder, { recursive: true, encoding: "utf8" }).filter((file) => file.endsWith(".ts"));
+    const written = new Set(files.flatMap((file) => [...readFileSync(join(folder, file), "utf8").matchAll(/action: "([a-z.-]+)"/g)].map((match) => match[1] as string)));
+    expect(written.size).toBeGreaterThan(25);
+    expect([...written].filter((action) => !Object.hasOwn(ACTION_WORDS, action))).toEqual([]);
+  });
+});
+
+describe("a statement", () => {
+  it("carries the name of who saves it", async () => {
+    const id = await make("S-1", "Stated");
+    const drawing = await drawingOf(owner, id);
+    const statement = (by: string) => [{ op: "add", path: "/statements", value: { one: { rule: "dedicated-space", anchor: "site", value: "yes", by, on: "2026-12-01", note: "" } } }];
+    expect(await save(owner, drawing.id, 0, statement("Somebody Else"))).toMatchObject({ status: 422, body: { code: "protected", field: "statements.one.by" } });
+    expect((await save(owner, drawing.id, 0, statement(owner.name))).status).toBe(200);
+  });
+});
