@@ -1,4 +1,5 @@
 /** Shapes of what browser and server say to each other. */
+export * from "./audit";
 export * from "./drawings";
 export * from "./files";
 export * from "./jobs";

@@ -9,6 +9,8 @@ import { database } from "./database";
  */
 interface AuditFacts { action: string; subject: string; companyId?: string; jobId?: string; detail?: Record<string, unknown> }
 
+type Facts = Readonly<Record<string, unknown>>;
+
 /** Most characters of the words an entry is found by. */
 const SEARCH_LENGTH = 3500;
 
@@ -46,9 +48,9 @@ function leaves(value: unknown): string[] {
  * What differs between two states of the same thing, for the detail of an audit entry: `{ before, after }` with the fields of `after` that
  * changed. Long texts are cut.
  */
-export function changes<Facts extends Record<string, unknown>>(before: Partial<Facts> | null, after: Facts): { before: Record<string, unknown>; after: Record<string, unknown> } {
+export function changes(before: Facts | null, after: Facts): { before: Facts; after: Facts } {
   const fields = Object.keys(after).filter((field) => JSON.stringify(before?.[field] ?? null) !== JSON.stringify(after[field] ?? null));
-  const pick = (from: Partial<Facts> | null) => Object.fromEntries(fields.map((field) => [field, short(from?.[field] ?? null)]));
+  const pick = (from: Facts | null): Facts => Object.fromEntries(fields.map((field) => [field, short(from?.[field] ?? null)]));
   return { before: pick(before), after: pick(after) };
 }
 

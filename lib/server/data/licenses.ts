@@ -5,7 +5,7 @@ import type { License } from "@/models";
 import { unprocessable } from "@/lib/server/http/problem";
 import { getBytes, putOnce } from "@/lib/server/storage";
 import type { Actor } from "./actor";
-import { audit } from "./audit";
+import { audit, changes } from "./audit";
 import { database, inTransaction } from "./database";
 import { readPngSize } from "./png";
 
@@ -32,9 +32,10 @@ export async function getLicense(actor: Actor): Promise<LicenseAnswer | null> {
 export async function putLicense(actor: Actor, facts: z.output<typeof licenseInput>): Promise<LicenseAnswer> {
   return inTransaction(async (transaction) => {
     const { License } = database();
-    const [license] = await License.findOrCreate({ where: { userId: actor.id }, defaults: { userId: actor.id, ...facts }, transaction });
+    const [license, made] = await License.findOrCreate({ where: { userId: actor.id }, defaults: { userId: actor.id, ...facts }, transaction });
+    const before = made ? null : { state: license.state, number: license.number, title: license.title, expiresOn: license.expiresOn };
     await license.update(facts, { transaction });
-    await audit(transaction, actor, { action: "license.put", subject: `licenses/${license.id}`, detail: { ...facts } });
+    await audit(transaction, actor, { action: "license.put", subject: `licenses/${license.id}`, detail: { number: facts.number, ...changes(before, facts) } });
     return answer(license);
   });
 }

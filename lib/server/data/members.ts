@@ -6,13 +6,15 @@ import type { Role } from "@/lib/policy";
 import type { JobMember, Membership, User } from "@/models";
 import { conflict, notFound, unprocessable } from "@/lib/server/http/problem";
 import { companyAccess, jobAccess, type Actor } from "./actor";
-import { audit } from "./audit";
+import { audit, changes } from "./audit";
 import { database, inTransaction } from "./database";
 import { createUser, findByEmail } from "./users";
 
 const answer = (row: Membership | JobMember): PersonAnswer => ({
   id: row.id, userId: row.userId, name: row.user?.name ?? "", email: row.user?.email ?? "", roles: row.roles,
 });
+/** The person an entry is about, by the name of that day. */
+const who = (row: Membership | JobMember) => ({ person: row.user?.name ?? "" });
 const byName = (a: PersonAnswer, b: PersonAnswer) => a.name.localeCompare(b.name, "en-US");
 
 /** The account of an address, made with the given name and password where there is none. */
@@ -38,8 +40,9 @@ export async function addMember(actor: Actor, jobId: string, input: z.output<typ
     const user = await accountFor(input, transaction);
     const { JobMember } = database();
     const [member, made] = await JobMember.findOrCreate({ where: { jobId, userId: user.id }, defaults: { jobId, userId: user.id, roles: input.roles }, transaction });
+    const before = made ? [] : member.roles;
     if (!made) await member.update({ roles: [...new Set<Role>([...member.roles, ...input.roles])] }, { transaction });
-    await audit(transaction, actor, { action: "member.add", subject: `users/${user.id}`, jobId, detail: { roles: input.roles } });
+    await audit(transaction, actor, { action: "member.add", subject: `users/${user.id}`, jobId, detail: { person: user.name, roles: input.roles, ...changes({ roles: before }, { roles: member.roles }) } });
     return { ...answer(member), name: user.name, email: user.email };
   });
 }
@@ -49,8 +52,9 @@ export async function changeMember(actor: Actor, jobId: string, memberId: string
   return inTransaction(async (transaction) => {
     const member = await managedMember(actor, jobId, memberId, transaction);
     if (!roles.includes("administrator")) await keepAdministrator(jobId, member, transaction);
+    const before = member.roles;
     await member.update({ roles }, { transaction });
-    await audit(transaction, actor, { action: "member.roles", subject: `users/${member.userId}`, jobId, detail: { roles } });
+    await audit(transaction, actor, { action: "member.roles", subject: `users/${member.userId}`, jobId, detail: { ...who(member), roles, ...changes({ roles: before }, { roles }) } });
     return answer(member);
   });
 }
@@ -61,7 +65,7 @@ export async function removeMember(actor: Actor, jobId: string, memberId: string
     const member = await managedMember(actor, jobId, memberId, transaction);
     await keepAdministrator(jobId, member, transaction);
     await member.destroy({ transaction });
-    await audit(transaction, actor, { action: "member.remove", subject: `users/${member.userId}`, jobId });
+    await audit(transaction, actor, { action: "member.remove", subject: `users/${member.userId}`, jobId, detail: { ...who(member), ...changes({ roles: member.roles }, { roles: null }) } });
   });
 }
 
@@ -99,8 +103,9 @@ export async function addPerson(actor: Actor, companyId: string, input: z.output
     const [membership, made] = await Membership.findOrCreate({
       where: { companyId, userId: user.id }, defaults: { companyId, userId: user.id, roles: input.roles }, transaction,
     });
+    const before = made ? [] : membership.roles;
     if (!made) await membership.update({ roles: [...new Set<Role>([...membership.roles, ...input.roles])] }, { transaction });
-    await audit(transaction, actor, { action: "person.add", subject: `users/${user.id}`, companyId, detail: { roles: input.roles } });
+    await audit(transaction, actor, { action: "person.add", subject: `users/${user.id}`, companyId, detail: { person: user.name, roles: input.roles, ...changes({ roles: before }, { roles: membership.roles }) } });
     return { ...answer(membership), name: user.name, email: user.email };
   });
 }
@@ -110,8 +115,9 @@ export async function changePerson(actor: Actor, companyId: string, membershipId
   return inTransaction(async (transaction) => {
     const membership = await managedPerson(actor, companyId, membershipId, transaction);
     if (!roles.includes("administrator")) await keepCompanyAdministrator(companyId, membership, transaction);
+    const before = membership.roles;
     await membership.update({ roles }, { transaction });
-    await audit(transaction, actor, { action: "person.roles", subject: `users/${membership.userId}`, companyId, detail: { roles } });
+    await audit(transaction, actor, { action: "person.roles", subject: `users/${membership.userId}`, companyId, detail: { ...who(membership), roles, ...changes({ roles: before }, { roles }) } });
     return answer(membership);
   });
 }
@@ -122,7 +128,7 @@ export async function removePerson(actor: Actor, companyId: string, membershipId
     const membership = await managedPerson(actor, companyId, membershipId, transaction);
     await keepCompanyAdministrator(companyId, membership, transaction);
     await membership.destroy({ transaction });
-    await audit(transaction, actor, { action: "person.remove", subject: `users/${membership.userId}`, companyId });
+    await audit(transaction, actor, { action: "person.remove", subject: `users/${membership.userId}`, companyId, detail: { ...who(membership), ...changes({ roles: membership.roles }, { roles: null }) } });
   });
 }
 
