@@ -7,6 +7,8 @@ const nothing = (): null => null;
 const text = (value: unknown): string | null => (typeof value === "string" && value !== "" ? value : typeof value === "number" ? String(value) : null);
 const list = (value: unknown): string => (Array.isArray(value) ? value.filter((each) => typeof each === "string").join(", ") : "");
 const part = (key: string, words = "") => (detail: Detail): string | null => { const value = text(detail[key]); return value === null ? null : `${words}${value}`; };
+/** Whom it was about, and their roles. */
+const about = (detail: Detail): string | null => [text(detail["person"]), list(detail["roles"])].filter(Boolean).join(": ") || null;
 const revision = (detail: Detail): string | null => (text(detail["letter"]) === null ? null : `Rev ${text(detail["letter"])}`);
 
 /** Every action of the audit log in words: what was done, and the fact worth a line. Actions that end alike share a reader. */
@@ -31,19 +33,21 @@ export const ACTION_WORDS: Readonly<Record<string, Words>> = {
   "library.import": { what: "Imported library entries", detail: (d) => [text(d["kind"]), text(d["added"]) && `${text(d["added"])} added`].filter(Boolean).join(", ") || null },
   "license.put": { what: "Entered a license", detail: part("number") },
   "license.seal-graphic": { what: "Uploaded a seal graphic", detail: nothing },
-  "member.add": { what: "Put somebody on the job", detail: (d) => list(d["roles"]) || null },
-  "member.remove": { what: "Took somebody off the job", detail: nothing },
-  "member.roles": { what: "Changed somebody's roles in the job", detail: (d) => list(d["roles"]) || null },
+  "member.add": { what: "Put somebody on the job", detail: about },
+  "member.remove": { what: "Took somebody off the job", detail: part("person") },
+  "member.roles": { what: "Changed somebody's roles in the job", detail: about },
   "password.change": { what: "Changed the password", detail: nothing },
-  "person.add": { what: "Added somebody to the company", detail: (d) => list(d["roles"]) || null },
-  "person.active": { what: "Closed or opened an account", detail: (d) => (d["active"] === true ? "opened" : "closed") },
-  "person.remove": { what: "Took somebody out of the company", detail: nothing },
-  "person.roles": { what: "Changed somebody's roles in the company", detail: (d) => list(d["roles"]) || null },
+  "person.add": { what: "Added somebody to the company", detail: about },
+  "person.active": { what: "Closed or opened an account", detail: (d) => [text(d["person"]), d["active"] === true ? "opened" : "closed"].filter(Boolean).join(", ") },
+  "person.remove": { what: "Took somebody out of the company", detail: part("person") },
+  "person.roles": { what: "Changed somebody's roles in the company", detail: about },
   "records.export": { what: "Exported the records", detail: (d) => (text(d["rows"]) === null ? null : `${text(d["rows"])} rows`) },
   "revision.issue": { what: "Issued a revision for review", detail: revision },
   "revision.return": { what: "Returned a revision with comments", detail: revision },
   "revision.seal": { what: "Sealed a revision", detail: revision },
-  "revision.seal.failed": { what: "The sheets of a seal could not be drawn", detail: part("error") },
+  "revision.seal.failed": { what: "The sheets of a seal could not be drawn", detail: part("message") },
+  "revision.seal.restored": { what: "The seal counts again: the drawing is the sealed one", detail: revision },
+  "revision.seal.void": { what: "The seal became void: the drawing was changed", detail: revision },
   "revision.sealed": { what: "The sealed sheets were finished", detail: revision },
   "sheets.download": { what: "Downloaded a sealed set", detail: revision },
   "visit.create": { what: "Recorded a site visit", detail: part("visitedOn") },
