@@ -4,7 +4,7 @@ import { newId } from "@/lib/client/newId";
 import { editionName } from "@/lib/code/adoption";
 import type { Edition } from "@/lib/diagram/schema";
 import { rules } from "@/lib/rules";
-import { limitOf, ruleMeta } from "@/lib/rules/amendments";
+import { limitOf, ruleMeta } from "@/lib/rules/engine/amendments";
 import { citationOf } from "@/lib/rules/engine/amend";
 import type { RuleMeta } from "@/lib/rules/engine/types";
 import { Button } from "@/components/ui/Button";

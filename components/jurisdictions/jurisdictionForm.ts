@@ -1,7 +1,7 @@
 import { set, type FieldErrors, type Resolver } from "react-hook-form";
 import { jurisdictionFacts, type Contact, type ExportProfile, type JurisdictionDetail, type JurisdictionFacts } from "@/lib/api";
 import type { Edition, Requirements } from "@/lib/diagram/schema";
-import { amendmentFaults, limitOf, ruleMeta } from "@/lib/rules/amendments";
+import { amendmentFaults, limitOf, ruleMeta } from "@/lib/rules/engine/amendments";
 import type { Signer } from "@/lib/workflow";
 
 type Typed<Value> = Value extends number | null ? string : Value;

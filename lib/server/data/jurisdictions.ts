@@ -6,7 +6,7 @@ import { adoptionInForce } from "@/lib/code/adoption";
 import { canonicalJson } from "@/lib/diagram/canonical";
 import type { Site } from "@/lib/diagram/schema";
 import { may, mayInCompany } from "@/lib/policy";
-import { amendmentFaults, wholeAmendment } from "@/lib/rules/amendments";
+import { amendmentFaults, wholeAmendment } from "@/lib/rules/engine/amendments";
 import type { IssuedJurisdiction } from "@/lib/workflow";
 import type { Jurisdiction } from "@/models";
 import { Problem, conflict, forbidden, notFound, unprocessable } from "@/lib/server/http/problem";

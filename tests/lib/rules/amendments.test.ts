@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import type { Amendment } from "@/lib/diagram/schema";
-import { amendmentFaults, limitOf, ruleMeta, wholeAmendment } from "@/lib/rules/amendments";
+import { amendmentFaults, limitOf, ruleMeta, wholeAmendment } from "@/lib/rules/engine/amendments";
 import { amend } from "@/lib/rules/engine/amend";
 import { cleanDrawing } from "@/seeders/demo/cleanDrawing";
 

@@ -1,6 +1,6 @@
 import type { Amendment } from "@/lib/diagram/schema";
 import { rules } from "@/lib/rules";
-import type { Limit, RuleMeta } from "./engine/types";
+import type { Limit, RuleMeta } from "./types";
 
 /** An amended limit further from the rule's own than this is a slip of the pen or of the unit, not an ordinance. */
 export const MOST_TIMES = 10;
