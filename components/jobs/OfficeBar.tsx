@@ -23,6 +23,7 @@ export function OfficeBar({ children, primary }: { children?: ReactNode; primary
           <LinkButton href="/jobs" size="bar">Jobs</LinkButton>
           {company && <LinkButton href="/jurisdictions" size="bar">Jurisdictions</LinkButton>}
           {company && <LinkButton href="/people" size="bar">People</LinkButton>}
+          {me.data?.companies.some((each) => each.may.records) && <LinkButton href="/records" size="bar">Records</LinkButton>}
           {me.data?.counter && <LinkButton href="/counter" size="bar">Counter</LinkButton>}
           {primary}
           <PersonMenu />

@@ -35,5 +35,5 @@ export interface LicenseAnswer {
   sealGraphic: { widthPx: number; heightPx: number } | null;
   expired: boolean;
 }
-export interface CompanyAnswer { id: string; name: string; roles: Role[]; may: { people: boolean; createJobs: boolean } }
+export interface CompanyAnswer { id: string; name: string; roles: Role[]; may: { people: boolean; createJobs: boolean; settings: boolean; records: boolean } }
 export interface MeAnswer { id: string; name: string; email: string; companies: CompanyAnswer[]; office: boolean; counter: boolean }

@@ -17,6 +17,8 @@ export function whenWords(iso: string, now: Date = new Date()): string {
   return date.getFullYear() === now.getFullYear() ? monthDay.format(date) : full.format(date);
 }
 
+/** 9:12 AM, in the reader's zone. */
+export const timeWords = (iso: string): string => time.format(new Date(iso));
 /** The same within a sentence: "changed just now". */
 export const whenInSentence = (iso: string): string => whenWords(iso).replace(/^(Just|Today|Yesterday)/, (word) => word.toLowerCase());
 
@@ -26,6 +28,14 @@ export const dateWords = (iso: string): string => full.format(new Date(iso));
 export const momentWords = (iso: string): string => `${full.format(new Date(iso))}, ${time.format(new Date(iso))}`;
 /** A calendar date (2027-12-31) in words; it belongs to no zone. */
 export const calendarWords = (isoDate: string): string => calendar.format(new Date(`${isoDate}T00:00:00Z`));
+const shortCalendar = new Intl.DateTimeFormat("en-US", { month: "short", day: "numeric", year: "numeric", timeZone: "UTC" });
+/** The same where room is short: Dec 31, 2027. */
+export const shortCalendarWords = (isoDate: string): string => shortCalendar.format(new Date(`${isoDate}T00:00:00Z`));
+/** Days from the reader's today to a calendar date; negative once it is past. */
+export function daysUntil(isoDate: string, now: Date = new Date()): number {
+  const [year = 0, month = 1, day = 1] = isoDate.split("-").map(Number);
+  return Math.round((new Date(year, month - 1, day).getTime() - startOfDay(now)) / DAY_MS);
+}
 /** A file size: 254 kB, 3.1 MB (powers of ten). */
 export function sizeWords(bytes: number): string {
   return bytes < 1_000_000 ? `${Math.max(1, Math.round(bytes / 1000))} kB` : `${(bytes / 1_000_000).toFixed(1)} MB`;

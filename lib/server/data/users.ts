@@ -123,7 +123,7 @@ export async function whoAmI(actor: Actor): Promise<MeAnswer> {
     id: actor.id, name: actor.name, email: actor.email,
     companies: memberships.map((each) => ({
       id: each.companyId, name: each.company?.name ?? "", roles: each.roles,
-      may: { people: mayInCompany(each.roles, "company.people"), createJobs: mayInCompany(each.roles, "jobs.create") },
+      may: { people: mayInCompany(each.roles, "company.people"), createJobs: mayInCompany(each.roles, "jobs.create"), settings: mayInCompany(each.roles, "company.settings"), records: mayInCompany(each.roles, "audit.view") },
     })),
     office: memberships.some((each) => each.roles.some((role) => role !== "permit clerk")) || [...roles].some((role) => role !== "permit clerk"),
     counter: roles.has("permit clerk"),
