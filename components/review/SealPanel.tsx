@@ -70,11 +70,12 @@ function Seal({ revision }: { revision: RevisionAnswer }) {
   return (
     <>
       <Asked revision={revision} />
-      <ul className="mt-2 list-none border-t border-g1">
+      <ul className="mt-2 list-none border-t border-g1 empty:hidden">
         {revision.sealRefusals.map((refusal) => (
           <li key={refusal.code} className="flex gap-2.5 border-b border-g1 py-2 text-text"><RedlineMark kind={refusal.code.includes("data") ? "needs-data" : "must-fix"} label="blocks the seal" /><span>{refusal.detail}</span></li>
         ))}
-        {clear && <li className="border-b border-g1 py-2 text-text">Nothing stands in the way of the seal.</li>}
+        {/* What stands in the way is worked out for who may seal; to others it would read as cleared. */}
+        {clear && revision.may.seal && <li className="border-b border-g1 py-2 text-text">Nothing stands in the way of the seal.</li>}
       </ul>
       {revision.returnedBy && <blockquote className="mt-3 border-l-[3px] border-blue pl-3 text-text"><p className="whitespace-pre-line">{revision.returnComment}</p><footer className="text-label text-ink2">Returned by {revision.returnedBy}</footer></blockquote>}
       {revision.may.seal ? (
