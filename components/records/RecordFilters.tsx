@@ -1,7 +1,6 @@
 import { useEffect, useRef, type ReactNode } from "react";
 import { ALL_BUT_DRAWING, BY_ITSELF, RECORD_KINDS } from "@/lib/api";
-import { EVERYTHING, type RecordsChoice } from "@/lib/client/recordsApi";
-import { Button } from "@/components/ui/Button";
+import type { RecordsChoice } from "@/lib/client/recordsApi";
 
 interface RecordFiltersProps { choice: RecordsChoice; onChange: (choice: RecordsChoice) => void; people: readonly { id: string; name: string }[] }
 
@@ -42,7 +41,6 @@ export function RecordFilters({ choice, onChange, people }: RecordFiltersProps) 
       </Labeled>
       <Labeled label="From"><input type="date" value={choice.from} max="9999-12-31" aria-invalid={backwards || undefined} className={`${CONTROL} w-[132px] aria-invalid:border-red`} onChange={(event) => set({ from: event.target.value })} /></Labeled>
       <Labeled label="Through"><input type="date" value={choice.to} max="9999-12-31" aria-invalid={backwards || undefined} aria-describedby={backwards ? "records-backwards" : undefined} className={`${CONTROL} w-[132px] aria-invalid:border-red`} onChange={(event) => set({ to: event.target.value })} /></Labeled>
-      <Button size="bar" look="quiet" className={JSON.stringify(choice) === JSON.stringify(EVERYTHING) ? "invisible" : ""} onClick={() => onChange(EVERYTHING)}>Clear</Button>
       {backwards && <p id="records-backwards" role="alert" className="w-full text-label font-strong text-red">The first day is after the last one.</p>}
     </div>
   );

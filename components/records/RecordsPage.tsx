@@ -52,6 +52,7 @@ function Register({ company, companies, onCompany }: { company: CompanyAnswer; c
               </select>
             </label>
           )}
+          {narrowed && <Button size="bar" look="quiet" onClick={() => setChoice(EVERYTHING)}>Show everything</Button>}
           <a href={recordsTableUrl(company.id, asked)} download className={`${buttonClass("plain", "bar")} hover:bg-paper`} title="What is filtered here, newest first, at most 100,000 entries">Download CSV</a>
         </div>
         <RecordFilters choice={choice} onChange={setChoice} people={pages?.[0]?.people ?? []} />

@@ -6,6 +6,8 @@ interface RecordsTableProps { lines: readonly RecordLine[]; chosenId: string | n
 
 const HEAD = "h-8 border-b border-ink bg-paper px-3 text-left text-body font-medium text-ink2";
 
+const DAY = "h-7 border-b border-g1 bg-vellum text-left text-body font-strong";
+
 /** The register: a line an entry, days as headings. Arrows choose. */
 export function RecordsTable({ lines, chosenId, onChoose }: RecordsTableProps) {
   const onKeyDown = (event: KeyboardEvent) => {
@@ -23,7 +25,7 @@ export function RecordsTable({ lines, chosenId, onChoose }: RecordsTableProps) {
           <th className={`${HEAD} w-[96px] pl-5`}>Time</th>
           <th className={`${HEAD} w-[150px]`}>Who</th>
           <th className={HEAD}>What</th>
-          <th className={`${HEAD} w-[190px] narrow:w-[96px]`}>Job</th>
+          <th className={`${HEAD} w-[190px] narrow:w-[116px]`}>Job</th>
           <th className={`${HEAD} w-[132px] pr-5 narrow:hidden`}>From</th>
         </tr>
       </thead>
@@ -33,7 +35,10 @@ export function RecordsTable({ lines, chosenId, onChoose }: RecordsTableProps) {
           const before = lines[index - 1];
           return (
             <Fragment key={line.id}>
-              {(!before || dateWords(before.at) !== day) && <tr><th colSpan={5} scope="rowgroup" className="h-7 border-b border-g1 bg-vellum px-5 text-left text-body font-strong">{day}</th></tr>}
+              {(!before || dateWords(before.at) !== day) && (
+                // Two cells: where the last column is left out, nothing may reach into it.
+                <tr><th colSpan={4} scope="rowgroup" className={`${DAY} pl-5`}>{day}</th><td className={`${DAY} narrow:hidden`} /></tr>
+              )}
               <Row line={line} chosen={line.id === chosenId} onChoose={onChoose} />
             </Fragment>
           );

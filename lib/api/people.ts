@@ -1,5 +1,7 @@
 import { z } from "zod";
 import { ROLES, type Role } from "@/lib/policy";
+import { schemeFault } from "@/lib/workflow/jobNumber";
+import type { LicenseExpiry } from "@/lib/workflow/licenseExpiry";
 import { emailAddress, filledLine, newPassword } from "./text";
 
 export const roleList = z.array(z.enum(ROLES)).min(1, "need at least one choice").max(ROLES.length)
@@ -16,6 +18,20 @@ export const personInput = z.strictObject({
 });
 export type PersonInput = z.input<typeof personInput>;
 export const rolesInput = z.strictObject({ roles: roleList });
+/** `active` false closes the account: its sessions end and nobody signs in with it until it is opened again. */
+export const personChange = z.strictObject({ roles: roleList.optional(), active: z.boolean().optional() })
+  .refine((change) => change.roles !== undefined || change.active !== undefined, { path: ["roles"], message: "are missing" });
+export type PersonChange = z.input<typeof personChange>;
+
+export const companyChange = z.strictObject({
+  name: filledLine(120).optional(),
+  jobNumberScheme: filledLine(40).superRefine((scheme, context) => {
+    const fault = schemeFault(scheme);
+    if (fault !== null) context.addIssue({ code: "custom", message: fault });
+  }).optional(),
+});
+export type CompanyChange = z.input<typeof companyChange>;
+export interface CompanyDetail { id: string; name: string; jobNumberScheme: string; createdAt: string; may: { settings: boolean } }
 
 export const passwordInput = z.strictObject({ current: z.string().min(1, "is missing").max(200), next: newPassword });
 export type PasswordInput = z.input<typeof passwordInput>;
@@ -30,10 +46,14 @@ export const SEAL_GRAPHIC_BYTES = 512 * 1024;
 export const SEAL_GRAPHIC_SIDE_PX = 2400;
 
 export interface PersonAnswer { id: string; userId: string; name: string; email: string; roles: Role[] }
+export interface PersonLicense { state: string; number: string; title: string; expiresOn: string; expiry: LicenseExpiry }
+/** Somebody of a company. `license` is there for whoever manages its people; null: none entered. */
+export interface CompanyPerson extends PersonAnswer { active: boolean; license?: PersonLicense | null }
 export interface LicenseAnswer {
   state: string; number: string; title: string; expiresOn: string;
   sealGraphic: { widthPx: number; heightPx: number } | null;
   expired: boolean;
+  expiry: LicenseExpiry;
 }
 export interface CompanyAnswer { id: string; name: string; roles: Role[]; may: { people: boolean; createJobs: boolean; settings: boolean; records: boolean } }
-export interface MeAnswer { id: string; name: string; email: string; companies: CompanyAnswer[]; office: boolean; counter: boolean }
+export interface MeAnswer { id: string; name: string; email: string; companies: CompanyAnswer[]; office: boolean; counter: boolean; /** What has to be said about the end of the person's own license; null while nothing has. */ licenseWarning: LicenseExpiry | null }

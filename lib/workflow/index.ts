@@ -1,4 +1,5 @@
 export * from "./letters";
+export * from "./licenseExpiry";
 export * from "./revision";
 export * from "./seal";
 export * from "./signing";

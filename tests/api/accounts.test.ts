@@ -61,7 +61,7 @@ describe("a license", () => {
     expect((await request("GET", "/api/me/license", { as: owner })).body).toEqual({ license: null });
     await request("PUT", "/api/me/license", { as: owner, body: entry });
     const changed = await request("PUT", "/api/me/license", { as: owner, body: { ...entry, number: "L-2" } });
-    expect(changed.body.license).toEqual({ ...entry, number: "L-2", sealGraphic: null, expired: false });
+    expect(changed.body.license).toMatchObject({ ...entry, number: "L-2", sealGraphic: null, expired: false, expiry: { nearness: "in force", words: null } });
     const other = await inCompany(owner, owner.companyId, ["licensee"]);
     expect((await request("GET", "/api/me/license", { as: other })).body).toEqual({ license: null });
   });

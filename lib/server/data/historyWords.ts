@@ -1,11 +1,12 @@
 import "server-only";
+import { fieldWords } from "./recordWords";
 
 type Detail = Readonly<Record<string, unknown>>;
 interface Words { what: string; detail: (detail: Detail) => string | null }
 
 const nothing = (): null => null;
 const text = (value: unknown): string | null => (typeof value === "string" && value !== "" ? value : typeof value === "number" ? String(value) : null);
-const list = (value: unknown): string => (Array.isArray(value) ? value.filter((each) => typeof each === "string").join(", ") : "");
+const list = (value: unknown): string => (Array.isArray(value) ? value.filter((each) => typeof each === "string").map(fieldWords).join(", ") : "");
 const part = (key: string, words = "") => (detail: Detail): string | null => { const value = text(detail[key]); return value === null ? null : `${words}${value}`; };
 /** Whom it was about, and their roles. */
 const about = (detail: Detail): string | null => [text(detail["person"]), list(detail["roles"])].filter(Boolean).join(": ") || null;

@@ -1,6 +1,7 @@
 import "server-only";
 import type { z } from "zod";
-import type { LicenseAnswer, licenseInput } from "@/lib/api";
+import type { LicenseAnswer, PersonLicense, licenseInput } from "@/lib/api";
+import { licenseExpiry, type LicenseExpiry } from "@/lib/workflow";
 import type { License } from "@/models";
 import { unprocessable } from "@/lib/server/http/problem";
 import { getBytes, putOnce } from "@/lib/server/storage";
@@ -9,18 +10,34 @@ import { audit, changes } from "./audit";
 import { database, inTransaction } from "./database";
 import { readPngSize } from "./png";
 
-/** Today as a calendar date, UTC. A license that ends today is in force today. */
+/**
+ * Today as a calendar date, UTC. A license that ends today is in force today. West of Greenwich a day ends here before it ends there: nothing
+ * is sealed after a last day, at the price of its evening.
+ */
 export const today = () => new Date().toISOString().slice(0, 10);
 
 function answer(license: License): LicenseAnswer {
   return {
     state: license.state, number: license.number, title: license.title, expiresOn: license.expiresOn,
     sealGraphic: license.sealWidthPx && license.sealHeightPx ? { widthPx: license.sealWidthPx, heightPx: license.sealHeightPx } : null,
-    expired: license.expiresOn < today(),
+    expired: license.expiresOn < today(), expiry: licenseExpiry(license.expiresOn, today()),
   };
 }
 
 export const licenseOf = (userId: string) => database().License.findOne({ where: { userId } });
+
+/** Licenses of people, by account. */
+export async function licensesOf(userIds: readonly string[]): Promise<Map<string, PersonLicense>> {
+  const rows = await database().License.findAll({ where: { userId: [...userIds] } });
+  return new Map(rows.map(({ userId, state, number, title, expiresOn }) => [userId, { state, number, title, expiresOn, expiry: licenseExpiry(expiresOn, today()) }]));
+}
+
+/** What has to be said about the end of a person's license, or null. */
+export async function licenseWarning(userId: string): Promise<LicenseExpiry | null> {
+  const license = await licenseOf(userId);
+  const expiry = license && licenseExpiry(license.expiresOn, today());
+  return expiry && expiry.words !== null ? expiry : null;
+}
 
 /** The person's license, or null before it is entered. */
 export async function getLicense(actor: Actor): Promise<LicenseAnswer | null> {

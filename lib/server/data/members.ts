@@ -3,22 +3,22 @@ import { Op, type Transaction } from "sequelize";
 import type { z } from "zod";
 import type { PersonAnswer, personInput } from "@/lib/api";
 import type { Role } from "@/lib/policy";
-import type { JobMember, Membership, User } from "@/models";
+import type { JobMember, User } from "@/models";
 import { conflict, notFound, unprocessable } from "@/lib/server/http/problem";
-import { companyAccess, jobAccess, type Actor } from "./actor";
+import { jobAccess, type Actor } from "./actor";
 import { audit, changes } from "./audit";
 import { database, inTransaction } from "./database";
 import { createUser, findByEmail } from "./users";
 
-const answer = (row: Membership | JobMember): PersonAnswer => ({
+const answer = (row: JobMember): PersonAnswer => ({
   id: row.id, userId: row.userId, name: row.user?.name ?? "", email: row.user?.email ?? "", roles: row.roles,
 });
 /** The person an entry is about, by the name of that day. */
-const who = (row: Membership | JobMember) => ({ person: row.user?.name ?? "" });
+const who = (row: JobMember) => ({ person: row.user?.name ?? "" });
 const byName = (a: PersonAnswer, b: PersonAnswer) => a.name.localeCompare(b.name, "en-US");
 
 /** The account of an address, made with the given name and password where there is none. */
-async function accountFor(input: z.output<typeof personInput>, transaction: Transaction): Promise<User> {
+export async function accountFor(input: z.output<typeof personInput>, transaction: Transaction): Promise<User> {
   const known = await findByEmail(input.email, transaction);
   if (known) return known;
   if (!input.name) throw unprocessable("name", "No account has this address yet. Enter the person's name.", "account-needed");
@@ -85,66 +85,4 @@ async function keepAdministrator(jobId: string, member: JobMember, transaction: 
     where: { jobId, id: { [Op.ne]: member.id }, roles: { [Op.contains]: ["administrator"] } }, transaction,
   });
   if (others === 0) throw conflict("last-administrator", "The job needs an administrator. Give somebody else the role first.");
-}
-
-export async function listPeople(actor: Actor, companyId: string): Promise<PersonAnswer[]> {
-  await companyAccess(actor, companyId, "company.view");
-  const { Membership, User } = database();
-  const rows = await Membership.findAll({ where: { companyId }, include: [{ model: User, as: "user" }] });
-  return rows.map(answer).sort(byName);
-}
-
-/** Takes a person into a company; somebody who is in it gets the roles added. */
-export async function addPerson(actor: Actor, companyId: string, input: z.output<typeof personInput>): Promise<PersonAnswer> {
-  return inTransaction(async (transaction) => {
-    await companyAccess(actor, companyId, "company.people", transaction);
-    const user = await accountFor(input, transaction);
-    const { Membership } = database();
-    const [membership, made] = await Membership.findOrCreate({
-      where: { companyId, userId: user.id }, defaults: { companyId, userId: user.id, roles: input.roles }, transaction,
-    });
-    const before = made ? [] : membership.roles;
-    if (!made) await membership.update({ roles: [...new Set<Role>([...membership.roles, ...input.roles])] }, { transaction });
-    await audit(transaction, actor, { action: "person.add", subject: `users/${user.id}`, companyId, detail: { person: user.name, roles: input.roles, ...changes({ roles: before }, { roles: membership.roles }) } });
-    return { ...answer(membership), name: user.name, email: user.email };
-  });
-}
-
-/** Replaces the roles of a person in a company. */
-export async function changePerson(actor: Actor, companyId: string, membershipId: string, roles: Role[]): Promise<PersonAnswer> {
-  return inTransaction(async (transaction) => {
-    const membership = await managedPerson(actor, companyId, membershipId, transaction);
-    if (!roles.includes("administrator")) await keepCompanyAdministrator(companyId, membership, transaction);
-    const before = membership.roles;
-    await membership.update({ roles }, { transaction });
-    await audit(transaction, actor, { action: "person.roles", subject: `users/${membership.userId}`, companyId, detail: { ...who(membership), roles, ...changes({ roles: before }, { roles }) } });
-    return answer(membership);
-  });
-}
-
-/** Takes a person out of a company; their places on jobs stay until they are taken off them. */
-export async function removePerson(actor: Actor, companyId: string, membershipId: string): Promise<void> {
-  await inTransaction(async (transaction) => {
-    const membership = await managedPerson(actor, companyId, membershipId, transaction);
-    await keepCompanyAdministrator(companyId, membership, transaction);
-    await membership.destroy({ transaction });
-    await audit(transaction, actor, { action: "person.remove", subject: `users/${membership.userId}`, companyId, detail: { ...who(membership), ...changes({ roles: membership.roles }, { roles: null }) } });
-  });
-}
-
-async function managedPerson(actor: Actor, companyId: string, membershipId: string, transaction: Transaction): Promise<Membership> {
-  const { Company, Membership, User } = database();
-  await Company.findByPk(companyId, { transaction, lock: transaction.LOCK.UPDATE });
-  await companyAccess(actor, companyId, "company.people", transaction);
-  const membership = await Membership.findOne({ where: { id: membershipId, companyId }, include: [{ model: User, as: "user" }], transaction });
-  if (!membership) throw notFound();
-  return membership;
-}
-
-async function keepCompanyAdministrator(companyId: string, membership: Membership, transaction: Transaction): Promise<void> {
-  if (!membership.roles.includes("administrator")) return;
-  const others = await database().Membership.count({
-    where: { companyId, id: { [Op.ne]: membership.id }, roles: { [Op.contains]: ["administrator"] } }, transaction,
-  });
-  if (others === 0) throw conflict("last-administrator", "The company needs an administrator. Give somebody else the role first.");
 }

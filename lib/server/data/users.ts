@@ -10,6 +10,7 @@ import type { Actor } from "./actor";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
 import { addStarterSet } from "./libraryStarter";
+import { licenseWarning } from "./licenses";
 
 /** Tries with a wrong password before a pause, and the pause in seconds. */
 const TRIES = 8;
@@ -114,9 +115,10 @@ export async function changePassword(actor: Actor, current: string, next: string
 /** What a person's pages need to know about them. */
 export async function whoAmI(actor: Actor): Promise<MeAnswer> {
   const { Membership, Company, JobMember } = database();
-  const [memberships, jobRoles] = await Promise.all([
+  const [memberships, jobRoles, warning] = await Promise.all([
     Membership.findAll({ where: { userId: actor.id }, include: [{ model: Company, as: "company" }], order: [["createdAt", "ASC"]] }),
     JobMember.findAll({ where: { userId: actor.id }, attributes: ["roles"] }),
+    licenseWarning(actor.id),
   ]);
   const roles = new Set<Role>(jobRoles.flatMap((each) => each.roles));
   return {
@@ -126,6 +128,6 @@ export async function whoAmI(actor: Actor): Promise<MeAnswer> {
       may: { people: mayInCompany(each.roles, "company.people"), createJobs: mayInCompany(each.roles, "jobs.create"), settings: mayInCompany(each.roles, "company.settings"), records: mayInCompany(each.roles, "audit.view") },
     })),
     office: memberships.some((each) => each.roles.some((role) => role !== "permit clerk")) || [...roles].some((role) => role !== "permit clerk"),
-    counter: roles.has("permit clerk"),
+    counter: roles.has("permit clerk"), licenseWarning: warning,
   };
 }

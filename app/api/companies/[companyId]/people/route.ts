@@ -1,5 +1,5 @@
 import { personInput } from "@/lib/api";
-import { addPerson, listPeople } from "@/lib/server/data/members";
+import { addPerson, listPeople } from "@/lib/server/data/people";
 import { handle } from "@/lib/server/http/handle";
 import { companyParams as params } from "@/lib/server/http/params";
 
