@@ -12,6 +12,7 @@ import { Panel } from "@/components/jobs/Panel";
 import { Button } from "@/components/ui/Button";
 import { TextField } from "@/components/ui/Field";
 import { ErrorNote, Refused, Skeleton } from "@/components/ui/Notes";
+import { ExpiryWords } from "./LicenseLine";
 
 const EMPTY: LicenseInput = { state: "", number: "", title: "", expiresOn: "" };
 const formOf = (license: LicenseAnswer | null): LicenseInput =>
@@ -31,13 +32,13 @@ export function LicensePanel() {
 }
 
 function LicenseState({ license }: { license: LicenseAnswer }) {
-  return license.expired
-    ? <span className="text-text font-heading text-red">Expired {calendarWords(license.expiresOn)}. Nothing can be sealed.</span>
+  return license.expiry.words !== null
+    ? <span className="text-text"><ExpiryWords expiry={license.expiry} /></span>
     : <span className="text-text text-ink2">In force until {calendarWords(license.expiresOn)}</span>;
 }
 
 function LicenseForm({ license }: { license: LicenseAnswer | null }) {
-  const save = useChange(api.putLicense, [keys.license]);
+  const save = useChange(api.putLicense, [keys.license, keys.me]);
   const { register, handleSubmit, reset, setError, formState: { errors, isDirty } } = useForm<LicenseInput>({ resolver: zodResolver(licenseInput), defaultValues: formOf(license) });
   useEffect(() => reset(formOf(license)), [license, reset]);
   const submit = handleSubmit(async (input) => {
@@ -54,7 +55,7 @@ function LicenseForm({ license }: { license: LicenseAnswer | null }) {
         <TextField label="State or board" error={errors.state?.message} {...register("state")} />
         <TextField label="License number" error={errors.number?.message} {...register("number")} />
         <TextField label="Title" placeholder="Professional engineer" error={errors.title?.message} {...register("title")} />
-        <TextField label="In force until" type="date" error={errors.expiresOn?.message} {...register("expiresOn")} />
+        <TextField label="In force until" type="date" hint="Its last day. It ends at midnight UTC: in North America that afternoon or evening." error={errors.expiresOn?.message} {...register("expiresOn")} />
         <div className="col-span-2 flex items-center gap-3">
           <Button type="submit" look="primary" disabled={!isDirty} busy={save.isPending}>Save the license</Button>
           {save.isSuccess && !isDirty && <span role="status" className="text-text text-ink2">Saved.</span>}

@@ -7,6 +7,7 @@ import { calendarWords, momentWords } from "@/lib/client/dates";
 import { keys, useChange } from "@/lib/client/queries";
 import { previewNote } from "@/lib/code/adoption";
 import { Digest } from "@/components/counter/Digest";
+import { LicenseLine } from "@/components/people/LicenseLine";
 import { Button } from "@/components/ui/Button";
 import { Dialog } from "@/components/ui/Dialog";
 import { TextArea, TextField } from "@/components/ui/Field";
@@ -80,6 +81,7 @@ function Seal({ revision }: { revision: RevisionAnswer }) {
       {revision.returnedBy && <blockquote className="mt-3 border-l-[3px] border-blue pl-3 text-text"><p className="whitespace-pre-line">{revision.returnComment}</p><footer className="text-label text-ink2">Returned by {revision.returnedBy}</footer></blockquote>}
       {revision.may.seal ? (
         <form className="mt-3" onSubmit={(event) => { event.preventDefault(); seal.mutate(password); setPassword(""); }}>
+          <LicenseLine className="mb-3 border-l-[3px] border-ochre pl-3" />
           <p className="mb-3 text-label text-ink2">Sealing asks for your password again, prints the drawing digest and a seal code on every sheet, freezes the bytes and stores the digest of the file apart. Seal only what is under your responsible charge.</p>
           <TextField label="Your password" type="password" autoComplete="current-password" value={password} error={wrong ? "This is not your password. Nothing was sealed." : undefined} onChange={(event) => { setPassword(event.target.value); if (wrong) seal.reset(); }} />
           {!wrong && <Refused error={seal.error} />}
