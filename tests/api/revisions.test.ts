@@ -136,6 +136,13 @@ describe("sealing", () => {
     expect(await codes()).toEqual(["draft-moved-on"]);
     await edit(home);
     expect((await revision(licensee, id)).body.sealRefusals).toEqual([]);
+    // In force through its last day, and no day longer.
+    const day = (shift: number) => new Date(Date.now() + shift * 86_400_000).toISOString().slice(0, 10);
+    await request("PUT", "/api/me/license", { as: licensee, body: { ...license, expiresOn: day(0) } });
+    expect((await revision(licensee, id)).body.sealRefusals).toEqual([]);
+    await request("PUT", "/api/me/license", { as: licensee, body: { ...license, expiresOn: day(-1) } });
+    expect(await codes()).toEqual(["license-expired"]);
+    await request("PUT", "/api/me/license", { as: licensee, body: license });
   });
 
   it("goes back to review when the sheets cannot be drawn, and can be tried again", async () => {

@@ -27,7 +27,7 @@ left join lateral (
 
 /** Writes who did what, from where, in the transaction that does it. `actor` is null for the worker process. */
 export async function audit(transaction: Transaction, actor: Actor | null, facts: AuditFacts): Promise<void> {
-  const words = [facts.action, actor?.name ?? "", actor?.email ?? "", ...leaves(facts.detail ?? {})].filter(Boolean).join(" ");
+  const words = [facts.action, actor?.name ?? "", actor?.email ?? "", actor?.from?.address ?? "", ...leaves(facts.detail ?? {})].filter(Boolean).join(" ");
   await database().sequelize.query(INSERT, {
     bind: [
       actor?.id ?? null, facts.companyId ?? null, facts.jobId ?? null, facts.action, facts.subject, JSON.stringify(facts.detail ?? {}),
