@@ -14,6 +14,7 @@ import { Membership, initMembership } from "./membership";
 import { Revision, initRevision } from "./revision";
 import { Seal, initSeal } from "./seal";
 import { SheetSet, initSheetSet } from "./sheetSet";
+import { SiteVisit, initSiteVisit } from "./siteVisit";
 import { StoredFile, initStoredFile } from "./storedFile";
 import { User, initUser } from "./user";
 
@@ -25,7 +26,7 @@ export function initModels(sequelize: Sequelize): void {
   for (const init of [
     initCompany, initUser, initMembership, initJurisdiction, initJob, initJobMember, initLicense, initDrawing,
     initDrawingPatch, initRevision, initFindingAcceptance, initSeal, initSheetSet, initAuditEntry, initLibraryEntry, initLibraryVersion,
-    initStoredFile,
+    initStoredFile, initSiteVisit,
   ]) init(sequelize);
 
   User.hasMany(Membership, { as: "memberships", foreignKey: "userId" });
@@ -46,7 +47,9 @@ export function initModels(sequelize: Sequelize): void {
   Revision.hasMany(FindingAcceptance, { as: "acceptances", foreignKey: "revisionId" });
   LibraryEntry.hasMany(LibraryVersion, { as: "versions", foreignKey: "entryId" });
   StoredFile.belongsTo(User, { as: "uploader", foreignKey: "uploadedBy" });
+  SiteVisit.belongsTo(User, { as: "creator", foreignKey: "createdBy" });
+  SiteVisit.belongsTo(User, { as: "updater", foreignKey: "updatedBy" });
   LibraryVersion.belongsTo(User, { as: "maker", foreignKey: "madeBy" });
 }
 
-export { AuditEntry, Company, Drawing, DrawingPatch, FindingAcceptance, Job, JobMember, Jurisdiction, LibraryEntry, LibraryVersion, License, Membership, Revision, Seal, SheetSet, StoredFile, User };
+export { AuditEntry, Company, Drawing, DrawingPatch, FindingAcceptance, Job, JobMember, Jurisdiction, LibraryEntry, LibraryVersion, License, Membership, Revision, Seal, SheetSet, SiteVisit, StoredFile, User };

@@ -9,3 +9,4 @@ export * from "./people";
 export * from "./problem";
 export * from "./revisions";
 export * from "./text";
+export * from "./visits";

@@ -1,4 +1,5 @@
 import { beforeAll, describe, expect, it } from "vitest";
+import { emptyVisit } from "@/lib/diagram/siteVisit";
 import { drawingOf, place, save } from "./support/drawings";
 import { uploadPath, uploaded } from "./support/files";
 import { png } from "./support/png";
@@ -10,7 +11,7 @@ let stranger: Person;
 let twin: Person;
 let colleague: Person;
 let people: Record<"licensee" | "installer" | "clerk", Person>;
-let ids: Record<"jobId" | "drawingId" | "revisionId" | "memberId" | "membershipId" | "companyId" | "jurisdictionId" | "entryId" | "version" | "fileId", string>;
+let ids: Record<"jobId" | "drawingId" | "revisionId" | "memberId" | "membershipId" | "companyId" | "jurisdictionId" | "entryId" | "version" | "fileId" | "visitId", string>;
 
 beforeAll(async () => {
   owner = await firstAdministrator();
@@ -29,7 +30,9 @@ beforeAll(async () => {
   const company = await request("GET", `/api/companies/${owner.companyId}/people`, { as: owner });
   const library = await request("GET", `/api/companies/${owner.companyId}/library`, { as: owner });
   const made = await request("POST", "/api/jurisdictions", { as: owner, body: { companyId: owner.companyId, name: "Test barn township", editions: [{ edition: "2023", effectiveFrom: null, effectiveTo: null }] } });
+  const visit = await request("POST", `/api/jobs/${jobId}/visits`, { as: owner, body: { id: "0b0f5e06-6d0e-4a62-9d0f-3b9a5c2f7d11", visitedOn: "2026-11-30", byName: "Test barn visitor", data: emptyVisit() } });
   ids = {
+    visitId: visit.body.id,
     jurisdictionId: made.body.id,
     jobId, drawingId, revisionId: issued.body.id, companyId: owner.companyId, entryId: library.body.entries[0].id, version: "1",
     fileId: (await uploaded(owner, `/api/jobs/${jobId}`, png(80, 80), "meter.png")).id,
@@ -90,6 +93,10 @@ const OWNED: Record<string, { body?: unknown; raw?: BodyInit; type?: string; que
   "POST /api/library/[entryId]/files": { query: uploadPath("", "breaker.png", "picture").slice("/files".length), raw: new Uint8Array(png(70, 70)), type: "image/png", status: 201 },
   "GET /api/files/[fileId]": {},
   "DELETE /api/files/[fileId]": { status: 204 },
+  "GET /api/jobs/[jobId]/visits": {},
+  "POST /api/jobs/[jobId]/visits": { body: { id: "5d0c0a1e-7c3d-4b58-8f0e-2a1b6c9d4e33", visitedOn: "2026-12-01", byName: "K. Fenner", data: emptyVisit() }, status: 201 },
+  "GET /api/visits/[visitId]": {},
+  "PATCH /api/visits/[visitId]": { body: { version: 1, byName: "K. Fenner" } },
 };
 /** Routes that answer each person about themselves, and the one for the first visitor. */
 const OWN = [

@@ -12,3 +12,4 @@ export const entryParams = z.object({ entryId: z.uuid() });
 export const entryVersionParams = z.object({ entryId: z.uuid(), version: z.coerce.number().int().min(1).max(100_000) });
 export const fileParams = z.object({ fileId: z.uuid() });
 export const jurisdictionParams = z.object({ jurisdictionId: z.uuid() });
+export const visitParams = z.object({ visitId: z.uuid() });
