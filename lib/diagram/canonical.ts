@@ -30,10 +30,18 @@ export function canonicalJson(value: unknown): string {
 const PLAIN = /^[ !#-[\]-~]*$/;
 const quoted = (text: string): string => (PLAIN.test(text) ? `"${text}"` : JSON.stringify(text));
 
+/** The drawing as it prints: a picture that lies under it on screen is no part of what was checked, sealed or built. */
+function printed(drawing: Drawing): Drawing {
+  if (!drawing.sheet.underlay) return drawing;
+  const { underlay: _, ...sheet } = drawing.sheet;
+  return { ...drawing, sheet };
+}
+
 /**
- * Drawing digest: SHA-256, 64 hexadecimal digits, of the canonical drawing with the rule set and the edition it was checked under.
+ * Drawing digest: SHA-256, 64 hexadecimal digits, of the canonical drawing with the rule set and the edition it was checked under. The
+ * underlay is left out, so that a sketch put under a sealed drawing does not void its seal.
  * It is printed on the sheets. The digest of a finished file is another number and is never printed in that file.
  */
 export function drawingDigest(drawing: Drawing, ruleSet: string): string {
-  return sha256Hex(new TextEncoder().encode(canonicalJson({ drawing, ruleSet, edition: drawing.site.edition })));
+  return sha256Hex(new TextEncoder().encode(canonicalJson({ drawing: printed(drawing), ruleSet, edition: drawing.site.edition })));
 }

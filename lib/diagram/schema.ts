@@ -361,6 +361,7 @@ export type Site = z.infer<typeof siteSchema>;
 export type Amendment = z.infer<typeof amendmentSchema>;
 export type Requirements = z.infer<typeof requirementsSchema>;
 export type Sheet = z.infer<typeof sheetSchema>;
+export type Underlay = z.infer<typeof underlaySchema>;
 export type Equipment = z.infer<typeof equipmentSchema>;
 export type PortData = z.infer<typeof portDataSchema>;
 export type Circuit = z.infer<typeof circuitSchema>;

@@ -84,6 +84,20 @@ export const setTag: Recipe<"setTag"> = (draft, { ref, tag }) => {
 
 export const setSite: Recipe<"setSite"> = (draft, { change }) => { Object.assign(draft.site, change); return "change site data"; };
 export const setSheet: Recipe<"setSheet"> = (draft, { change }) => { Object.assign(draft.sheet, change); return "change the sheet"; };
+/** Dimmed to this where nothing else is said. */
+const UNDERLAY_OPACITY = 0.35;
+export const setUnderlay: Recipe<"setUnderlay"> = (draft, { change }) => {
+  const before = draft.sheet.underlay;
+  const made = { at: { x: 4, y: 4 }, width: 60, height: 40, opacity: UNDERLAY_OPACITY, hidden: false, ...before, ...change };
+  if (!made.file) throw new Refusal("Choose a picture first.", "file");
+  draft.sheet.underlay = { ...made, file: made.file };
+  return before ? "change the background" : "place a background";
+};
+export const removeUnderlay: Recipe<"removeUnderlay"> = (draft) => {
+  if (!draft.sheet.underlay) throw new Refusal("There is no background.");
+  delete draft.sheet.underlay;
+  return "remove the background";
+};
 export const setTitleBlock: Recipe<"setTitleBlock"> = (draft, { change }) => { Object.assign(draft.sheet.titleBlock, change); return "change the title block"; };
 
 export const placeText: Recipe<"placeText"> = (draft: Draft<Drawing>, command) => {

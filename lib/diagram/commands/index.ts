@@ -6,7 +6,7 @@ import { kindDefinition } from "@/lib/equipment/registry";
 import { moveElements, resizeElement, setParent, turnElements } from "./arrange";
 import { addBond, addInterlock, placeSensor, setBond, setInterlock, setSensor } from "./attached";
 import { addToRoute, joinPorts, removeFromRoute, removeSection, routeCircuit, setEnd, setSection, splitSection } from "./circuits";
-import { placeText, setField, setPort, setProperty, setSheet, setSite, setTag, setTitleBlock } from "./fields";
+import { placeText, removeUnderlay, setField, setPort, setProperty, setSheet, setSite, setTag, setTitleBlock, setUnderlay } from "./fields";
 import { paste } from "./paste";
 import { placeEquipment } from "./place";
 import { placeRaceway, removeCompartment, removeStretch, setCompartment, setRaceway, setStretch } from "./raceways";
@@ -24,11 +24,11 @@ const recipes: { readonly [T in Exclude<CommandType, "applySuggestion">]: Recipe
   placeEquipment, moveElements, turnElements, resizeElement, setParent, deleteElements, setProperty, setPort, setField, setTag, joinPorts, setEnd,
   routeCircuit, setSection, splitSection, removeSection, addToRoute, removeFromRoute, placeRaceway, setRaceway, setStretch, removeStretch,
   setCompartment, removeCompartment, placeSensor, setSensor, addBond, setBond, addInterlock, setInterlock, placeText, setSite, setSheet,
-  setTitleBlock, paste,
+  setUnderlay, removeUnderlay, setTitleBlock, paste,
 };
 
 /** Commands that change places on the sheet only. They run while something is dragged and cannot break a reference. */
-const PLACES: ReadonlySet<CommandType> = new Set(["moveElements", "turnElements", "resizeElement", "routeCircuit", "placeText", "setSite", "setSheet", "setTitleBlock"]);
+const PLACES: ReadonlySet<CommandType> = new Set(["moveElements", "turnElements", "resizeElement", "routeCircuit", "placeText", "setSite", "setSheet", "setUnderlay", "removeUnderlay", "setTitleBlock"]);
 
 /** First fault in what the operations touched. Only touched elements are read again, so that a drag stays cheap on a large drawing. */
 function touchedFault(drawing: Drawing, patches: readonly PatchOperation[], type: CommandType): { reason: string; field: string } | null {

@@ -1,7 +1,7 @@
 import type { Draft } from "immer";
 import type { PatchOperation } from "@/lib/diagram/patch";
 import type {
-  Bond, Circuit, Drawing, ElementRef, Endpoint, Equipment, Interlock, Point, PortData, Raceway, Section, Sensor, Sheet, Site, Stretch,
+  Bond, Circuit, Drawing, ElementRef, Endpoint, Equipment, Interlock, Point, PortData, Raceway, Section, Sensor, Sheet, Site, Stretch, Underlay,
 } from "@/lib/diagram/schema";
 import type { KindId } from "@/lib/equipment/registry";
 import type { PropertyValue } from "@/lib/equipment/define";
@@ -49,7 +49,10 @@ export type Command =
   | { type: "setInterlock"; id: string; change: Change<Interlock> }
   | { type: "placeText"; id: string; at: Point; lines: string; style?: "note" | "heading" | "compartment"; keynote?: string | null }
   | { type: "setSite"; change: Change<Site> }
-  | { type: "setSheet"; change: Change<Omit<Sheet, "titleBlock">> }
+  | { type: "setSheet"; change: Change<Omit<Sheet, "titleBlock" | "underlay">> }
+  /** Puts a picture under the drawing, or changes how it lies there. It is never printed. */
+  | { type: "setUnderlay"; change: Change<Underlay> }
+  | { type: "removeUnderlay" }
   | { type: "setTitleBlock"; change: Change<Sheet["titleBlock"]> }
   | { type: "applySuggestion"; label: string; patches: readonly PatchOperation[] }
   | { type: "paste"; content: Fragment; ids: Readonly<Record<string, string>>; dx: number; dy: number };

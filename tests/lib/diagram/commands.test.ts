@@ -39,6 +39,7 @@ const MORE: readonly Command[] = [
   { type: "setSite", change: { edition: "2020" } },
   { type: "setSheet", change: { subtitle: "EXISTING" } },
   { type: "setTitleBlock", change: { owner: "Thorne" } },
+  { type: "setUnderlay", change: { file: "0e0d5c1a-7f7e-4a52-9c59-0b2f5e1c7a11", width: 80, height: 60 } },
   { type: "applySuggestion", label: "Set CB-1 to 45 A", patches: [{ op: "replace", path: "/equipment/cb-a/props/ratingA", value: 45 }] },
   { type: "deleteElements", refs: [ref("equipment", "inverter"), ref("raceways", "way")] },
   { type: "deleteElements", refs: [ref("circuits", "output")] },
@@ -63,13 +64,13 @@ describe("every command", () => {
   }
   it("is here at least once", () => {
     const types = new Set([...SMALL, ...MORE].map((command) => command.type));
-    const elsewhere = ["removeSection", "removeStretch", "removeCompartment", "paste"];
+    const elsewhere = ["removeSection", "removeStretch", "removeCompartment", "removeUnderlay", "paste"];
     // The list of types as the union names them; a new one fails here until it has an example.
     const all: Record<Command["type"], true> = {
       placeEquipment: true, moveElements: true, turnElements: true, resizeElement: true, setParent: true, deleteElements: true, setProperty: true, setPort: true, setField: true,
       setTag: true, joinPorts: true, setEnd: true, routeCircuit: true, setSection: true, splitSection: true, removeSection: true, addToRoute: true, removeFromRoute: true,
       placeRaceway: true, setRaceway: true, setStretch: true, removeStretch: true, setCompartment: true, removeCompartment: true, placeSensor: true, setSensor: true,
-      addBond: true, setBond: true, addInterlock: true, setInterlock: true, placeText: true, setSite: true, setSheet: true, setTitleBlock: true, applySuggestion: true, paste: true,
+      addBond: true, setBond: true, addInterlock: true, setInterlock: true, placeText: true, setSite: true, setSheet: true, setUnderlay: true, removeUnderlay: true, setTitleBlock: true, applySuggestion: true, paste: true,
     };
     expect([...types, ...elsewhere].sort()).toEqual(Object.keys(all).sort());
   });
