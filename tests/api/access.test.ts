@@ -1,50 +1,48 @@
 import { beforeAll, describe, expect, it } from "vitest";
 import { emptyVisit } from "@/lib/diagram/siteVisit";
-import { drawingOf, place, save } from "./support/drawings";
-import { uploadPath, uploaded } from "./support/files";
+import { place, save } from "./support/drawings";
+import { uploadPath } from "./support/files";
 import { png } from "./support/png";
 import { firstAdministrator, inCompany, newJob, ofAnotherCompany, onJob, type Person } from "./support/people";
 import { allRoutes, request, type Call } from "./support/server";
+import { things, type Things } from "./support/things";
 
 let owner: Person & { companyId: string };
 let stranger: Person;
-let twin: Person;
+let twin: Person & { companyId: string; jobId: string };
 let colleague: Person;
 let people: Record<"licensee" | "installer" | "clerk", Person>;
-let ids: Record<"jobId" | "drawingId" | "revisionId" | "memberId" | "membershipId" | "companyId" | "jurisdictionId" | "entryId" | "version" | "fileId" | "visitId", string>;
+/** One of everything that has an address, of the first company and of its twin. */
+let ids: Things;
+let twinIds: Things;
 
 beforeAll(async () => {
   owner = await firstAdministrator();
   const jobId = await newJob(owner);
   const elsewhere = await newJob(owner);
   stranger = await onJob(owner, elsewhere, ["designer", "licensee", "installer", "permit clerk"], "Stranger");
-  twin = await ofAnotherCompany(owner);
+  twin = await ofAnotherCompany();
   colleague = await inCompany(owner, owner.companyId, ["designer"]);
   people = {
     licensee: await onJob(owner, jobId, ["licensee"]), installer: await onJob(owner, jobId, ["installer"]), clerk: await onJob(owner, jobId, ["permit clerk"]),
   };
-  const { id: drawingId } = await drawingOf(owner, jobId);
-  await save(owner, drawingId, 0, place("ds-1", "DS-1"));
-  const issued = await request("POST", `/api/jobs/${jobId}/revisions`, { as: owner, body: { purpose: "issued for permit" } });
-  const members = await request("GET", `/api/jobs/${jobId}/members`, { as: owner });
-  const company = await request("GET", `/api/companies/${owner.companyId}/people`, { as: owner });
-  const library = await request("GET", `/api/companies/${owner.companyId}/library`, { as: owner });
-  const made = await request("POST", "/api/jurisdictions", { as: owner, body: { companyId: owner.companyId, name: "Test barn township", editions: [{ edition: "2023", effectiveFrom: null, effectiveTo: null }] } });
-  const visit = await request("POST", `/api/jobs/${jobId}/visits`, { as: owner, body: { id: "0b0f5e06-6d0e-4a62-9d0f-3b9a5c2f7d11", visitedOn: "2026-11-30", byName: "Test barn visitor", data: emptyVisit() } });
-  ids = {
-    visitId: visit.body.id,
-    jurisdictionId: made.body.id,
-    jobId, drawingId, revisionId: issued.body.id, companyId: owner.companyId, entryId: library.body.entries[0].id, version: "1",
-    fileId: (await uploaded(owner, `/api/jobs/${jobId}`, png(80, 80), "meter.png")).id,
-    memberId: members.body.members.find((each: { userId: string }) => each.userId === people.installer.id).id,
-    membershipId: company.body.people.find((each: { userId: string }) => each.userId === colleague.id).id,
-  };
+  ids = await things(owner, jobId, people.installer, colleague);
+  twinIds = await things(twin, twin.jobId, await onJob(twin, twin.jobId, ["installer"]), await inCompany(twin, twin.companyId, ["designer"]));
 });
 
-const fill = (pattern: string) => pattern.replace(/\[(\w+)\]/g, (_, name: string) => ids[name as keyof typeof ids]);
+/** An address with ids put in; one that is missing would make a test that proves nothing. */
+const fill = (pattern: string, from: Things = ids) => pattern.replace(/\[(\w+)\]/g, (_, name: string) => {
+  const id = from[name as keyof Things];
+  if (!id) throw new Error(`nothing was made for [${name}]`);
+  return id;
+});
 
 /** What the owner sends, and is answered well, on every route that belongs to something. */
 const OWNED: Record<string, { body?: unknown; raw?: BodyInit; type?: string; query?: string; by?: "licensee" | "clerk"; status?: number; /** A designer of another of the company's jobs reads it too. */ shared?: true }> = {
+  "GET /api/companies/[companyId]": {},
+  "PATCH /api/companies/[companyId]": { body: { jobNumberScheme: "{yyyy}-{nnn}" } },
+  "GET /api/companies/[companyId]/audit": {},
+  "GET /api/companies/[companyId]/audit.csv": {},
   "GET /api/companies/[companyId]/people": {},
   "POST /api/companies/[companyId]/people": { body: { email: "new@example.test", name: "New", password: "long enough, really", roles: ["installer"] }, status: 201 },
   "PATCH /api/companies/[companyId]/people/[membershipId]": { body: { roles: ["designer", "installer"] } },
@@ -106,7 +104,8 @@ const OWN = [
 const call = (entry: (typeof OWNED)[string]): Call => ({
   ...(entry.body === undefined ? {} : { body: entry.body }), ...(entry.raw === undefined ? {} : { raw: entry.raw, headers: { "content-type": entry.type ?? "" } }),
 });
-const address = (route: string, entry: (typeof OWNED)[string]) => `${fill(route.split(" ")[1] ?? "")}${entry.query ?? ""}`;
+const address = (route: string, entry: (typeof OWNED)[string], from: Things = ids) => `${fill(route.split(" ")[1] ?? "", from)}${entry.query ?? ""}`;
+const idsOf = (route: string) => [...route.matchAll(/\[(\w+)\]/g)].map(([, name]) => name ?? "").filter((name) => name !== "version");
 const method = (route: string) => route.split(" ")[0] ?? "";
 
 describe("every route", () => {
@@ -125,6 +124,32 @@ describe("every route", () => {
     const answer = await request(method(route), address(route, entry), { ...call(entry), as: twin });
     expect(answer).toMatchObject({ status: 404, body: { code: "not-found" } });
     expect(JSON.stringify(answer.body)).not.toContain("Test barn");
+  });
+
+  it.each(Object.keys(OWNED))("%s of the other company is not there for this one's administrator either", async (route) => {
+    const entry = OWNED[route] ?? {};
+    expect(await request(method(route), address(route, entry, twinIds), { ...call(entry), as: owner })).toMatchObject({ status: 404, body: { code: "not-found" } });
+  });
+
+  // Without it, the refusals above would be as true of things that are nowhere.
+  it.each(Object.keys(OWNED).filter((route) => method(route) === "GET"))("%s of the other company is there for its own", async (route) => {
+    const entry = OWNED[route] ?? {};
+    expect((await request("GET", address(route, entry, twinIds), { ...call(entry), as: twin })).status).toBe(entry.status ?? 200);
+  });
+
+  it.each(Object.keys(OWNED).filter((route) => idsOf(route).length > 1))("%s takes no part of the other company within one's own, nor the other way round", async (route) => {
+    const entry = OWNED[route] ?? {};
+    for (const foreign of idsOf(route)) {
+      const mixed = { ...ids, [foreign]: twinIds[foreign as keyof Things] };
+      for (const as of [owner, twin]) expect(await request(method(route), address(route, entry, mixed), { ...call(entry), as })).toMatchObject({ status: 404, body: { code: "not-found" } });
+    }
+  });
+
+  it.each([...Object.keys(OWNED), ...OWN].filter((route) => method(route) === "GET"))("%s holds nothing of the other company", async (route) => {
+    const entry = OWNED[route] ?? {};
+    const answer = await request("GET", address(route, entry), { ...call(entry), as: owner });
+    const text = answer.bytes.toString("latin1");
+    for (const foreign of [...Object.values(twinIds).filter((id) => id.length > 8), twin.email, "Twin barn", "Southlight"]) expect(text).not.toContain(foreign);
   });
 
   it.each(Object.keys(OWNED).filter((route) => !OWNED[route]?.shared))("%s is not there for a stranger, whatever their roles elsewhere", async (route) => {

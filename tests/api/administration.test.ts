@@ -25,7 +25,7 @@ const table = async (query: string, as: Person = owner) => {
 beforeAll(async () => {
   owner = await firstAdministrator();
   jobId = await newJob(owner, { name: "Recorded barn", number: "R-1" });
-  twin = await ofAnotherCompany(owner);
+  twin = await ofAnotherCompany();
   colleague = await inCompany(owner, owner.companyId, ["designer"]);
 });
 

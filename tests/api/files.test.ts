@@ -15,7 +15,7 @@ let entry: string;
 beforeAll(async () => {
   await ownBucket();
   owner = await firstAdministrator();
-  twin = await ofAnotherCompany(owner);
+  twin = await ofAnotherCompany();
   job = `/api/jobs/${await newJob(owner)}`;
   const library = await request("GET", `/api/companies/${owner.companyId}/library`, { as: owner });
   entry = `/api/library/${library.body.entries[0].id}`;

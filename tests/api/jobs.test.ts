@@ -73,7 +73,7 @@ describe("the register", () => {
     expect(jobs.every((job: { counts: unknown }) => job.counts !== null)).toBe(true);
   });
   it("shows a person of another company none of it, whatever they search", async () => {
-    const twin = await ofAnotherCompany(owner);
+    const twin = await ofAnotherCompany();
     expect(await numbers(twin, "?q=mill")).toEqual([]);
     expect((await list(twin, "?q=barn")).jobs.map((job: { name: string }) => job.name)).toEqual(["Twin barn"]);
     expect((await list(twin)).jurisdictions).toHaveLength(1);

@@ -3,6 +3,7 @@ import { encode } from "next-auth/jwt";
 import type { CredentialsConfig } from "next-auth/providers/credentials";
 import type { Role } from "@/lib/policy";
 import { database } from "@/lib/server/data/database";
+import { seedCompany, seedPerson } from "@/lib/server/data/seeding";
 import { authOptions } from "@/lib/server/auth/options";
 import { request } from "./server";
 
@@ -57,16 +58,18 @@ export async function inCompany(administrator: Person, companyId: string, roles:
   return signedIn(email, "Of the company");
 }
 
-/** Somebody with every role of a company of their own, and of a job in it: the twin who must see nothing of the first one. */
-export async function ofAnotherCompany(administrator: Person & { companyId: string }): Promise<Person & { companyId: string }> {
-  const person = await inCompany(administrator, administrator.companyId, ["administrator", "designer", "licensee", "installer"]);
-  const { Company, Membership } = database();
-  const company = await Company.create({ name: "Southlight Works" });
-  await Membership.update({ companyId: company.id }, { where: { userId: person.id } });
-  const twin = { ...person, companyId: company.id };
-  const jobId = await newJob(twin, { name: "Twin barn" });
+/**
+ * Somebody with every role of a company of their own, and of a job in it: the twin who must see nothing of the first one. The company is
+ * made as seeders make one, since the set-up page takes the first alone.
+ */
+export async function ofAnotherCompany(): Promise<Person & { companyId: string; jobId: string }> {
+  const companyId = await seedCompany("Southlight Works");
+  const email = `${randomUUID()}@example.test`;
+  await seedPerson({ email, name: "Twin", password: PASSWORD, companyId, roles: ["administrator", "designer", "licensee", "installer"] });
+  const person = { ...(await signedIn(email, "Twin")), companyId };
+  const jobId = await newJob(person, { name: "Twin barn" });
   await database().JobMember.update({ roles: ["administrator", "designer", "licensee", "installer", "permit clerk"] }, { where: { jobId, userId: person.id } });
-  return twin;
+  return { ...person, jobId };
 }
 
 export const site = {
