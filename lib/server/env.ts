@@ -34,13 +34,18 @@ let checked: Environment | undefined;
  * @throws Error naming every setting that is missing or wrong, without showing values.
  */
 export function env(): Environment {
-  if (checked) return checked;
+  return (checked ??= read(schema));
+}
+
+const databaseSchema = schema.pick({ DATABASE_URL: true, DATABASE_POOL: true });
+
+/** Settings of the database alone, for scripts that need nothing else. @throws Error as `env` */
+export const databaseEnv = (): z.infer<typeof databaseSchema> => checked ?? read(databaseSchema);
+
+function read<Settings>(wanted: z.ZodType<Settings>): Settings {
   const given = Object.fromEntries(Object.entries(process.env).filter(([, value]) => value !== ""));
-  const result = schema.safeParse(given);
-  if (!result.success) {
-    const problems = result.error.issues.map((issue) => `${issue.path.join(".")}: ${issue.message}`);
-    throw new Error(`Settings are missing or wrong (see .env.example): ${problems.join("; ")}`);
-  }
-  checked = result.data;
-  return checked;
+  const result = wanted.safeParse(given);
+  if (result.success) return result.data;
+  const problems = result.error.issues.map((issue) => `${issue.path.join(".")}: ${issue.message}`);
+  throw new Error(`Settings are missing or wrong (see .env.example): ${problems.join("; ")}`);
 }

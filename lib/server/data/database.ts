@@ -2,7 +2,7 @@ import "server-only";
 import pg from "pg";
 import { Sequelize, Transaction } from "sequelize";
 import * as models from "@/models";
-import { env } from "@/lib/server/env";
+import { databaseEnv } from "@/lib/server/env";
 
 /** No statement of a request may hold a lock longer than this. */
 const STATEMENT_MS = 15_000;
@@ -10,11 +10,12 @@ const STATEMENT_MS = 15_000;
 const holder = globalThis as typeof globalThis & { ferruleSequelize?: Sequelize };
 
 function connect(): Sequelize {
-  return new Sequelize(env().DATABASE_URL, {
+  const { DATABASE_URL, DATABASE_POOL } = databaseEnv();
+  return new Sequelize(DATABASE_URL, {
     dialect: "postgres",
     dialectModule: pg,
     logging: false,
-    pool: { max: env().DATABASE_POOL, min: 0, idle: 10_000, acquire: 20_000 },
+    pool: { max: DATABASE_POOL, min: 0, idle: 10_000, acquire: 20_000 },
     dialectOptions: {
       statement_timeout: STATEMENT_MS,
       lock_timeout: STATEMENT_MS,

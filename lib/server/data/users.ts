@@ -88,17 +88,36 @@ export async function isEmpty(): Promise<boolean> {
  * @throws Problem 404 once there is an account
  */
 export async function setUp(input: SetupInput, request: Pick<Actor, "requestId" | "from">): Promise<void> {
-  const { sequelize, Company, Membership, User } = database();
+  const { sequelize, User } = database();
   await inTransaction(async (transaction) => {
     // Two first visitors at once must not both become administrator.
     await sequelize.query("select pg_advisory_xact_lock(7103401)", { type: QueryTypes.SELECT, transaction });
     if ((await User.count({ transaction })) > 0) throw notFound();
-    const user = await createUser(input, transaction);
-    const company = await Company.create({ name: input.companyName }, { transaction });
-    await Membership.create({ companyId: company.id, userId: user.id, roles: ["administrator", "designer"] }, { transaction });
-    await addStarterSet(company.id, transaction);
-    await audit(transaction, { ...person(user), ...request }, { action: "company.create", subject: `companies/${company.id}`, companyId: company.id });
+    await makeCompany(input, request, transaction);
   });
+}
+
+/**
+ * A company with its administrator, for whoever runs the installation; no request leads here.
+ * @throws Problem 409 when there is a company of this name or an account with this address
+ */
+export async function addCompany(input: SetupInput): Promise<void> {
+  const { sequelize, Company } = database();
+  await inTransaction(async (transaction) => {
+    await sequelize.query("select pg_advisory_xact_lock(7103401)", { type: QueryTypes.SELECT, transaction });
+    const same = sequelize.where(sequelize.fn("lower", sequelize.col("name")), input.companyName.toLowerCase());
+    if ((await Company.count({ where: same, transaction })) > 0) throw conflict("company-there", "There is a company of this name. Its administrators add people on the People page.");
+    await makeCompany(input, { requestId: null, from: null }, transaction);
+  });
+}
+
+async function makeCompany(input: SetupInput, request: Pick<Actor, "requestId" | "from">, transaction: Transaction): Promise<void> {
+  const { Company, Membership } = database();
+  const user = await createUser(input, transaction);
+  const company = await Company.create({ name: input.companyName }, { transaction });
+  await Membership.create({ companyId: company.id, userId: user.id, roles: ["administrator", "designer"] }, { transaction });
+  await addStarterSet(company.id, transaction);
+  await audit(transaction, { ...person(user), ...request }, { action: "company.create", subject: `companies/${company.id}`, companyId: company.id });
 }
 
 /** Changes the password and ends all sessions of the person. */
