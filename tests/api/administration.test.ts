@@ -54,6 +54,16 @@ describe("the records", () => {
     expect((await lines("?person=itself"))[0]).toMatchObject({ action: "revision.sealed", person: null, address: null, note: "Rev Q" });
   });
 
+  it("hold the fields of a job that changed, as they were and as they are, and no others", async () => {
+    const id = await newJob(owner, { name: "Before" });
+    await request("PATCH", `/api/jobs/${id}`, { as: owner, body: { name: "After", parcel: "", dueOn: "2027-01-15", permitFeeCents: 12500, site: { elevationM: 310, designHighC: 35 } } });
+    const [line] = await lines("?action=job.edit");
+    expect([...(line?.changes ?? [])].sort((a, b) => a.field.localeCompare(b.field))).toEqual([
+      { field: "design high, °C", before: "33", after: "35" }, { field: "due on", before: "", after: "2027-01-15" }, { field: "name", before: "Before", after: "After" },
+      { field: "permit fee cents", before: "", after: "12500" },
+    ]);
+  });
+
   it("hold what a person does with their own account for each of their companies, and for no other", async () => {
     const body = { state: "Test State", number: "L-77", title: "PE", expiresOn: "2030-12-31" };
     await request("PUT", "/api/me/license", { as: colleague, body });

@@ -165,7 +165,7 @@ describe("the history of a job", () => {
     await request("PATCH", `/api/jobs/${id}`, { as: owner, body: { dueOn: "2027-01-15" } });
     const { entries, more } = (await request("GET", `/api/jobs/${id}/history`, { as: owner })).body;
     expect(entries.map((each: { what: string }) => each.what)).toEqual(["Changed the job's data", "Changed the drawing, 3 saves", "Made the job"]);
-    expect(entries[0]).toMatchObject({ by: owner.name, detail: "dueOn" });
+    expect(entries[0]).toMatchObject({ by: owner.name, detail: "due on" });
     expect(more).toBe(false);
     const first = (await request("GET", `/api/jobs/${id}/history?limit=1`, { as: owner })).body;
     expect(first).toMatchObject({ more: true, entries: [{ what: "Changed the job's data" }] });

@@ -14,6 +14,7 @@ import { companyAccess, jobAccess, type Actor } from "./actor";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
 import { shownCounts } from "./counts";
+import { jobChanges } from "./jobChanges";
 import { writeSave } from "./journal";
 import { jurisdictionAnswer, makeJurisdiction, visibleJurisdiction } from "./jurisdictions";
 import { draftLetter } from "./letters";
@@ -104,6 +105,7 @@ export async function updateJob(actor: Actor, jobId: string, change: z.output<ty
       if (!drawing) throw notFound();
       const jurisdiction = change.jurisdictionId ? await visibleJurisdiction(change.jurisdictionId, job.companyId, transaction) : null;
       const patches = documentChange(drawing.document, change, jurisdiction);
+      const differences = await jobChanges(job, drawing.document, change, jurisdiction, transaction);
       if (patches.length > 0) {
         await writeSave(drawing, { saveId: randomUUID(), baseSequence: drawing.sequence, patches, title: "Change the job's data", amends: jurisdiction !== null }, actor, transaction);
       }
@@ -114,7 +116,7 @@ export async function updateJob(actor: Actor, jobId: string, change: z.output<ty
         },
         { transaction },
       );
-      await audit(transaction, actor, { action: "job.edit", subject: `jobs/${jobId}`, jobId, detail: { fields: Object.keys(change) } });
+      await audit(transaction, actor, { action: "job.edit", subject: `jobs/${jobId}`, jobId, detail: { fields: Object.keys(differences.after), ...differences } });
     });
   } catch (error) {
     throw numberTaken(error);

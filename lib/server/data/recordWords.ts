@@ -11,8 +11,16 @@ export function valueWords(value: unknown): string {
   return String(value);
 }
 
-/** A field's name as people read it: `expiresOn` → "expires on". */
-export const fieldWords = (name: string): string => name.replace(/([a-z0-9])([A-Z])/g, (_, before: string, after: string) => `${before} ${after.toLowerCase()}`);
+/** Units at the end of a field's name, as they are written. */
+const UNITS: Readonly<Record<string, string>> = { a: "A", c: "°C", ft: "ft", in: "in", m: "m", v: "V", w: "W" };
+
+/** A field's name as people read it: `expiresOn` → "expires on", `designHighC` → "design high, °C". */
+export function fieldWords(name: string): string {
+  const words = name.replace(/([a-z0-9])([A-Z])/g, (_, before: string, after: string) => `${before} ${after.toLowerCase()}`);
+  const unit = /^(.+) (\w{1,2})$/.exec(words);
+  const written = unit && Object.hasOwn(UNITS, unit[2] ?? "") ? UNITS[unit[2] ?? ""] : undefined;
+  return unit && written ? `${unit[1]}, ${written}` : words;
+}
 
 /** What changed, and what else an entry's detail says. */
 export function recordParts(detail: Record<string, unknown>): Pick<RecordLine, "changes" | "facts"> {
