@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { drawingDigest } from "@/lib/diagram/canonical";
 import { checkDocument } from "@/lib/diagram/check";
-import { applyCommand } from "@/lib/diagram/commands";
+import { applyCommand, type Command } from "@/lib/diagram/commands";
 import { check } from "@/lib/rules/engine/run";
 import { sheetSet } from "@/lib/sheets/set";
 import { sheetSvg } from "@/lib/sheets/svg";
@@ -29,12 +29,12 @@ describe("the background under the sheet", () => {
     expect(checkDocument(removed.drawing)).toEqual([]);
     expect(applyCommand(removed.drawing, { type: "removeUnderlay" })).toMatchObject({ ok: false });
   });
-  it.each([
+  it.each<[Command, string]>([
     [{ type: "setUnderlay", change: { hidden: true } }, "before a picture is chosen"],
     [{ type: "setUnderlay", change: { file: "meter.png" } }, "without the id of a file"],
     [{ ...place, change: { ...place.change, opacity: 0.95 } }, "as dark as the drawing"],
     [{ ...place, change: { ...place.change, width: 0 } }, "without a width"],
-  ] as const)("is refused: %o, %s", (command) => {
+  ])("is refused: %o, %s", (command) => {
     expect(applyCommand(smallDrawing(), command)).toMatchObject({ ok: false });
   });
 });
