@@ -4,7 +4,7 @@ const PART = /\{(yyyy|yy|n{2,6})\}/g;
 /** Why a scheme cannot make numbers, going on from its name; null when it can. */
 export function schemeFault(scheme: string): string | null {
   const running = [...scheme.matchAll(PART)].filter(([, part]) => part?.startsWith("n"));
-  if (running.length !== 1) return "holds one running number, such as {nnn}";
+  if (running.length !== 1) return "needs exactly one running number, such as {nnn}";
   const rest = scheme.replace(PART, "");
   if (/[{}]/.test(rest)) return "knows {yy}, {yyyy} and {nn} to {nnnnnn} alone";
   if (!/^[A-Za-z0-9 ./_-]*$/.test(rest)) return "may hold letters, digits, spaces, and . / _ - beside its parts";
