@@ -4,6 +4,7 @@ export const paths = {
   newJob: "/jobs/new",
   job: (jobId: string) => `/jobs/${jobId}`,
   drawing: (jobId: string) => `/jobs/${jobId}/drawing`,
+  visit: (jobId: string) => `/jobs/${jobId}/visit`,
   sheets: (jobId: string) => `/jobs/${jobId}/sheets`,
   revision: (jobId: string, revisionId: string) => `/jobs/${jobId}/review/${revisionId}`,
   jurisdictions: "/jurisdictions",

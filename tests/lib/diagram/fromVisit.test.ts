@@ -140,7 +140,10 @@ describe("lengths, places and raceways", () => {
       { type: "setStretch", raceway: "stub", stretch: "t1", change: { exposure: "roof" } }, { type: "setStretch", raceway: "stub", stretch: "t2", change: { exposure: "indoor dry" } },
       { type: "setStretch", raceway: "stub", stretch: "t3", change: { exposure: "outdoor" } });
     const visit = visitOf({ temperatures: { ...emptyVisit().temperatures, roof: { value: 55, unit: "°C" }, attic: { value: 48, unit: "°C" } } });
-    const ambient = (where: "roof" | "attic") => { const { stretches } = taken(split, visit, { ...NO_CHOICES, raceways: { stub: where } }).raceways["stub"] ?? { stretches: {} }; return ["t1", "t2", "t3"].map((id) => stretches[id]?.ambientC); };
+    const ambient = (where: "roof" | "attic") => {
+      const stub = taken(split, visit, { ...NO_CHOICES, raceways: { stub: where } }).raceways["stub"];
+      return ["t1", "t2", "t3"].map((id) => stub?.stretches[id]?.ambientC);
+    };
     expect(ambient("roof")).toEqual([55, null, null]);
     expect(ambient("attic")).toEqual([null, 48, null]);
   });
