@@ -16,6 +16,20 @@ export interface Carried {
  * storage from batteries or the inverter, loads from the loads or the designer's statement. Null where nothing tells.
  */
 export function carriedBy(context: CheckContext, id: string, reader: Reader): Carried | null {
+  // Many rules ask for the same circuit; what was missing is asked for again by each of them.
+  let known = cache.get(context.graph);
+  if (!known) { known = new Map(); cache.set(context.graph, known); }
+  let answer = known.get(id);
+  if (!answer) {
+    const own = new Reader(context);
+    answer = { carried: workOut(context, id, own), missing: own.missing };
+    known.set(id, answer);
+  }
+  for (const { ref, field, label } of answer.missing) reader.ask(ref, field, label);
+  return answer.carried;
+}
+const cache = new WeakMap<CheckContext["graph"], Map<string, { carried: Carried | null; missing: Reader["missing"] }>>();
+function workOut(context: CheckContext, id: string, reader: Reader): Carried | null {
   const circuit = context.drawing.circuits[id] as Circuit;
   const { side } = topology(context.graph);
   const sides = [side(id, "from"), side(id, "to")] as const;
