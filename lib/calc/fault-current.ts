@@ -150,7 +150,15 @@ function nextNeutral(sheet: Worksheet, input: FaultCurrentInput, segment: FaultS
   return sheet.number("Ifn", late === 1 ? "I × 1 / (1 + f)" : "k × I × 1 / (1 + f)", `${segment.label}: ${shown(previousA, 1)} A, f = ${shown(f)}`, (late * previousA) / (1 + f), "A");
 }
 
-function segmentImpedance(input: FaultCurrentInput, segment: FaultSegment, index: number, phases: 1 | 3): { r: number; x: number; neutralOhm: number } {
+/**
+ * Ω that a stretch of conductors adds to the loop of a bolted fault by the arithmetic method: both conductors of a single-phase fault,
+ * one of a three-phase one. @throws QuantityError or CodeLookupError as `faultCurrent` does.
+ */
+export function stretchLoopOhm(segment: FaultSegment, phases: 1 | 3, resistanceOnly = false): number {
+  return segmentImpedance({ method: "arithmetic", resistanceOnly }, segment, 0, phases).r;
+}
+
+function segmentImpedance(input: Pick<FaultCurrentInput, "method" | "resistanceOnly">, segment: FaultSegment, index: number, phases: 1 | 3): { r: number; x: number; neutralOhm: number } {
   const field = `segments.${index}`;
   const feet = checkNumber(`${field}.lengthFt`, segment.lengthFt, { min: 0, max: 20000, unit: "ft" });
   const sets = checkInteger(`${field}.sets`, segment.sets ?? 1, { min: 1, max: 20, unit: "conductors a phase" });

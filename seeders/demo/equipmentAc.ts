@@ -83,7 +83,7 @@ export function addInterconnect(drawing: DrawingBuilder): void {
   drawing.interlock("IL-1", { kind: "mechanical slide", listed: true, switches: { "cb-u": true, "cb-g": true }, at: { x: 43, y: 16.4 }, note: "LISTED SLIDE" });
 
   drawing.add("generator", "G-1", [58, 1], {
-    make: "Corran", model: "S-14P", listing: "UL 2200", outputKW: 14, outputV: 240, ratedA: 58.3, fuel: "propane", use: "fixed standby", listedParallelWithUtility: false,
+    make: "Corran", model: "S-14P", listing: "UL 2200", outputKW: 14, outputV: 240, ratedA: 58.3, faultA: 480, fuel: "propane", use: "fixed standby", listedParallelWithUtility: false,
     handleHeightIn: 40, clearDepthIn: 48, clearWidthIn: 36, clearHeightIn: 80, enclosureType: "3R",
   }, { page: "G1", location: place("A", "pad 85 ft north", "outdoor", 33), size: { width: 14, height: 12.2 } });
   const gs = drawing.add("breaker", "CB-GS", [61, 8.6], { ...acBreaker(60, 10, "bolt-on", "main"), family: null, lockable: true }, { page: "G3", parent: "g-1", rotation: 90, spaces: [], location: place("A", "pad 85 ft north", "outdoor", 33) });

@@ -1,5 +1,5 @@
 import { defineKind, flag, number, text } from "../define";
-import { acPoles, identity, linePorts, lines, switched, withUnit } from "../shared";
+import { acPoles, identity, linePorts, lines, switched, withUnit, withDeviceAhead } from "../shared";
 
 /** Opened and closed by a control, as the microgrid interconnect device is. */
 export const contactor = defineKind({
@@ -10,6 +10,7 @@ export const contactor = defineKind({
     poles: number("Poles", "", 1, 4, { integer: true, rated: true }),
     voltageV: number("Voltage rating", "V", 1, 1500, { rated: true }),
     shortCircuitKA: number("Short-circuit rating", "kA", 0.1, 300, { rated: true }),
+    ...withDeviceAhead,
     coil: text("Coil", 40),
     interconnectDevice: flag("Opens on loss of the utility by listed control", { rated: true }),
   },

@@ -1,5 +1,5 @@
-import { choice, defineKind, flag, number } from "../define";
-import { acPoles, enclosureProperties, groundPort, identity, linePorts, lines, switched, withUnit } from "../shared";
+import { choice, defineKind, flag, number, text } from "../define";
+import { acPoles, enclosureProperties, groundPort, identity, linePorts, lines, switched, withUnit, withDeviceAhead } from "../shared";
 
 export const disconnect = defineKind({
   kind: "disconnect", title: "Disconnect switch", tagPrefix: "DS", railGroup: "switch and protect",
@@ -9,9 +9,12 @@ export const disconnect = defineKind({
     ratingA: number("Rating", "A", 1, 6000, { rated: true }),
     fuseA: number("Fuse", "A", 0.5, 6000, { rated: true }),
     fused: flag("Fused"),
+    fuseClass: text("Fuse class", 20),
     poles: number("Poles", "", 1, 4, { integer: true, rated: true }),
     voltageV: number("Voltage rating", "V", 1, 1500, { rated: true }),
+    markedDc: flag("Marked for dc", { rated: true }),
     shortCircuitKA: number("Short-circuit rating", "kA", 0.1, 300, { rated: true }),
+    ...withDeviceAhead,
     visibleBlade: flag("Visible blade", { rated: true }),
     lockable: flag("Lockable open", { rated: true }),
     loadBreak: flag("Load break", { rated: true }),

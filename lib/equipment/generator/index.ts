@@ -9,6 +9,7 @@ export const generator = defineKind({
     outputKW: number("Output", "kW", 0.1, 5000, { rated: true }),
     outputV: number("Voltage", "V", 100, 600, { rated: true }),
     ratedA: number("Rated current", "A", 0.1, 8000, { rated: true }),
+    faultA: number("Fault current contribution", "A", 0, 50000, { rated: true }),
     fuel: choice("Fuel", ["propane", "natural gas", "diesel", "gasoline"]),
     use: choice("Use", ["fixed standby", "portable"]),
     listedParallelWithUtility: flag("Listed and set for parallel operation with the utility", { rated: true }),

@@ -1,9 +1,9 @@
 import { defineKind, number } from "../define";
-import { identity, lines, withUnit } from "../shared";
+import { identity, lines, withUnit, withDeviceAhead } from "../shared";
 
 export const meter = defineKind({
   kind: "meter", title: "Utility meter", tagPrefix: "MTR", railGroup: "sources",
-  properties: { ...identity, ratingA: number("Continuous rating", "A", 1, 6000, { rated: true }), voltageV: number("Voltage", "V", 1, 40000, { rated: true }), shortCircuitKA: number("Short-circuit rating", "kA", 0.1, 300, { rated: true }) },
+  properties: { ...identity, ratingA: number("Continuous rating", "A", 1, 6000, { rated: true }), voltageV: number("Voltage", "V", 1, 40000, { rated: true }), shortCircuitKA: number("Short-circuit rating", "kA", 0.1, 300, { rated: true }), ...withDeviceAhead },
   defaults: {},
   capabilities: { service: true },
   symbol: () => "meter",

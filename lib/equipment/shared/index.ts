@@ -13,9 +13,15 @@ export const enclosureProperties = {
   clearWidthIn: number("Clear width", "in", 0, 240, { group: "place" }),
   clearHeightIn: number("Clear height", "in", 0, 240, { group: "place" }),
 } as const;
+/** Rating that holds only behind a device of the named family, fuse class or model, as the marking states it. */
+export const withDeviceAhead = {
+  shortCircuitWithKA: number("Short-circuit rating with the device ahead", "kA", 0.1, 300, { rated: true }),
+  shortCircuitWith: text("Device ahead of that rating: family, fuse class or model", 40, { group: "construction", rated: true }),
+} as const;
 export const busProperties = {
   busA: number("Bus rating", "A", 1, 6000, { rated: true }),
   shortCircuitKA: number("Short-circuit rating", "kA", 0.1, 300, { rated: true }),
+  ...withDeviceAhead,
   breakerFamily: text("Breaker family", 20, { group: "construction" }),
   spacesTotal: number("Spaces", "", 1, 84, { integer: true, group: "construction" }),
   polesMaximum: number("Poles at most", "", 1, 84, { integer: true, group: "construction", rated: true }),

@@ -46,10 +46,10 @@ export const sources: readonly StarterEntry[] = [
   entry("pv-string", "PV string, 10 modules of 550 W", {
     ...modules, modules: 10, moduleW: 550, openCircuitV: 49.8, shortCircuitA: 14, maximumPowerV: 41.7, maximumPowerA: 13.19, seriesFuseA: 25, systemVoltageV: 1500,
   }),
-  entry("generator", "Standby generator, 20 kW, propane", { outputKW: 20, outputV: 240, ratedA: 83.3, fuel: "propane", use: "fixed standby", listedParallelWithUtility: false, enclosureType: "3R", listing: "UL 2200" }, {
+  entry("generator", "Standby generator, 20 kW, propane", { outputKW: 20, outputV: 240, ratedA: 83.3, faultA: 690, fuel: "propane", use: "fixed standby", listedParallelWithUtility: false, enclosureType: "3R", listing: "UL 2200" }, {
     load: { nominalV: 240, continuousA: 83.3, ...terminal("6 AWG", "1/0 AWG", 50) },
   }),
-  entry("generator", "Portable generator, 7.2 kW, gasoline", { outputKW: 7.2, outputV: 240, ratedA: 30, fuel: "gasoline", use: "portable", listedParallelWithUtility: false, listing: "UL 2201" }, {
+  entry("generator", "Portable generator, 7.2 kW, gasoline", { outputKW: 7.2, outputV: 240, ratedA: 30, faultA: 250, fuel: "gasoline", use: "portable", listedParallelWithUtility: false, listing: "UL 2201" }, {
     load: { nominalV: 240, continuousA: 30 },
   }),
   entry("load", "Lighting and receptacles, 120 V", { description: "Lighting and receptacles", use: "general", powerKW: 1.8, currentA: 15, continuous: false, phaseV: 120 }),

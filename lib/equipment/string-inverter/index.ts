@@ -1,5 +1,5 @@
 import { choice, defineKind, flag, number, text, type PortDefinition } from "../define";
-import { enclosureProperties, groundPort, identity, lines, withUnit } from "../shared";
+import { enclosureProperties, groundPort, identity, lines, withUnit, withDeviceAhead } from "../shared";
 
 /** Inverter that follows the voltage of another source and stops without it. */
 export const stringInverter = defineKind({
@@ -12,6 +12,7 @@ export const stringInverter = defineKind({
     faultA: number("Fault current contribution", "A", 0, 5000, { rated: true }),
     maximumOvercurrentA: number("Largest ac overcurrent device", "A", 1, 1000, { rated: true }),
     shortCircuitKA: number("Ac short-circuit rating", "kA", 0.1, 300, { rated: true }),
+    ...withDeviceAhead,
     trackers: number("Trackers", "", 0, 8, { integer: true, rated: true, group: "construction" }),
     pvMaximumV: number("PV input, largest voltage", "V", 10, 1500, { rated: true }),
     pvLeastV: number("PV operating window, low", "V", 0, 1500, { rated: true }),

@@ -1,5 +1,5 @@
 import { choice, defineKind, flag, number } from "../define";
-import { acPoles, enclosureProperties, groundPort, identity, lines, withUnit } from "../shared";
+import { acPoles, enclosureProperties, groundPort, identity, lines, withUnit, withDeviceAhead } from "../shared";
 
 /** Joins its common port to source A or source B, never to both. */
 export const transferSwitch = defineKind({
@@ -13,6 +13,7 @@ export const transferSwitch = defineKind({
     centerOff: flag("Has an off position", { rated: true }),
     voltageV: number("Voltage rating", "V", 1, 1500, { rated: true }),
     shortCircuitKA: number("Short-circuit rating", "kA", 0.1, 300, { rated: true }),
+    ...withDeviceAhead,
   },
   defaults: { poles: 2, switchedNeutral: false, operation: "manual" },
   capabilities: { switching: "transfer", neutralBar: true },
