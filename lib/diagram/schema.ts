@@ -103,6 +103,8 @@ export const terminalSchema = z.strictObject({
   conductorsMost: z.number().int().min(1).max(12).nullable().optional(),
   /** Identified for finely stranded conductors. */
   fineStrand: z.boolean().nullable().optional(),
+  /** True where someone looked and found no temperature marking. */
+  noTemperatureMark: z.boolean().nullable().optional(),
 });
 /** Values marked at one port of one piece of equipment. Left out means: the kind asks for none here. */
 export const portDataSchema = z.strictObject({

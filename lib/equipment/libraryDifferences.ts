@@ -11,6 +11,7 @@ const PORT_FIELDS: Readonly<Record<string, readonly [string, string]>> = {
   maximumOvercurrentA: ["largest overcurrent device", "A"], spare: ["left spare", ""],
   temperatureC: ["terminal temperature", "°C"], metals: ["terminal metals", ""], smallest: ["smallest conductor", ""], largest: ["largest conductor", ""],
   torqueLbfIn: ["torque", "lbf·in"], torqueSource: ["source of the torque", ""], conductorsMost: ["conductors in one terminal at most", ""], fineStrand: ["identified for fine strands", ""],
+  noTemperatureMark: ["without a temperature marking", ""],
 };
 
 const FIELD_ORDER = Object.keys(PORT_FIELDS);

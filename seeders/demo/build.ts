@@ -113,5 +113,5 @@ export const cable = (type: string, outerDiameterIn: number, count = 1, wetListe
 /** Raceways in order; wireways take their only compartment. */
 export const route = (...tags: readonly string[]): Section["route"] => tags.map((tag) => ({ raceway: idOf(tag), compartment: tag.startsWith("WW-") ? "c1" : null }));
 /** Terminal as marked: temperature, wire range, torque. */
-export const terminal = (torqueLbfIn: number, range: readonly [string, string], source: string, metals: "CU" | "AL9CU" = "AL9CU"): PortData =>
-  ({ terminal: { temperatureC: 75, metals, smallest: range[0], largest: range[1], torqueLbfIn, torqueSource: source } });
+export const terminal = (torqueLbfIn: number, range: readonly [string, string], source: string, metals: "CU" | "AL9CU" = "AL9CU", fineStrand: boolean | null = null): PortData =>
+  ({ terminal: { temperatureC: 75, metals, smallest: range[0], largest: range[1], torqueLbfIn, torqueSource: source, fineStrand } });

@@ -19,7 +19,7 @@ export function addInverters(drawing: DrawingBuilder): void {
     const page = { firmware: "H33", maximumOvercurrentA: "H3", pvMaximumV: "H6", trackerA: "H7", batteryA: "H10", neutralRelay: "H31" };
     for (const [name, at] of Object.entries(page)) drawing.equipment[id]!.sources[name] = { document: "HB-78 data sheet", page: at };
     drawing.port(id, "ac", { continuousA: 32.5, maximumOvercurrentA: 50, ...terminal(35, ["14 AWG", "4 AWG"], "H16, instruction") });
-    drawing.port(id, "battery", { maximumA: 175, ...terminal(133, ["4 AWG", "300 kcmil"], "H18, instruction") });
+    drawing.port(id, "battery", { maximumA: 175, ...terminal(133, ["4 AWG", "300 kcmil"], "H18, instruction", "AL9CU", true) });
     const sw = tag.replace("INV", "PVS");
     const left = mirrored ? x - 2.5 : x + 2.5;
     const pvs = drawing.add("pv-switch", sw, [left, 38.3], { channels: 2, voltageV: 600, ratingA: 26, lockable: true, listing: "UL 98B" }, { page: "H9", book: "HB-78 data sheet", parent: id, integral: true, mirrored, location: PLANT });
@@ -35,11 +35,11 @@ export function addStorage(drawing: DrawingBuilder): void {
   drawing.add("dc-bus-cabinet", "DB-1", [68, 29.4], {
     make: "Halden", model: "DB-600", listing: "UL 891", busA: 600, voltageV: 80, shortCircuitKA: 20, grounded: false, enclosureType: "1", handleHeightIn: 68, clearDepthIn: 48, clearWidthIn: 30, clearHeightIn: 80,
   }, { page: "D1", location: PLANT, size: { width: 19.4, height: 8.8 }, bus: { x: 1, y: 4.2, length: 17.4, vertical: false }, label: { x: 0.6, y: -0.5, anchor: "start" } });
-  const dc = (ratingA: number) => ({ current: "battery dc", ratingA, poles: 2, interruptingKA: 20, voltageV: 80, mount: "stud", position: "branch", lineLoadMarked: false, listedHundredPercent: false, trip: "fixed" });
+  const dc = (ratingA: number) => ({ current: "battery dc", ratingA, poles: 2, interruptingKA: 20, voltageV: 80, markedDc: true, mount: "stud", position: "branch", lineLoadMarked: false, listedHundredPercent: false, trip: "fixed" });
   const bolts = [["CB-D2", 70, 250], ["CB-B4", 74, 125], ["CB-B3", 77, 125], ["CB-B2", 80, 125], ["CB-B1", 83, 125], ["CB-D1", 86, 250]] as const;
   for (const [tag, x, ratingA] of bolts) {
     const id = drawing.add("breaker", tag, [x, 33.6], dc(ratingA), { page: "D2", parent: "db-1", rotation: 90, location: PLANT, label: { x: 0, y: -1.75, anchor: "middle" } });
-    const lug = ratingA === 250 ? terminal(221, ["1/0 AWG", "300 kcmil"], "D6, instruction", "CU") : terminal(106, ["4 AWG", "2/0 AWG"], "D6, instruction", "CU");
+    const lug = ratingA === 250 ? terminal(221, ["1/0 AWG", "300 kcmil"], "D6, instruction", "CU", true) : terminal(106, ["4 AWG", "2/0 AWG"], "D6, instruction", "CU", true);
     drawing.port(id, "load", lug);
     drawing.join(`DB-1.bus@${x - 69}`, `${tag}.line`, [[x, 33.6], [x, 33.6]]);
   }
@@ -49,7 +49,7 @@ export function addStorage(drawing: DrawingBuilder): void {
       leadInstruction: "B8", listedSystem: true, enclosureType: "1", handleHeightIn: 72, clearDepthIn: 48, clearWidthIn: 30, clearHeightIn: 80,
     }, { page: "B1", book: "BT-12 data sheet", location: BAY });
     const bb = drawing.add("breaker", `BB-${n}`, [x, 43.4], { ...dc(125), lockable: true }, { page: "B4", book: "BT-12 data sheet", parent: `bt-${n}`, integral: true, rotation: 270, location: BAY });
-    drawing.port(bb, "load", terminal(106, ["4 AWG", "2/0 AWG"], "B6, instruction", "CU"));
+    drawing.port(bb, "load", terminal(106, ["4 AWG", "2/0 AWG"], "B6, instruction", "CU", true));
     drawing.join(`BT-${n}.dc`, `BB-${n}.line`);
     // The lead lands at the pack's own terminal: the integral breaker has no length on the sheet.
     drawing.equipment[bb]!.at = { x, y: 46.4 };

@@ -103,8 +103,17 @@ function PortFields({ id, port }: { id: string; port: PortInfo }) {
       {text("largest", "Largest wire", terminal?.largest)}
       <TextField label="Torque" unit="lbf·in" value={showValue(terminal?.torqueLbfIn)} readOnly={readOnly} mark={mark(`${base}.terminal.torqueLbfIn`)} onCommit={(typed) => { const answer = readNumber(typed, "lbf·in", 0.5, 5000); return answer.ok ? setTerminal("torqueLbfIn", answer.value) : answer.reason; }} />
       {text("torqueSource", "Torque from", terminal?.torqueSource)}
+      <TextField label="Conductors in one" value={showValue(terminal?.conductorsMost)} readOnly={readOnly} mark={mark(`${base}.terminal.conductorsMost`)} onCommit={(typed) => { const answer = readNumber(typed, "", 1, 12); return answer.ok ? setTerminal("conductorsMost", answer.value) : answer.reason; }} />
+      <YesNo label="For fine strands" value={terminal?.fineStrand} readOnly={readOnly} mark={mark(`${base}.terminal.fineStrand`)} onCommit={(value) => setTerminal("fineStrand", value)} />
+      {(terminal?.temperatureC ?? null) === null && <YesNo label="No °C mark found" value={terminal?.noTemperatureMark} readOnly={readOnly} mark={mark(`${base}.terminal.noTemperatureMark`)} onCommit={(value) => setTerminal("noTemperatureMark", value)} />}
     </FieldGroup>
   );
+}
+
+type Choice = Parameters<typeof ChoiceField>[0];
+/** A fact that is yes, no or not known. */
+function YesNo({ value, onCommit, ...rest }: Pick<Choice, "label" | "readOnly" | "mark"> & { value: boolean | null | undefined; onCommit: (value: boolean | null) => string | null }) {
+  return <ChoiceField {...rest} value={value === true ? "yes" : value === false ? "no" : ""} options={["yes", "no"]} onCommit={(chosen) => onCommit(chosen === "" ? null : chosen === "yes")} />;
 }
 
 function Landed({ id }: { id: string }) {

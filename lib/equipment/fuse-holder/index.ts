@@ -11,6 +11,7 @@ export const fuseHolder = defineKind({
     poles: number("Poles", "", 1, 4, { integer: true, rated: true }),
     interruptingKA: number("Interrupting rating", "kA", 0.1, 300, { rated: true }),
     voltageV: number("Voltage rating", "V", 1, 2000, { rated: true }),
+    markedDc: flag("Marked for dc", { rated: true }),
     fuseClass: text("Fuse class", 20),
     fingerSafe: flag("Finger-safe holder", { rated: true }),
   },

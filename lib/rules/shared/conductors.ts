@@ -45,7 +45,9 @@ export function terminalsOf(context: CheckContext, id: string, ratingA: number |
   const ends = (["from", "to"] as const).flatMap((end: End): { at: string; c: Column }[] => {
     const { equipment, port } = circuit[end];
     const { source } = context.graph.kind(equipment).capabilities;
-    const marked = context.graph.port(equipment, port)?.data.terminal?.temperatureC ?? null;
+    const { temperatureC: marked = null, noTemperatureMark } = context.graph.port(equipment, port)?.data.terminal ?? {};
+    // What nobody marked has a rule of its own.
+    if (marked === null && noTemperatureMark === true) return [];
     if (marked !== null) return [{ at: equipment, c: marked }];
     if (source === "pv" || source === "utility") return [];
     unmarked.push({ equipment, port });
