@@ -50,6 +50,7 @@ function Desk({ job, issueOpen }: { job: JobAnswer; issueOpen: boolean }) {
           <RedlineCounts counts={job.counts} />
           <span className="text-text text-ink2">changed {whenInSentence(job.changedAt)}</span>
           {job.may.viewDrawing && <LinkButton href={paths.drawing(job.id)} look="primary">Open the drawing</LinkButton>}
+          {job.may.viewDrawing && <LinkButton href={paths.visit(job.id)}>Site visit</LinkButton>}
           {job.may.viewDrawing && !job.empty && <LinkButton href={paths.sheets(job.id)}>Sheets</LinkButton>}
         </div>
       </div>

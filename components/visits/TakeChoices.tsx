@@ -24,6 +24,7 @@ export function TakeChoices({ drawing, data, choices, onChange }: Props) {
   const raceways = Object.entries(drawing.raceways).sort(([, a], [, b]) => a.tag.localeCompare(b.tag, "en", { numeric: true }));
   const rows = [...data.panels.filter((each) => each.busA !== null || each.mainA !== null || each.name !== null), ...data.lengths.filter((each) => each.lengthFt !== null), ...data.places];
   const over = (["roof", "attic"] as const).filter((where) => data.temperatures[where] !== null || (where === "roof" && data.roof.conduitAboveRoofIn !== null));
+  const chosenWords = raceways.flatMap(([id, raceway]) => (choices.raceways[id] ? [`${raceway.tag} ${choices.raceways[id]}`] : [])).join(", ") || "none";
   if (rows.length === 0 && over.length === 0) return null;
   const kindOf = (choice: PanelChoice | undefined) => (!choice || choice.as === "nothing" ? "" : choice.as === "update" ? choice.id : `new ${choice.as}`);
   const asPanel = (value: string): PanelChoice =>
@@ -59,9 +60,9 @@ export function TakeChoices({ drawing, data, choices, onChange }: Props) {
         </SelectField>
       ))}
       {over.length > 0 && raceways.length > 0 && (
-        <fieldset className="col-span-full min-w-0">
-          <legend className="mb-1 text-body font-medium text-ink2">Raceways on the roof or through the attic</legend>
-          <div className="grid grid-cols-4 gap-2 phone:grid-cols-2">
+        <details className="col-span-full min-w-0">
+          <summary className="cursor-pointer text-text"><span className="font-medium text-ink2">Raceways on the roof or through the attic: </span>{chosenWords}</summary>
+          <div className="mt-3 grid grid-cols-4 gap-2 phone:grid-cols-2">
             {raceways.map(([id, raceway]) => (
               <label key={id} className="flex items-center gap-2 border border-g1 py-1 pr-1 pl-3 text-text">
                 <span className="min-w-0 flex-1 truncate">{raceway.tag}</span>
@@ -73,7 +74,7 @@ export function TakeChoices({ drawing, data, choices, onChange }: Props) {
               </label>
             ))}
           </div>
-        </fieldset>
+        </details>
       )}
     </div>
   );

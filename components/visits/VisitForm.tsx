@@ -57,7 +57,7 @@ export function VisitForm() {
           <Head label="Who was there" type="text" value={state.content.byName} readOnly={readOnly} onChange={(byName) => setHead({ byName })} />
         </div>
         {PARTS.map(({ part, Body }) => (
-          <section key={part} id={`visit-${part}`} aria-labelledby={`visit-${part}-title`} className="scroll-mt-4 border-b border-g1 px-6 py-6 last:border-b-0 phone:px-4">
+          <section key={part} id={`visit-${part}`} aria-labelledby={`visit-${part}-title`} className="scroll-mt-4 border-b phone:scroll-mt-[64px] border-g1 px-6 py-6 last:border-b-0 phone:px-4">
             <h2 id={`visit-${part}-title`} className="mb-4 text-heading font-heading stretch-heading">{PART_WORDS[part]}</h2>
             <div className="grid grid-cols-2 gap-x-5 gap-y-5 phone:grid-cols-1"><Body /></div>
           </section>

@@ -61,9 +61,12 @@ function Visits({ jobId, answer, kept, name }: { jobId: string; answer: VisitsAn
   const picker = (
     <div className="flex items-center gap-2">
       {all.length > 1 && (
-        <select aria-label="Visit" className="h-target min-w-0 max-w-72 flex-1 border border-rule bg-paper px-3 text-finding" value={chosen ?? ""} onChange={(event) => setChosen(event.target.value)}>
-          {all.map((each) => <option key={each.id} value={each.id}>{each.words}</option>)}
-        </select>
+        <span className="relative min-w-0 flex-1">
+          <select aria-label="Visit" className="h-target w-full max-w-80 appearance-none border border-rule bg-paper pr-9 pl-3 text-finding" value={chosen ?? ""} onChange={(event) => setChosen(event.target.value)}>
+            {all.map((each) => <option key={each.id} value={each.id}>{each.words}</option>)}
+          </select>
+          <svg viewBox="0 0 12 8" className="pointer-events-none absolute top-5 right-3 h-2 w-3" aria-hidden="true"><path d="M1 1.5L6 6.5L11 1.5" fill="none" stroke="currentColor" strokeWidth="1.6" /></svg>
+        </span>
       )}
       {answer.may.edit && <Button className="!h-target" onClick={begin}>New visit</Button>}
     </div>
@@ -113,7 +116,7 @@ function Open({ jobId, visitId, answer, stored, kept, blank, picker }: OpenProps
       <Head jobId={jobId} answer={answer}>
         <div className="flex items-center gap-3"><div className="phone:hidden">{picker}</div><SaveStamp /></div>
       </Head>
-      <div className="phone:px-4 phone:pt-3"><SaveTrouble onFlush={() => { void open.keeper.flush(); open.queue.flush(); }} onSettle={(prefer) => open.keeper.settle(prefer)} /></div>
+      <div className="phone:px-4 phone:[&:not(:empty)]:pt-3"><SaveTrouble onFlush={() => { void open.keeper.flush(); open.queue.flush(); }} onSettle={(prefer) => open.keeper.settle(prefer)} /></div>
       {taking ? <TakeOver jobId={jobId} content={open.state.content} onBack={() => setTaking(false)} /> : (
         <>
           <div className="hidden border-b border-g1 bg-paper px-4 py-3 phone:block">{picker}</div>

@@ -7,8 +7,10 @@ import { temperatureWords } from "@/lib/diagram/fromVisit";
 import { parseConductorSize } from "@/lib/units";
 import { useVisitForm } from "./visitContext";
 
-const CONTROL = "w-full min-w-0 border border-rule bg-paper px-3 text-field text-ink placeholder:text-text placeholder:text-ink3 read-only:bg-panel disabled:bg-panel disabled:text-ink2 aria-invalid:border-2 aria-invalid:border-red";
+const CONTROL = "w-full min-w-0 border border-rule bg-paper px-3 text-field text-ink placeholder:text-text placeholder:text-ink3 disabled:bg-panel disabled:text-ink2 aria-invalid:border-2 aria-invalid:border-red";
 const BOX = `h-target ${CONTROL}`;
+/** Only for what is typed into: to a browser a list of choices is always read-only. */
+const INPUT = `${BOX} read-only:bg-panel`;
 const EMPTY = "not looked at";
 
 interface Around { label: string; unit?: string; hint?: string | undefined; error?: string | null; wide?: boolean }
@@ -29,7 +31,7 @@ export function TextBox({ value, onChange, max, placeholder = EMPTY, ...around }
   const { readOnly } = useVisitForm();
   return (
     <Field {...around}>
-      {({ id, describedBy }) => <input id={id} aria-describedby={describedBy} className={BOX} value={value ?? ""} maxLength={max} readOnly={readOnly} placeholder={placeholder} onChange={(event) => onChange(event.target.value || null)} />}
+      {({ id, describedBy }) => <input id={id} aria-describedby={describedBy} className={INPUT} value={value ?? ""} maxLength={max} readOnly={readOnly} placeholder={placeholder} onChange={(event) => onChange(event.target.value || null)} />}
     </Field>
   );
 }
@@ -39,7 +41,7 @@ export function LongBox({ value, onChange, max, rows = 2, placeholder = EMPTY, .
   const { readOnly } = useVisitForm();
   return (
     <Field wide {...around}>
-      {({ id, describedBy }) => <textarea id={id} aria-describedby={describedBy} rows={rows} className={`block min-h-target resize-y py-2.5 ${CONTROL}`} value={value ?? ""} maxLength={max} readOnly={readOnly} placeholder={placeholder} onChange={(event) => onChange(event.target.value || null)} />}
+      {({ id, describedBy }) => <textarea id={id} aria-describedby={describedBy} rows={rows} className={`block min-h-target resize-y py-2.5 read-only:bg-panel ${CONTROL}`} value={value ?? ""} maxLength={max} readOnly={readOnly} placeholder={placeholder} onChange={(event) => onChange(event.target.value || null)} />}
     </Field>
   );
 }
@@ -56,7 +58,7 @@ function ReadBox({ name, shown, placeholder = EMPTY, inputMode = "text", read, o
     <Field {...around} error={editing === null && answer && !answer.ok ? `${kept}: ${answer.reason}.` : null}>
       {({ id, describedBy }) => (
         <input
-          id={id} aria-describedby={describedBy} aria-invalid={(editing === null && kept !== undefined) || undefined} inputMode={inputMode} autoComplete="off" className={`${BOX} tabular-nums`}
+          id={id} aria-describedby={describedBy} aria-invalid={(editing === null && kept !== undefined) || undefined} inputMode={inputMode} autoComplete="off" className={`${INPUT} tabular-nums`}
           value={editing ?? kept ?? shown} readOnly={readOnly} placeholder={placeholder} maxLength={40}
           onChange={(event) => {
             const text = event.target.value;
@@ -156,7 +158,7 @@ export function TemperatureBox({ name, value, onChange, ...around }: Temperature
       <div className="min-w-0 flex-1">
         <NumberBox {...around} {...(value ? { hint: value.unit === "°F" ? temperatureWords(value) : around.hint } : {})} label={around.label} name={name} unit={unit} value={value?.value ?? null} least={least} most={most} onChange={(number) => onChange(number === null ? null : { value: number, unit })} />
       </div>
-      <div className={value?.unit === "°F" || around.hint ? "pb-[26px]" : ""}>
+      <div className={value?.unit === "°F" || around.hint ? "pb-[22px]" : ""}>
         <Buttons label={`Unit of ${around.label.toLowerCase()}`} small value={unit} options={TEMPERATURE_UNITS} onChange={turn} />
       </div>
     </div>

@@ -12,7 +12,9 @@ export interface PortRef { readonly equipment: string; readonly port: string; re
 export type Tool =
   | { readonly kind: "select" }
   | { readonly kind: "place"; readonly part: PartId }
-  | { readonly kind: "join"; readonly from: PortRef | null };
+  | { readonly kind: "join"; readonly from: PortRef | null }
+  /** The picture under the drawing is moved and sized; nothing else is. */
+  | { readonly kind: "underlay" };
 
 export const SELECT: Tool = { kind: "select" };
 

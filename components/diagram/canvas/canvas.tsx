@@ -11,13 +11,14 @@ import { ElementView } from "./elementView";
 import { createFlow, nodeId, refOf } from "./flow";
 import { Overlay } from "./overlay";
 import { SHEET_NODE, SheetView } from "./sheetView";
+import { UNDERLAY_ID, UnderlayView, underlayNode } from "./underlayView";
 import { useDragging } from "./useDragging";
 import { useJoining } from "./useJoining";
 import { usePlacing } from "./usePlacing";
 import { useReveal } from "./useReveal";
 import { DETAIL_ZOOM, useCanvasView, ZOOM } from "./view";
 
-const NODE_TYPES = { element: ElementView, sheet: SheetView };
+const NODE_TYPES = { element: ElementView, sheet: SheetView, underlay: UnderlayView };
 const EDGE_TYPES = { circuit: CircuitView };
 const MIDDLE_AND_RIGHT = [1, 2];
 
@@ -34,15 +35,16 @@ export function Canvas({ start }: { start: { x: number; y: number; zoom: number 
   const [flowOf] = useState(createFlow);
   const flow = useMemo(() => flowOf(graph, { detail }), [flowOf, graph, detail]);
 
-  const { onPositions, onDragStop, resize, bend } = useDragging(flow.nodes);
+  const { onPositions, onDragStop, resize, bend, adjustUnderlay } = useDragging(flow.nodes);
   const { preview, grabPort, pressSheet } = useJoining();
   const { ghost, part, place } = usePlacing(frame);
   useReveal();
 
+  const underlay = useEditor((editor) => (editor.tool.kind === "underlay" ? editor.drawing.sheet.underlay : undefined));
   const nodes = useMemo(() => [SHEET_NODE, ...flow.nodes.map((node) => {
     const selected = selection.some((ref) => nodeId(ref) === node.id);
-    return { ...node, selected, draggable: !readOnly && node.data.hit !== "none", selectable: node.data.hit !== "none" };
-  })], [flow.nodes, selection, readOnly]);
+    return { ...node, selected, draggable: !readOnly && node.data.hit !== "none" && !underlay, selectable: node.data.hit !== "none" };
+  }), ...(underlay ? [underlayNode(underlay)] : [])], [flow.nodes, selection, readOnly, underlay]);
   const edges = useMemo(() => flow.edges.map((edge) => ({ ...edge, selected: selection.some((ref) => nodeId(ref) === edge.id) })), [flow.edges, selection]);
 
   const changeSelection = useCallback((changes: readonly { id: string; selected: boolean }[]): void => {
@@ -54,7 +56,7 @@ export function Canvas({ start }: { start: { x: number; y: number; zoom: number 
     select([...kept, ...on.filter((ref, index) => !kept.some((other) => sameRef(other, ref)) && on.findIndex((other) => sameRef(other, ref)) === index)]);
   }, [store]);
   const onNodesChange = useCallback((changes: NodeChange[]): void => {
-    changeSelection(changes.flatMap((change) => (change.type === "select" && change.id !== SHEET_NODE.id ? [change] : [])));
+    changeSelection(changes.flatMap((change) => (change.type === "select" && change.id !== SHEET_NODE.id && change.id !== UNDERLAY_ID ? [change] : [])));
     if (!readOnly) onPositions(changes);
   }, [changeSelection, onPositions, readOnly]);
   const onEdgesChange = useCallback((changes: EdgeChange[]): void => {
@@ -70,15 +72,15 @@ export function Canvas({ start }: { start: { x: number; y: number; zoom: number 
     const { selection: now, select: choose } = store.getState();
     choose(add ? [...now.filter((other) => !sameRef(other, ref)), ...(now.some((other) => sameRef(other, ref)) ? [] : [ref])] : [ref]);
   }, [store]);
-  const actions = useMemo<CanvasActions>(() => ({ grabPort, choosePort, resize, bend, select }), [grabPort, choosePort, resize, bend, select]);
+  const actions = useMemo<CanvasActions>(() => ({ grabPort, choosePort, resize, bend, select, adjustUnderlay }), [grabPort, choosePort, resize, bend, select, adjustUnderlay]);
 
   // While a tool is on, a press on the sheet belongs to the tool, whatever lies there.
-  const toTool = (event: MouseEvent): boolean => tool.kind !== "select" && event.button === 0 && !(tool.kind === "join" && event.target instanceof Element && event.target.closest("[data-port]"));
+  const toTool = (event: MouseEvent): boolean => (tool.kind === "place" || tool.kind === "join") && event.button === 0 && !(tool.kind === "join" && event.target instanceof Element && event.target.closest("[data-port]"));
   const swallow = (event: MouseEvent): void => { if (toTool(event)) { event.stopPropagation(); if (event.type === "mousedown") event.preventDefault(); } };
   return (
     <CanvasActionsContext.Provider value={actions}>
       <div
-        ref={frame} className={`dimmed-sheet absolute inset-0 [&_.react-flow__nodesselection]:hidden [&_.react-flow__selection]:border [&_.react-flow__selection]:border-copper [&_.react-flow__selection]:bg-copper/10 ${tool.kind === "select" ? "" : "[&_*]:!cursor-crosshair"}`} data-testid="canvas" tabIndex={-1}
+        ref={frame} className={`dimmed-sheet absolute inset-0 [&_.react-flow__nodesselection]:hidden [&_.react-flow__selection]:border [&_.react-flow__selection]:border-copper [&_.react-flow__selection]:bg-copper/10 ${tool.kind === "place" || tool.kind === "join" ? "[&_*]:!cursor-crosshair" : ""}`} data-testid="canvas" tabIndex={-1}
         onPointerDownCapture={swallow} onMouseDownCapture={swallow}
         onClickCapture={(event) => {
           if (!toTool(event)) return;

@@ -12,7 +12,9 @@ export interface CanvasActions {
   resize: (ref: ElementRef, corner: Corner, event: PointerEvent) => void;
   bend: (circuit: string, segment: number, event: PointerEvent) => void;
   select: (ref: ElementRef, add: boolean) => void;
+  /** Moves the background, or with a corner sizes it. */
+  adjustUnderlay: (corner: Corner | null, event: PointerEvent) => void;
 }
 const nothing = (): void => undefined;
-export const CanvasActionsContext = createContext<CanvasActions>({ grabPort: nothing, choosePort: nothing, resize: nothing, bend: nothing, select: nothing });
+export const CanvasActionsContext = createContext<CanvasActions>({ grabPort: nothing, choosePort: nothing, resize: nothing, bend: nothing, select: nothing, adjustUnderlay: nothing });
 export const useCanvasActions = (): CanvasActions => useContext(CanvasActionsContext);

@@ -7,6 +7,7 @@ import { drawingArea, framePrimitives, INNER_PX } from "@/lib/sheets/frame";
 import { PX_PER_UNIT } from "@/lib/sheets/primitives";
 import { sheetGeometry } from "@/lib/sheets/size";
 import { TitleBlock } from "./titleBlock";
+import { Underlay } from "./underlayView";
 import { DETAIL_ZOOM, useCanvasView } from "./view";
 
 /** The paper under everything; it is seen, never picked. */
@@ -19,7 +20,8 @@ export const SHEET_NODE: Node = {
 export const SheetView = memo(function SheetView() {
   const sheet = useEditor((editor) => editor.drawing.sheet);
   const geometry = useMemo(() => sheetGeometry(sheet.size), [sheet.size]);
-  const frame = useMemo(() => framePrimitives(geometry), [geometry]);
+  // The paper comes first; what lies under the drawing lies on it, and everything else over that.
+  const [paper, ...frame] = useMemo(() => framePrimitives(geometry), [geometry]);
   const area = drawingArea(geometry);
   const small = useCanvasView().zoom < DETAIL_ZOOM;
   return (
@@ -30,6 +32,8 @@ export const SheetView = memo(function SheetView() {
         </pattern>
       </defs>
       <rect width={geometry.widthPx} height={geometry.heightPx} className="fill-paper stroke-rule" strokeWidth={1} />
+      {paper && <PrimitiveShapes primitives={[paper]} />}
+      <Underlay widthPx={geometry.widthPx} heightPx={geometry.heightPx} />
       <PrimitiveShapes primitives={frame} />
       <rect x={area.left + 1} y={area.top + 1} width={area.right - area.left - 2} height={area.bottom - area.top - 2} fill="url(#sheet-grid)" />
       <TitleBlock geometry={geometry} small={small} />

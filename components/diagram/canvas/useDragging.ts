@@ -1,6 +1,7 @@
 import { useCallback, useRef, type PointerEvent as ReactPointerEvent } from "react";
 import { useReactFlow, type NodeChange } from "reactflow";
 import { bendEdit, moveEdit, resizeEdit, settleMove } from "@/components/diagram/actions/moveEdit";
+import { underlayEdit } from "@/components/diagram/actions/underlayEdit";
 import { useEditorStore } from "@/components/diagram/editorContext";
 import type { DrawingGraph } from "@/lib/diagram/graph";
 import type { ElementRef, Point } from "@/lib/diagram/schema";
@@ -94,5 +95,11 @@ export function useDragging(nodes: readonly ElementNode[]) {
     });
   }, [gesture, store]);
 
-  return { onPositions, onDragStop, resize, bend };
+  const adjustUnderlay = useCallback((corner: Corner | null, event: ReactPointerEvent): void => {
+    const { drawing: { sheet: { underlay } }, preview } = store.getState();
+    if (!underlay) return;
+    gesture(event, (at, start) => preview([underlayEdit(underlay, corner, at.x - start.x, at.y - start.y)]));
+  }, [gesture, store]);
+
+  return { onPositions, onDragStop, resize, bend, adjustUnderlay };
 }

@@ -5,6 +5,7 @@ import { editionName } from "@/lib/code/adoption";
 import { readNumber, showValue } from "@/lib/client/readField";
 import { OCCUPANCIES, type Drawing } from "@/lib/diagram/schema";
 import { ChoiceField, FieldGroup, TextField } from "./fields";
+import { UnderlayForm } from "./underlayForm";
 
 /** Data of the whole sheet, shown while nothing is selected. */
 export function SheetForm() {
@@ -32,6 +33,7 @@ export function SheetForm() {
         {number("availableFaultCurrentA", "Fault current", "A", 0, 200000)}
         <TextField label="Utility" wide value={site.utilityName ?? ""} readOnly={readOnly} onCommit={(text) => set("site.utilityName", text.trim() || null, "utility")} />
       </FieldGroup>
+      <UnderlayForm />
       <FieldGroup title="Title block" open={false}>
         {block("designedBy", "Designed by")}
         {block("checkedBy", "Checked by")}

@@ -30,7 +30,9 @@ function copyOf(document: DrawingDocument, name: string, number: string, whole: 
   const titleBlock = { ...document.sheet.titleBlock, jobName: name, jobNumber: number, permitNumber: "", checkedBy: "" };
   if (!whole) return emptyDrawing(document.site, titleBlock);
   const { statements: _, ...rest } = document;
-  return { ...rest, sheet: { ...document.sheet, titleBlock }, acceptances: {} };
+  // The picture under the sheet is of the old job's site, and one of its files.
+  const { underlay: __, ...sheet } = document.sheet;
+  return { ...rest, sheet: { ...sheet, titleBlock }, acceptances: {} };
 }
 
 /** Makes another job like this one. Who does it is its administrator, and designer where they design in the company. */
