@@ -30,7 +30,7 @@ export function Rows<P extends Part>({ part, noun, empty, make, title, children 
       {rows.map((row, index) => (
         <fieldset key={row.id} className="min-w-0 border border-rule bg-paper">
           <legend className="sr-only">{title(row) ?? `${noun} ${index + 1}`}</legend>
-          <div className="flex min-h-target items-center justify-between gap-3 border-b border-g1 bg-vellum pl-4" aria-hidden={undefined}>
+          <div className="flex min-h-target items-center justify-between gap-3 border-b border-g1 bg-vellum pl-4">
             <p className="min-w-0 truncate text-finding font-heading">{title(row) ?? <span className="first-letter:uppercase inline-block">{noun} {index + 1}</span>}</p>
             {!readOnly && (
               <button type="button" className="h-target shrink-0 px-4 text-text underline underline-offset-4" aria-label={`Remove ${title(row) ?? `${noun} ${index + 1}`}`} onClick={() => { setRemoved({ row, index }); removeRow(part, row.id); }}>Remove</button>

@@ -25,7 +25,7 @@ export function TakeOver({ jobId, content, onBack }: Props) {
       <div className="flex flex-wrap items-center justify-between gap-3 border-b-[1.5px] border-ink px-6 py-4 phone:px-4">
         <div>
           <h2 id="take-title" className="text-heading font-heading stretch-heading">Take into the drawing</h2>
-          <p className="text-text text-ink2">Source of every value: {visitSource(content)}.</p>
+          <p className="text-text text-ink2">From the {visitSource(content)}.</p>
         </div>
         <Button className="phone:!h-target" onClick={onBack}>Back to the visit</Button>
       </div>
@@ -75,7 +75,7 @@ function Taking({ jobId, answer, content, job, onReread }: { jobId: string; answ
     return (
       <div className="px-6 py-8 phone:px-4" role="status">
         <p className="text-heading font-heading stretch-heading">{done.back ? "It was taken back." : `${done.count === 1 ? "One value is" : `${done.count} values are`} in the drawing.`}</p>
-        <p className="mt-1 max-w-[60ch] text-finding text-ink2">{done.back ? "The drawing is as it was before." : "They were saved as one change, with the visit as their source. New panels stand where there was room; move them to where they belong."}</p>
+        <p className="mt-1 max-w-[60ch] text-finding text-ink2">{done.back ? "The drawing is as it was before." : "They were saved as one change; ratings name the visit as their source. New panels stand where there was room; move them to where they belong."}</p>
         <div className="mt-5 flex flex-wrap items-center gap-2">
           <LinkButton href={paths.drawing(jobId)} look="primary" className="phone:!h-target">Open the drawing</LinkButton>
           {!done.back && <Button className="phone:!h-target" busy={busy} onClick={() => void undo()}>Take it back</Button>}

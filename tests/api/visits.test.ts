@@ -1,9 +1,12 @@
 import { randomUUID } from "node:crypto";
 import { QueryTypes } from "sequelize";
 import { beforeAll, describe, expect, it } from "vitest";
+import { drawingDigest } from "@/lib/diagram/canonical";
+import { applyCommand } from "@/lib/diagram/commands";
 import { emptyRow, emptyVisit, type VisitData } from "@/lib/diagram/siteVisit";
 import { database } from "@/lib/server/data/database";
 import { down, up } from "@/migrations/0009-site-visits";
+import { drawingOf, save } from "./support/drawings";
 import { uploaded } from "./support/files";
 import { png } from "./support/png";
 import { firstAdministrator, newJob, onJob, type Person } from "./support/people";
@@ -118,6 +121,23 @@ describe("a site visit", () => {
     expect(await change(owner, made.id, { version: 1, byName: "x" })).toMatchObject({ status: 409, body: { code: "job-archived" } });
     expect((await add(owner, bodyOf(), job)).status).toBe(409);
     expect((await request("GET", `/api/jobs/${job}/visits`, { as: owner })).body.may).toEqual({ edit: false, take: false });
+  });
+});
+
+describe("the picture under the sheet", () => {
+  it("is saved like any other edit, leaves the digest as it is, and stays with its own job when that is copied", async () => {
+    const job = await newJob(owner);
+    const file = (await uploaded(owner, `/api/jobs/${job}`, png(62, 60), "sketch.png", "background")).id;
+    const { id, sequence, drawing } = await drawingOf(owner, job);
+    const placed = applyCommand(drawing, { type: "setUnderlay", change: { file, width: 30, height: 20 } });
+    if (!placed.ok) throw new Error(placed.reason);
+    expect((await save(owner, id, sequence, placed.patches)).status).toBe(200);
+    const now = (await drawingOf(owner, job)).drawing;
+    expect(now.sheet.underlay).toMatchObject({ file, opacity: 0.35 });
+    expect(drawingDigest(now, "1")).toBe(drawingDigest(drawing, "1"));
+    const copy = await request("POST", `/api/jobs/${job}/duplicate`, { as: owner, body: { number: `C-${randomUUID().slice(0, 8)}`, name: "A copy", drawing: true } });
+    expect(copy.status).toBe(201);
+    expect((await drawingOf(owner, copy.body.id)).drawing.sheet).not.toHaveProperty("underlay");
   });
 });
 
