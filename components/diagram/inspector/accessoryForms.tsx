@@ -5,7 +5,7 @@ import { circuitEnd, tagOf } from "@/lib/client/describe";
 import { readNumber, showValue } from "@/lib/client/readField";
 import { SENSOR_PURPOSES, type Bond, type Drawing, type Sensor } from "@/lib/diagram/schema";
 import { CONDUCTOR_SIZES } from "@/lib/units";
-import { ChoiceField, FieldGroup, TextField } from "./fields";
+import { ChoiceField, FieldGroup, TextField } from "@/components/fields/fields";
 import { useEdit } from "./useEdit";
 
 const BOND_KINDS = ["main bonding jumper", "system bonding jumper", "supply-side bonding jumper", "neutral strap", "bonding screw", "neutral relay"] as const;

@@ -10,7 +10,7 @@ import { readNumber, showValue } from "@/lib/client/readField";
 import { INSULATIONS, type Circuit, type Conductor, type Section } from "@/lib/diagram/schema";
 import { CONDUCTOR_SIZES } from "@/lib/units";
 import { useState } from "react";
-import { ChoiceField, FieldGroup, TextField } from "./fields";
+import { ChoiceField, FieldGroup, TextField } from "@/components/fields/fields";
 import { RouteList } from "./routeList";
 import { useEdit } from "./useEdit";
 

@@ -1,14 +1,14 @@
 "use client";
 import { useEditor, useEditorStore } from "@/components/diagram/editorContext";
 import { circuitEnd, tagOf } from "@/lib/client/describe";
-import { readNumber, readProperty, showValue } from "@/lib/client/readField";
-import { TERMINAL_METALS, type Equipment, type PortData } from "@/lib/diagram/schema";
+import { readNumber, showValue } from "@/lib/client/readField";
+import type { Equipment } from "@/lib/diagram/schema";
 import type { PortInfo } from "@/lib/diagram/graph";
 import type { Property } from "@/lib/equipment/define";
-import { ChoiceField, FieldGroup, SourceLine, TextField } from "./fields";
+import { PortFields, PropertyField, propertyGroups, unknownWords } from "@/components/fields/equipmentFields";
+import { ChoiceField, FieldGroup, SourceLine, TextField } from "@/components/fields/fields";
 import { useEdit } from "./useEdit";
 
-const GROUPS = [["rating", "Ratings"], ["settings", "Settings"], ["construction", "Construction"], ["place", "Place and working space"], ["identity", "Make and listing"]] as const;
 const STATUSES = ["new", "existing", "relocated", "removed"] as const;
 const EXPOSURES = ["indoor dry", "indoor damp", "outdoor", "roof", "underground"] as const;
 
@@ -21,16 +21,11 @@ export function EquipmentForm({ id }: { id: string }) {
   const { readOnly, set, take } = useEdit(ref);
   return (
     <>
-      {GROUPS.map(([group, title]) => {
-        const entries = Object.entries(properties).filter(([, property]) => property.group === group);
-        if (entries.length === 0) return null;
-        const unknown = entries.filter(([name]) => equipment.props[name] === null || equipment.props[name] === undefined).length;
-        return (
-          <FieldGroup key={group} title={title} note={unknown > 0 ? `${unknown} not known` : "all known"} open={group === "rating" || group === "settings" || group === "construction"}>
-            {entries.map(([name, property]) => <PropertyField key={name} id={id} name={name} property={property} />)}
-          </FieldGroup>
-        );
-      })}
+      {propertyGroups(properties, equipment.props).map((group) => (
+        <FieldGroup key={group.id} title={group.title} note={unknownWords(group.unknown)} open={group.id === "rating" || group.id === "settings" || group.id === "construction"}>
+          {group.entries.map(([name, property]) => <SourcedField key={name} id={id} name={name} property={property} />)}
+        </FieldGroup>
+      ))}
       <Ports id={id} />
       <Landed id={id} />
       <FieldGroup title="On the sheet" open={false}>
@@ -49,17 +44,14 @@ export function EquipmentForm({ id }: { id: string }) {
   );
 }
 
-function PropertyField({ id, name, property }: { id: string; name: string; property: Property }) {
+function SourcedField({ id, name, property }: { id: string; name: string; property: Property }) {
   const equipment = useEditor((editor) => editor.graph.drawing.equipment[id]) as Equipment;
-  const { readOnly, set, take, mark } = useEdit({ collection: "equipment", id });
+  const { readOnly, set, mark } = useEdit({ collection: "equipment", id });
   const field = `props.${name}`;
-  const value = showValue(equipment.props[name]);
+  const value = equipment.props[name];
   const source = equipment.sources[name];
-  const common = { label: property.label, value, readOnly, mark: mark(field), onCommit: (text: string) => take(field, readProperty(text, property), `${property.label.toLowerCase()} of ${equipment.tag}`) };
-  const main = property.type === "choice" ? <ChoiceField {...common} options={property.options} />
-    : property.type === "flag" ? <ChoiceField {...common} options={["yes", "no"]} />
-    : <TextField {...common} {...(property.type === "number" && property.unit ? { unit: property.unit } : {})} {...(property.help ? { hint: property.help } : {})} />;
-  if (!property.rated || value === "") return main;
+  const main = <PropertyField property={property} value={value} readOnly={readOnly} mark={mark(field)} onCommit={(typed) => set(field, typed, `${property.label.toLowerCase()} of ${equipment.tag}`)} />;
+  if (!property.rated || value === null || value === undefined || value === "") return main;
   return (
     <div className="flex min-w-0 flex-col justify-end">
       {main}
@@ -71,49 +63,17 @@ function PropertyField({ id, name, property }: { id: string; name: string; prope
   );
 }
 
-const PORT_NUMBERS = [["continuousA", "Continuous", "A", 10000], ["maximumA", "Largest", "A", 10000], ["maximumOvercurrentA", "Largest device", "A", 10000], ["nominalV", "Nominal", "V", 40000], ["maximumV", "Largest", "V", 40000]] as const;
-
 function Ports({ id }: { id: string }) {
   const graph = useEditor((editor) => editor.graph);
   const ports = graph.ports(id).filter((port) => port.system !== "data");
   if (ports.length === 0) return null;
-  return <>{ports.map((port) => <PortFields key={port.id} id={id} port={port} />)}</>;
+  return <>{ports.map((port) => <EditedPort key={port.id} id={id} port={port} />)}</>;
 }
 
-function PortFields({ id, port }: { id: string; port: PortInfo }) {
+function EditedPort({ id, port }: { id: string; port: PortInfo }) {
   const { readOnly, set, mark } = useEdit({ collection: "equipment", id });
-  const data: PortData = port.data;
-  const terminal = data.terminal;
   const base = `ports.${port.id}`;
-  // A port holds no values until the first is entered; the whole entry is written then.
-  const setPort = (name: keyof PortData, value: unknown): string | null => set(base, { ...data, [name]: value }, `${port.label.toLowerCase()} port`);
-  const setTerminal = (name: string, value: unknown): string | null => setPort("terminal", { ...(terminal ?? { temperatureC: null, metals: null, smallest: null, largest: null, torqueLbfIn: null, torqueSource: null }), [name]: value });
-  const text = (name: string, label: string, value: string | null | undefined) => <TextField label={label} value={value ?? ""} readOnly={readOnly} mark={mark(`${base}.terminal.${name}`)} onCommit={(typed) => setTerminal(name, typed.trim() || null)} />;
-  return (
-    <FieldGroup title={`${port.label} port`} note={port.poles.join(" ")} open={false}>
-      {port.system !== "ground" && PORT_NUMBERS.map(([name, label, unit, most]) => (
-        <TextField key={name} label={label} unit={unit} value={showValue(data[name])} readOnly={readOnly} mark={mark(`${base}.${name}`)} onCommit={(typed) => {
-          const answer = readNumber(typed, unit, 0, most);
-          return answer.ok ? setPort(name, answer.value) : answer.reason;
-        }} />
-      ))}
-      <ChoiceField label="Terminal marked" value={terminal?.temperatureC?.toString() ?? ""} options={["60", "75", "90"]} words={{ 60: "60 °C", 75: "75 °C", 90: "90 °C" }} readOnly={readOnly} mark={mark(`${base}.terminal.temperatureC`)} onCommit={(value) => setTerminal("temperatureC", value ? Number(value) : null)} />
-      <ChoiceField label="Metals" value={terminal?.metals ?? ""} options={TERMINAL_METALS} readOnly={readOnly} mark={mark(`${base}.terminal.metals`)} onCommit={(value) => setTerminal("metals", value || null)} />
-      {text("smallest", "Smallest wire", terminal?.smallest)}
-      {text("largest", "Largest wire", terminal?.largest)}
-      <TextField label="Torque" unit="lbf·in" value={showValue(terminal?.torqueLbfIn)} readOnly={readOnly} mark={mark(`${base}.terminal.torqueLbfIn`)} onCommit={(typed) => { const answer = readNumber(typed, "lbf·in", 0.5, 5000); return answer.ok ? setTerminal("torqueLbfIn", answer.value) : answer.reason; }} />
-      {text("torqueSource", "Torque from", terminal?.torqueSource)}
-      <TextField label="Conductors in one" value={showValue(terminal?.conductorsMost)} readOnly={readOnly} mark={mark(`${base}.terminal.conductorsMost`)} onCommit={(typed) => { const answer = readNumber(typed, "", 1, 12); return answer.ok ? setTerminal("conductorsMost", answer.value) : answer.reason; }} />
-      <YesNo label="For fine strands" value={terminal?.fineStrand} readOnly={readOnly} mark={mark(`${base}.terminal.fineStrand`)} onCommit={(value) => setTerminal("fineStrand", value)} />
-      {(terminal?.temperatureC ?? null) === null && <YesNo label="No °C mark found" value={terminal?.noTemperatureMark} readOnly={readOnly} mark={mark(`${base}.terminal.noTemperatureMark`)} onCommit={(value) => setTerminal("noTemperatureMark", value)} />}
-    </FieldGroup>
-  );
-}
-
-type Choice = Parameters<typeof ChoiceField>[0];
-/** A fact that is yes, no or not known. */
-function YesNo({ value, onCommit, ...rest }: Pick<Choice, "label" | "readOnly" | "mark"> & { value: boolean | null | undefined; onCommit: (value: boolean | null) => string | null }) {
-  return <ChoiceField {...rest} value={value === true ? "yes" : value === false ? "no" : ""} options={["yes", "no"]} onCommit={(chosen) => onCommit(chosen === "" ? null : chosen === "yes")} />;
+  return <PortFields port={port} data={port.data} readOnly={readOnly} mark={(field) => mark(`${base}.${field}`)} onCommit={(data) => set(base, data, `${port.label.toLowerCase()} port`)} />;
 }
 
 function Landed({ id }: { id: string }) {

@@ -9,7 +9,7 @@ import { CircuitForm } from "./circuitForm";
 import { EquipmentForm } from "./equipmentForm";
 import { RacewayForm } from "./racewayForm";
 import { SheetForm } from "./sheetForm";
-import { TextField } from "./fields";
+import { TextField } from "@/components/fields/fields";
 import { useEdit } from "./useEdit";
 
 const FORMS: Partial<Record<ElementRef["collection"], React.ComponentType<{ id: string }>>> = {

@@ -7,7 +7,7 @@ import { readNumber, showValue } from "@/lib/client/readField";
 import { stretchesOf } from "@/lib/diagram/graph";
 import { RACEWAY_TYPES, type Raceway } from "@/lib/diagram/schema";
 import { TRADE_SIZES } from "@/lib/units";
-import { ChoiceField, FieldGroup, TextField } from "./fields";
+import { ChoiceField, FieldGroup, TextField } from "@/components/fields/fields";
 import { useEdit } from "./useEdit";
 
 const EXPOSURES = ["indoor dry", "indoor damp", "outdoor", "roof", "underground"] as const;

@@ -3,7 +3,7 @@ import { BUTTON, HEADING } from "@/components/diagram/chrome/controls";
 import { useEditor, useEditorStore } from "@/components/diagram/editorContext";
 import { kindOf, tagOf } from "@/lib/client/describe";
 import type { RouteStep, Section } from "@/lib/diagram/schema";
-import { ChoiceField } from "./fields";
+import { ChoiceField } from "@/components/fields/fields";
 
 /** Raceways a section passes, in order from the circuit's first end; each can be moved, put into a compartment or taken out. */
 export function RouteList({ section, readOnly, onRoute }: { section: Section & { id: string }; readOnly: boolean; onRoute: (route: readonly RouteStep[]) => string | null }) {

@@ -4,7 +4,7 @@ import { useEditor, useEditorStore } from "@/components/diagram/editorContext";
 import { editionName } from "@/lib/code/adoption";
 import { readNumber, showValue } from "@/lib/client/readField";
 import { OCCUPANCIES, type Drawing } from "@/lib/diagram/schema";
-import { ChoiceField, FieldGroup, TextField } from "./fields";
+import { ChoiceField, FieldGroup, TextField } from "@/components/fields/fields";
 import { UnderlayForm } from "./underlayForm";
 
 /** Data of the whole sheet, shown while nothing is selected. */

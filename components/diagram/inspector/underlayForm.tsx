@@ -14,7 +14,7 @@ import type { Underlay } from "@/lib/diagram/schema";
 import { drawingArea } from "@/lib/sheets/frame";
 import { FRAME_ORIGIN_PX, PX_PER_UNIT } from "@/lib/sheets/primitives";
 import { sheetGeometry } from "@/lib/sheets/size";
-import { FieldGroup, TextField } from "./fields";
+import { FieldGroup, TextField } from "@/components/fields/fields";
 
 const isPicture = (file: FileAnswer): boolean => file.contentType !== "application/pdf" && file.widthPx !== null && file.heightPx !== null;
 

@@ -5,7 +5,7 @@ import type { FieldAnswer } from "@/lib/client/readField";
 import type { Command } from "@/lib/diagram/commands";
 import type { ElementRef } from "@/lib/diagram/schema";
 import type { Finding } from "@/lib/rules/engine/types";
-import type { FieldMark } from "./fields";
+import type { FieldMark } from "@/components/fields/fields";
 
 const NONE: readonly Finding[] = [];
 const sameElement = (a: ElementRef, b: ElementRef): boolean => a.collection === b.collection && a.id === b.id;

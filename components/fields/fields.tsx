@@ -15,16 +15,19 @@ interface FieldProps {
   readonly mark?: FieldMark | null;
   readonly hint?: string;
   readonly wide?: boolean;
+  /** Label for the ear alone, where a table's heading says it to the eye. */
+  readonly bare?: boolean;
   /** Words in an empty field; a value that is needed says that it is not known. */
   readonly empty?: string;
   /** Takes the text; the answer is why not, or null. */
   readonly onCommit: (text: string) => string | null;
 }
 
-function Shell({ id, label, unit, mark, wide, children, refusal, hint }: { id: string; label: string; unit?: string; mark?: FieldMark | null; wide?: boolean; children: ReactNode; refusal: string | null; hint?: string }) {
+interface ShellProps { id: string; label: string; unit?: string | undefined; mark?: FieldMark | null | undefined; wide?: boolean | undefined; bare?: boolean | undefined; children: ReactNode; refusal: string | null; hint?: string | undefined }
+function Shell({ id, label, unit, mark, wide, bare, children, refusal, hint }: ShellProps) {
   return (
     <div className={`flex min-w-0 flex-col justify-end ${wide ? "col-span-2" : ""}`}>
-      <label htmlFor={id} className={LABEL}><span className={mark ? WAVE_CLASS[mark.kind] : ""}>{label}</span>{unit ? `, ${unit}` : ""}</label>
+      <label htmlFor={id} className={bare ? "sr-only" : LABEL}><span className={mark ? WAVE_CLASS[mark.kind] : ""}>{label}</span>{unit ? `, ${unit}` : ""}</label>
       {children}
       {refusal && <p role="alert" className="mt-0.5 text-small text-red">{refusal}</p>}
       {!refusal && hint && <p className="mt-0.5 text-small text-ink3">{hint}</p>}
@@ -33,7 +36,7 @@ function Shell({ id, label, unit, mark, wide, children, refusal, hint }: { id: s
 }
 
 /** Field that is taken over on Enter or when it is left; Esc gives back what was there. */
-export function TextField({ label, value, unit, readOnly, mark, hint, wide, empty = "not known", onCommit, list }: FieldProps & { list?: readonly string[] }) {
+export function TextField({ label, value, unit, readOnly, mark, hint, wide, bare, empty = "not known", onCommit, list }: FieldProps & { list?: readonly string[] }) {
   const id = useId();
   const [typed, setTyped] = useState<string | null>(null);
   const [refusal, setRefusal] = useState<string | null>(null);
@@ -45,7 +48,7 @@ export function TextField({ label, value, unit, readOnly, mark, hint, wide, empt
     if (answer === null) setTyped(null);
   };
   return (
-    <Shell id={id} label={label} refusal={refusal} {...(unit ? { unit } : {})} {...(mark ? { mark } : {})} {...(wide ? { wide } : {})} {...(hint ? { hint } : {})}>
+    <Shell id={id} label={label} refusal={refusal} unit={unit} mark={mark} wide={wide} bare={bare} hint={hint}>
       <input
         id={id} className={FIELD} value={typed ?? value} readOnly={readOnly} placeholder={empty} list={list ? `${id}-list` : undefined} autoComplete="off"
         aria-invalid={refusal !== null} title={mark?.message}
@@ -61,11 +64,11 @@ export function TextField({ label, value, unit, readOnly, mark, hint, wide, empt
 }
 
 /** Choice among the trade's words; the first one is always "not known" where that is a value. */
-export function ChoiceField({ label, value, options, readOnly, mark, wide, unknown = true, onCommit, words }: FieldProps & { options: readonly string[]; unknown?: boolean; words?: Readonly<Record<string, string>> }) {
+export function ChoiceField({ label, value, options, readOnly, mark, wide, bare, unknown = true, onCommit, words }: FieldProps & { options: readonly string[]; unknown?: boolean; words?: Readonly<Record<string, string>> }) {
   const id = useId();
   const [refusal, setRefusal] = useState<string | null>(null);
   return (
-    <Shell id={id} label={label} refusal={refusal} {...(mark ? { mark } : {})} {...(wide ? { wide } : {})}>
+    <Shell id={id} label={label} refusal={refusal} mark={mark} wide={wide} bare={bare}>
       <select id={id} className={FIELD} value={value} disabled={readOnly} title={mark?.message} onChange={(event) => setRefusal(onCommit(event.target.value))}>
         {unknown && <option value="">not known</option>}
         {options.map((option) => <option key={option} value={option}>{words?.[option] ?? option}</option>)}
@@ -89,12 +92,12 @@ export function SourceLine({ label, value, readOnly, onCommit }: Pick<FieldProps
   );
 }
 
-/** Two columns of fields under a heading. */
-export function FieldGroup({ title, note, children, open = true }: { title: string; note?: string; children: ReactNode; open?: boolean }) {
+/** Fields under a heading, in two columns or in four. */
+export function FieldGroup({ title, note, children, open = true, columns = 2 }: { title: string; note?: string; children: ReactNode; open?: boolean; columns?: 2 | 4 }) {
   return (
     <details open={open}>
       <summary className={`${HEADING} cursor-pointer list-none [&::-webkit-details-marker]:hidden`}><span>{title}</span>{note && <span className="text-small font-normal text-ink2">{note}</span>}</summary>
-      <div className="mt-2 grid grid-cols-2 gap-x-2 gap-y-2">{children}</div>
+      <div className={`mt-2 grid gap-x-2 gap-y-2 ${columns === 4 ? "grid-cols-4 narrow:grid-cols-3 phone:grid-cols-1" : "grid-cols-2"}`}>{children}</div>
     </details>
   );
 }
