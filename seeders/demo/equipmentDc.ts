@@ -12,7 +12,7 @@ export function addInverters(drawing: DrawingBuilder): void {
       make: "Brackwater", model: "HB-78", listing: "UL 1741 SB, UL 1998", outputKW: 7.8, outputV: 240, continuousA: 32.5, faultA: 60, maximumOvercurrentA: 50, shortCircuitKA: 10,
       trackers: 2, pvMaximumV: 600, pvLeastV: 130, pvMostV: 500, trackerA: 20, trackerShortCircuitA: 26, pvBackfeedA: 0, arrayRatioMost: 1.5,
       batteryLeastV: 42, batteryMostV: 60, batteryA: 175, batteryShortCircuitKA: 20, listedInteractive: true, listedStandAlone: true, listedGeneratorMode: true, parallelMost: 4,
-      role, address, firmware: "4.2.1", firmwareInstruction: "H33", parallelInstruction: "H30", leadInstruction: "H34", leadTolerancePercent: 5,
+      role, address, firmware: "4.2.1", firmwareInstruction: "H33", parallelInstruction: "H30", parallelMixed: false, parallelLink: "chain", terminator: true, parallelBank: "one common bank", leadInstruction: "H34", leadTolerancePercent: 5,
       neutralRelay: "disabled", profile: "120/240 V split phase, 60 Hz, ORE-2", dischargeLimitA: 175,
       enclosureType: "3R", handleHeightIn: 55, clearDepthIn: 48, clearWidthIn: 36, clearHeightIn: 80,
     }, { page: "H1", book: "HB-78 data sheet", location: PLANT, mirrored, ...(mirrored ? { label: { x: -9, y: 2, anchor: "start" as const } } : {}) });

@@ -24,7 +24,7 @@ describe("cases of every rule on the farm system", () => {
         expect(cases.every((each) => each.source.length > 3)).toBe(true);
       });
       it("asks for what is missing, and a derived rule is tried by moving things", () => {
-        const asksNothing = ["sources-not-interlocked", "duplicate-tag", "raceway-not-routed", "bundling-count"];
+        const asksNothing = ["sources-not-interlocked", "duplicate-tag", "raceway-not-routed", "bundling-count", "parallel-common-output"];
         if (!asksNothing.includes(rule)) expect(cases.some((each) => (each.asks ?? []).length > 0)).toBe(true);
         if (meta?.evidence === "derived" && rule !== "duplicate-tag") expect(cases.some((each) => each.moved)).toBe(true);
       });

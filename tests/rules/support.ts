@@ -66,3 +66,22 @@ export function say(rule: string, edit: (drawing: Drawing) => void): Said {
     asks: [...new Set(findings.filter((finding) => finding.kind === "needs-data").map((finding) => finding.anchor.id))].sort(),
   };
 }
+
+/** A third inverter like the second, with a breaker of its own on the cabinet's bus, on the battery bus, linked with the second. */
+export function thirdUnit(drawing: Drawing): void {
+  const copy = <T>(value: T | undefined): T => { if (value === undefined) throw new Error("the farm system lacks a part"); return structuredClone(value); };
+  const moved = (at: { x: number; y: number }): { x: number; y: number } => ({ x: at.x, y: at.y + 30 });
+  const unit = copy(drawing.equipment["inv-2"]);
+  drawing.equipment["inv-3"] = { ...unit, tag: "INV-3", at: moved(unit.at), props: { ...unit.props, address: 3 } };
+  drawing.equipment["inv-2"]!.props.terminator = false;
+  const device = copy(drawing.equipment["cb-i2"]);
+  drawing.equipment["cb-i3"] = { ...device, tag: "CB-I3", at: moved(device.at), spaces: [11, 12] };
+  const lead = copy(drawing.equipment["cb-d2"]);
+  drawing.equipment["cb-d3"] = { ...lead, tag: "CB-D3", at: moved(lead.at) };
+  const joint = (from: string, id: string): void => { drawing.circuits[id] = { ...copy(Object.values(drawing.circuits).find((each) => each.wiring === "factory" && each.to.equipment === from)), to: { equipment: id.slice(2), port: "line", offset: 0 } }; };
+  joint("cb-i2", "j-cb-i3");
+  joint("cb-d2", "j-cb-d3");
+  drawing.circuits["f6"] = { ...copy(drawing.circuits["f3"]), tag: "F6", from: { equipment: "inv-3", port: "ac", offset: 0 }, to: { equipment: "cb-i3", port: "load", offset: 0 } };
+  drawing.circuits["d3"] = { ...copy(drawing.circuits["d2"]), tag: "D3", from: { equipment: "cb-d3", port: "load", offset: 0 }, to: { equipment: "inv-3", port: "battery", offset: 0 } };
+  drawing.circuits["k-12"] = { ...copy(drawing.circuits["k-2"]), tag: "K-12", from: { equipment: "inv-2", port: "data", offset: 0 }, to: { equipment: "inv-3", port: "data", offset: 0 } };
+}

@@ -22,6 +22,8 @@ export interface RatingRow {
   rating: (ref: ElementRef, context: CheckContext) => Marked;
   /** What the rating is called in the sentence, for example "Interrupting rating". */
   name: string;
+  /** Maker's page behind the limit, which raises a maker rule to must-fix. */
+  instruction?: (ref: ElementRef, context: CheckContext) => string | null;
   suggest?: (finding: FindingDraft, context: CheckContext) => readonly Suggestion[];
   examples: Rule["examples"];
 }
@@ -37,11 +39,13 @@ export function ratingRule(row: RatingRow): Rule {
     if (!reader.complete || marked.value === null) return reader.outcome();
     const holds = row.bound === "least" ? marked.value >= demand.value - 1e-9 : marked.value <= demand.value + 1e-9;
     if (holds) return PASS;
+    const page = row.instruction?.(ref, context) ?? null;
     const sign = row.bound === "least" ? "≥" : "≤";
     return found({
       variant: row.variant, anchor: ref, field: marked.field, related: demand.related ?? [],
       message: `${nameOf(context, ref)}: ${row.name} ${shown(marked.value)} ${row.unit}; ${demand.words} ${shown(demand.value)} ${row.unit}.`,
-      steps: [...(demand.steps ?? []), { symbol: row.name, expression: row.bound === "least" ? "not below" : "not above", substituted: `${shown(marked.value)} ${row.unit} ${sign} ${shown(demand.value)} ${row.unit}`, result: "fails", unit: "" }],
+      steps: [...(demand.steps ?? []), { symbol: row.name, expression: row.bound === "least" ? "not below" : "not above", substituted: `${shown(marked.value)} ${row.unit} ${sign} ${shown(demand.value)} ${row.unit}`, result: "fails", unit: "", ...(page === null ? {} : { citation: page }) }],
+      ...(page === null ? {} : { instruction: page }),
     });
   };
   return { meta: row.meta, subjects: row.subjects, evaluate, ...(row.suggest ? { suggest: row.suggest } : {}), examples: row.examples };
