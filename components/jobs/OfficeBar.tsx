@@ -21,6 +21,7 @@ export function OfficeBar({ children, primary }: { children?: ReactNode; primary
       actions={
         <>
           <LinkButton href="/jobs" size="bar">Jobs</LinkButton>
+          {company && <LinkButton href="/library" size="bar">Library</LinkButton>}
           {company && <LinkButton href="/jurisdictions" size="bar">Jurisdictions</LinkButton>}
           {company && <LinkButton href="/people" size="bar">People</LinkButton>}
           {me.data?.companies.some((each) => each.may.records) && <LinkButton href="/records" size="bar">Records</LinkButton>}

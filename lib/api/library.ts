@@ -31,9 +31,9 @@ export const libraryQuery = z.strictObject({
   limit: z.coerce.number().int().min(1).max(200).default(50), offset: z.coerce.number().int().min(0).max(1_000_000).default(0),
 });
 
-/** One line of the library's list. `rated`/`sourced` count the rated properties that have a value, and of those the ones with a source. */
+/** One line of the library's list. `keyRating` is what a drawing prints beside the tag, without maker and model. `rated`/`sourced` count the rated properties that have a value, and of those the ones with a source. */
 export interface LibraryLine {
-  id: string; kind: string; name: string; make: string; model: string; version: number; archived: boolean; starter: boolean; rated: number; sourced: number; changedAt: string;
+  id: string; kind: string; name: string; make: string; model: string; keyRating: string; version: number; archived: boolean; starter: boolean; rated: number; sourced: number; changedAt: string;
 }
 export interface LibraryVersionLine { version: number; by: string; at: string; note: string }
 export interface LibraryEntryAnswer extends LibraryLine {

@@ -58,3 +58,9 @@ export function ratedCounts(properties: Properties, data: EquipmentData): { rate
   const rated = Object.entries(properties).filter(([name, property]) => property.rated && (data.props[name] ?? null) !== null);
   return { rated: rated.length, sourced: rated.filter(([name]) => (data.sources[name]?.document ?? "") !== "").length };
 }
+
+/** What a drawing prints beside the tag of such equipment, in one line and without maker and model; empty while nothing of it is known. */
+export function keyRating(definition: KindDefinition, data: EquipmentData): string {
+  const props = wholeProps(definition, data.props);
+  return definition.annotation(props as never).filter((line) => line !== props["make"] && line !== props["model"]).join(", ");
+}

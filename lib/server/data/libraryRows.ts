@@ -1,6 +1,6 @@
 import "server-only";
 import type { LibraryData, LibraryLine } from "@/lib/api";
-import { equipmentDataFaults, ratedCounts, wholeEquipmentData } from "@/lib/equipment/libraryData";
+import { equipmentDataFaults, keyRating, ratedCounts, wholeEquipmentData } from "@/lib/equipment/libraryData";
 import { isKindId, kindDefinition } from "@/lib/equipment/registry";
 import { STARTER_SOURCE } from "@/lib/equipment/starter";
 import type { LibraryEntry } from "@/models";
@@ -39,7 +39,7 @@ export const readData = (kind: string, data: LibraryData): LibraryData => (isKin
 /** Line of the list, from an entry and the data of its current version. */
 export function libraryLine(row: LibraryEntry, data: LibraryData): LibraryLine {
   return {
-    id: row.id, kind: row.kind, name: row.name, make: row.make, model: row.model, version: row.currentVersion, archived: row.archivedAt !== null,
+    id: row.id, kind: row.kind, name: row.name, make: row.make, model: row.model, keyRating: isKindId(row.kind) ? keyRating(kindDefinition(row.kind), data) : "", version: row.currentVersion, archived: row.archivedAt !== null,
     starter: row.starter, ...(isKindId(row.kind) ? ratedCounts(kindDefinition(row.kind).properties, data) : { rated: 0, sourced: 0 }), changedAt: row.updatedAt.toISOString(),
   };
 }

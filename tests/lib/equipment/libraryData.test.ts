@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { equipmentDataFaults, ratedCounts, wholeEquipmentData, type EquipmentData } from "@/lib/equipment/libraryData";
+import { equipmentDataFaults, keyRating, ratedCounts, wholeEquipmentData, type EquipmentData } from "@/lib/equipment/libraryData";
 import { kindDefinition } from "@/lib/equipment/registry";
 
 const inverter = kindDefinition("hybrid-inverter");
@@ -59,5 +59,11 @@ describe("values of a library entry", () => {
       sources: { ratingA: { document: "Sheet", page: "2" }, poles: { document: "", page: "2" }, mount: { document: "Sheet", page: "2" } },
     });
     expect(ratedCounts(breaker.properties, given)).toEqual({ rated: 3, sourced: 1 });
+  });
+
+  it("say their key rating as a drawing prints it, without maker and model, and nothing while nothing is known", () => {
+    expect(keyRating(breaker, data({ ratingA: 60, poles: 2, make: "Oddfellow" }))).toBe("60 A 2P");
+    expect(keyRating(kindDefinition("string-inverter"), data({ model: "OX-76", outputKW: 7.6, continuousA: 32 }))).toBe("7.6 kW, 32 A");
+    expect(keyRating(kindDefinition("string-inverter"), data({}))).toBe("");
   });
 });
