@@ -1,7 +1,20 @@
 import { checkNumber, checkOneOf, type ConductorSize } from "@/lib/units";
 import { CodeLookupError } from "./errors";
 import { ADDITIONAL_FUSE_RATINGS, SMALL_CONDUCTOR_ROWS, STANDARD_RATINGS } from "./tables/overcurrent";
+import { SINGLE_PHASE_MOTOR_ROWS } from "./tables/motor-current";
 import { EDITIONS, type Edition, type Material } from "./types";
+
+/**
+ * Full-load current in A of a single-phase motor by horsepower at 115, 208 or 230 V (120 and 240 V systems).
+ * Null where the table holds no row. Source: Table 430.248.
+ */
+export function motorTableCurrentA(horsepower: number, volts: number): number | null {
+  const row = SINGLE_PHASE_MOTOR_ROWS.find((item) => Math.abs(item.horsepower - horsepower) < 0.01);
+  if (!row) return null;
+  if (volts >= 110 && volts <= 120) return row.a115;
+  if (volts >= 220 && volts <= 240) return row.a230;
+  return volts === 208 ? row.a230 * 1.1 : null;
+}
 
 const RANGE = { min: 0, max: 100000, unit: "A" } as const;
 

@@ -55,7 +55,7 @@ export function addService(drawing: DrawingBuilder): void {
     enclosureType: "3R", handleHeightIn: 48, clearDepthIn: 48, clearWidthIn: 30, clearHeightIn: 80, serviceEquipment: false,
   }, { page: "M6", location: place("A", "pump house", "outdoor", 33), label: { x: -1.2, y: 5.7, anchor: "start" } });
   both(drawing, ds2, terminal(25, ["14 AWG", "8 AWG"], "M6, marking"));
-  const pump = drawing.add("load", "P-1", [29.2, 36.4], { description: "Yard pump 1 hp", use: "motor", powerKW: null, currentA: 8, continuous: true, phaseV: 240 }, { page: "Nameplate", status: "existing", rotation: 90, label: { x: 1.7, y: 0, anchor: "start" }, location: place("A", "pump house", "outdoor", 33) });
+  const pump = drawing.add("load", "P-1", [29.2, 36.4], { description: "Yard pump 1 hp", use: "motor", powerKW: null, horsepower: 1, currentA: 8, continuous: true, phaseV: 240 }, { page: "Nameplate", status: "existing", rotation: 90, label: { x: 1.7, y: 0, anchor: "start" }, location: place("A", "pump house", "outdoor", 33) });
   drawing.port(pump, "line", terminal(25, ["14 AWG", "8 AWG"], "marking"));
   drawing.add("shutdown-initiator", "RSD-1", [39.4, 36.6], { purpose: "PV rapid shutdown", enclosureType: "4X", circuitVoltage: "24 V, Class 2", listing: "UL 1741" }, { page: "R2", location: OUTSIDE });
   drawing.add("shutdown-initiator", "ESD-1", [47.6, 36.6], { purpose: "storage emergency stop", enclosureType: "4X", circuitVoltage: "24 V, Class 2" }, { page: "B7", location: OUTSIDE });

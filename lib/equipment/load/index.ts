@@ -7,6 +7,7 @@ export const load = defineKind({
     description: text("Load", 60),
     use: choice("Kind of load", ["general", "motor", "air conditioning or refrigeration", "lighting", "receptacles", "heating"]),
     powerKW: number("Power", "kW", 0, 5000),
+    horsepower: number("Motor power", "hp", 0.05, 500, { rated: true }),
     currentA: number("Current", "A", 0, 5000),
     continuous: flag("Runs three hours or more"),
     minimumCircuitA: number("Minimum circuit ampacity on the nameplate", "A", 0, 2000, { rated: true }),

@@ -1,29 +1,14 @@
 import { TAP_SHARE_10_FT, TAP_SHARE_25_FT } from "@/lib/code/tables/source-constants";
 import { MUST_FIX_TO_2023, sameSection } from "@/lib/rules/engine/meta";
 import type { CheckContext, FindingDraft, Outcome, Rule } from "@/lib/rules/engine/types";
-import type { Step } from "@/lib/calc";
-import { shown } from "@/lib/calc";
-import { columnAmpacityA, correctedAmpacity, deviceRatingA, terminalsOf, wireOf } from "@/lib/rules/shared/conductors";
+import { columnAmpacityA, correctedAmpacity, terminalsOf } from "@/lib/rules/shared/conductors";
 import { breakerAtBus } from "@/lib/rules/shared/devices";
-import { circuitRef, equipmentRef, found, nameOf, NOT_APPLICABLE, PASS, racewayRef, Reader } from "@/lib/rules/shared/outcome";
+import { circuitRef, equipmentRef, found, nameOf, NOT_APPLICABLE, PASS, Reader } from "@/lib/rules/shared/outcome";
 import { compact, largerConductor, uniqueRefs } from "@/lib/rules/shared/protection";
+import { circuitAmpacityA, judgeTap, type Judged } from "@/lib/rules/shared/tapPaths";
 import { feedA, fittingRatingA, landingsOf, permittedA, type Landing } from "@/lib/rules/shared/taps";
 import { motorCircuit, powerCircuits, topology } from "@/lib/rules/shared/topology";
-import { stretchesOf } from "@/lib/diagram/graph";
 
-/** What the tap ends in: one device, equipment with devices of its own, or neither. */
-interface TapEnd { kind: "device" | "equipment" | "none"; id: string; ratingA: number | null }
-function tapEnd(context: CheckContext, id: string, landing: Landing, reader: Reader): TapEnd {
-  const [run, more] = topology(context.graph).runs(id, landing.other);
-  if (!run || more) return { kind: "none", id: "", ratingA: null };
-  if (run.device !== null) {
-    const ratingA = deviceRatingA(context, run.device);
-    if (ratingA === null) reader.number(run.device, topology(context.graph).ratingField(run.device) ?? "ratingA");
-    return { kind: "device", id: run.device, ratingA };
-  }
-  const at = run.node.split("/")[0] ?? "";
-  return run.stop === "bus" ? { kind: "equipment", id: at, ratingA: reader.number(at, "busA") } : { kind: "none", id: at, ratingA: null };
-}
 /** A feeder or branch taken from a bus whose device its conductors do not permit. Sources' own circuits and motor taps have rules of their own. */
 function tapOf(context: CheckContext, id: string, reader: Reader): { landing: Landing; baseA: number; device: string } | null {
   if (context.drawing.circuits[id]?.system !== "ac" || motorCircuit(context.graph, id)) return null;
@@ -42,57 +27,14 @@ function tapOf(context: CheckContext, id: string, reader: Reader): { landing: La
 /** True where the bus it is taken from is itself fed by a tap. */
 const fromTap = (context: CheckContext, landing: Landing): boolean => [...new Set(landing.feeds.map((feed) => feed.circuit))].some((circuit) =>
   context.drawing.circuits[circuit]?.wiring === "field" && tapOf(context, circuit, new Reader(context)) !== null);
-function isOutdoors(context: CheckContext, id: string, reader: Reader): boolean {
-  const exposures = context.graph.sections(id).flatMap((section) => section.route.flatMap((step) => {
-    const raceway = context.drawing.raceways[step.raceway];
-    return raceway ? stretchesOf(raceway).map((stretch) => ({ step: step.raceway, at: stretch.id, exposure: stretch.exposure ?? raceway.location.exposure })) : [];
-  }));
-  for (const one of exposures) if (one.exposure === null) reader.ask(racewayRef(one.step), `stretches.${one.at}.exposure`, `surroundings of ${nameOf(context, racewayRef(one.step))}`);
-  return exposures.length > 0 && exposures.every((one) => one.exposure === "outdoor" || one.exposure === "underground" || one.exposure === "roof");
-}
-
-const outermost = (context: CheckContext, equipment: string): string => context.graph.enclosures(equipment).at(-1) ?? equipment;
-interface Judged { ok: boolean; variant: string; says: string; steps: Step[]; neededA: number | null }
-function judge(context: CheckContext, id: string, tap: { landing: Landing; baseA: number }, amperes: number, reader: Reader): Judged | null {
-  const end = tapEnd(context, id, tap.landing, reader);
-  const sections = context.graph.sections(id);
-  for (const section of sections) if (section.lengthFt === null) reader.ask(circuitRef(id), `sections.${section.id}.lengthFt`, `length of ${nameOf(context, circuitRef(id))}`);
-  const outside = isOutdoors(context, id, reader);
-  if (!reader.complete) return null;
-  const feet = sections.reduce((sum, section) => sum + (section.lengthFt ?? 0), 0);
-  // The tenth and the raceway are asked for only where the tap leaves the enclosure it starts in.
-  const circuit = context.drawing.circuits[id];
-  const leaves = !circuit || outermost(context, circuit.from.equipment) !== outermost(context, circuit.to.equipment);
-  const enclosed = !leaves || sections.every((section) => section.route.length > 0 || section.cable !== null);
-  const [third, tenth] = [tap.baseA * TAP_SHARE_25_FT, leaves ? tap.baseA * TAP_SHARE_10_FT : 0];
-  const line = (symbol: string, expression: string, substituted: string, holds: boolean): Step => ({ symbol, expression, substituted, result: holds ? "passes" : "fails", unit: "" });
-  const toEnd = end.ratingA !== null && amperes >= end.ratingA - 1e-9;
-  const single = end.kind === "device" && toEnd;
-  const ten = feet <= context.limit("shortFt") && end.kind !== "none" && toEnd && enclosed && amperes >= tenth - 1e-9;
-  const twentyFive = feet <= context.limit("longFt") && single && enclosed && amperes >= third - 1e-9;
-  const steps = [
-    line("10 ft", "length to 10 ft, ampacity not below the rating at the end and 1/10 of the device", `${feet} ft; ${shown(amperes, 1)} A, ${end.ratingA ?? "no"} A at the end, ${shown(tenth, 1)} A`, ten),
-    line("25 ft", "length to 25 ft, one device at the end, ampacity not below 1/3 of the device", `${feet} ft; ${shown(amperes, 1)} A, ${shown(third, 1)} A`, twentyFive),
-    line("outside", "outdoors throughout, one device at the end within the ampacity", outside ? "outdoors" : "not outdoors throughout", outside && single),
-  ];
-  if (fromTap(context, tap.landing)) return { ok: false, variant: "tap-from-tap", says: "it is taken from conductors that are a tap themselves", steps, neededA: null };
-  if (ten || twentyFive || (outside && single)) return { ok: true, variant: "", says: "", steps, neededA: null };
-  if (end.kind === "none" || (end.kind === "equipment" && feet > context.limit("shortFt"))) return { ok: false, variant: "no-single-device", says: `it is ${feet} ft long and does not end in one device`, steps, neededA: null };
-  if (!enclosed) return { ok: false, variant: "not-in-raceway", says: "it must run in a raceway", steps, neededA: null };
-  if (feet > context.limit("longFt")) return { ok: false, variant: "too-long", says: `it is ${feet} ft long, above ${context.limit("longFt")} ft, and not outdoors throughout`, steps, neededA: null };
-  const neededA = Math.max(end.ratingA ?? 0, feet > context.limit("shortFt") ? third : tenth);
-  return { ok: false, variant: "too-small", says: `at ${feet} ft its ${shown(amperes, 1)} A must not be below ${shown(neededA, 1)} A`, steps, neededA };
-}
-function ampacityA(context: CheckContext, id: string, reader: Reader): number | null {
-  const column = terminalsOf(context, id, null, 75).lowest;
-  const values = context.graph.sections(id).map((section) => { const wire = wireOf(context, id, section, reader); return wire && (correctedAmpacity(context, id, section, wire, column, reader)?.value ?? null); });
-  return values.length === 0 || values.some((value) => value === null) ? null : Math.min(...values.map((value) => value ?? 0));
-}
+const judge = (context: CheckContext, id: string, tap: { landing: Landing; baseA: number }, amperes: number, reader: Reader): Judged | null => judgeTap(context, id, {
+  other: tap.landing.other, thirdA: tap.baseA * TAP_SHARE_25_FT, tenthA: tap.baseA * TAP_SHARE_10_FT, shortFt: context.limit("shortFt"), longFt: context.limit("longFt"), fromTap: fromTap(context, tap.landing),
+}, amperes, reader);
 function evaluate(context: CheckContext, id: string): Outcome {
   const reader = new Reader(context);
   const tap = tapOf(context, id, reader);
   if (!tap) return reader.complete ? NOT_APPLICABLE : reader.outcome();
-  const amperes = ampacityA(context, id, reader);
+  const amperes = circuitAmpacityA(context, id, reader);
   const judged = amperes === null ? null : judge(context, id, tap, amperes, reader);
   if (amperes === null || judged === null) return reader.outcome();
   if (judged.ok) return PASS;
@@ -105,7 +47,7 @@ function evaluate(context: CheckContext, id: string): Outcome {
 function suggest({ anchor: { id }, variant }: FindingDraft, context: CheckContext) {
   const reader = new Reader(context);
   const tap = tapOf(context, id, reader);
-  const amperes = tap && ampacityA(context, id, reader);
+  const amperes = tap && circuitAmpacityA(context, id, reader);
   if (!tap || amperes === null) return [];
   const rating = fittingRatingA(context, id);
   const { neededA } = judge(context, id, tap, amperes, reader) ?? { neededA: null };

@@ -7,7 +7,7 @@ import { standardRatingsA } from "@/lib/code";
 import { columnAmpacityA, terminalsOf, wireOf, type SectionOf, type Terminals, type Wire } from "./conductors";
 import { carriedBy } from "./currents";
 import { circuitRef, equipmentRef, nameOf, numberOf, propertyLabel, Reader } from "./outcome";
-import { supplies, topology, type Side } from "./topology";
+import { powerCircuits, supplies, topology, type Side } from "./topology";
 
 /** One device over one section of a circuit, with what the conductors permit at the terminal columns. */
 export interface Guard {
@@ -37,7 +37,7 @@ export function guardsOf(context: CheckContext, circuit: string, reader: Reader)
 export function largestDevice(context: CheckContext, circuit: string, wire: Wire, ampacityA: number): CalcResult<number, LargestDeviceDetail> {
   return largestOvercurrentDevice({
     edition: context.edition, ampacityA, size: wire.size, material: wire.material, smallConductorLimit: false,
-    roundUp: !receptacleBranch(context, circuit), dwelling83: wholeDwelling(context, circuit),
+    roundUp: !receptacleBranch(context, circuit), dwelling83: wholeDwelling(context, circuit) || asServiceConductors(context, circuit, ampacityA),
   });
 }
 const away = (context: CheckContext, circuit: string): Side | undefined => {
@@ -45,18 +45,43 @@ const away = (context: CheckContext, circuit: string): Side | undefined => {
   return [side(circuit, "from"), side(circuit, "to")].find((one) => supplies(one) === 0);
 };
 /** Branch circuit to receptacles for cord-connected loads: the device may not be rounded up. */
-function receptacleBranch(context: CheckContext, circuit: string): boolean {
+export function receptacleBranch(context: CheckContext, circuit: string): boolean {
   const side = away(context, circuit);
   return side !== undefined && side.buses.length === 0 && side.loads.some((id) => context.drawing.equipment[id]?.props.use === "receptacles");
 }
 /** Service or feeder of a one- or two-family dwelling with every load and every bus beyond it. */
-function wholeDwelling(context: CheckContext, circuit: string): boolean {
+export function wholeDwelling(context: CheckContext, circuit: string): boolean {
   if (context.drawing.site.occupancy !== "one- or two-family dwelling" || context.drawing.circuits[circuit]?.system !== "ac") return false;
   const { side } = topology(context.graph);
   const sides = [side(circuit, "from"), side(circuit, "to")];
   const utility = sides.find((one) => one.utilities.length > 0);
   const other = sides.find((one) => one !== utility && one.utilities.length === 0);
   return utility !== undefined && other !== undefined && utility.loads.length + utility.buses.length === 0 && other.loads.length + other.buses.length > 0;
+}
+
+/** Feeder of a dwelling whose conductors carry what its service conductors carry: they need not be larger, 310.12. */
+function asServiceConductors(context: CheckContext, circuit: string, ampacityA: number): boolean {
+  const serviceA = dwellingServiceA(context);
+  return serviceA !== null && ampacityA >= serviceA - 1e-9 && dwellingFeeder(context, circuit);
+}
+/** Feeder toward loads or buses of a one- or two-family dwelling, whether it carries all of them or a part. */
+export function dwellingFeeder(context: CheckContext, circuit: string): boolean {
+  if (context.drawing.site.occupancy !== "one- or two-family dwelling" || context.drawing.circuits[circuit]?.system !== "ac") return false;
+  const { side } = topology(context.graph);
+  const sides = [side(circuit, "from"), side(circuit, "to")];
+  const other = sides.find((one) => one.utilities.length === 0);
+  return sides.some((one) => one.utilities.length > 0) && other !== undefined && other.buses.length > 0;
+}
+/** Ampacity of the conductors that carry the whole dwelling, A, the smallest; null where none are drawn or their size is not known. */
+export function dwellingServiceA(context: CheckContext): number | null {
+  return context.once("ampacity of the dwelling's service conductors", () => {
+    if (context.drawing.site.occupancy !== "one- or two-family dwelling") return null;
+    const values = powerCircuits(context.graph).filter((id) => wholeDwelling(context, id)).flatMap((id) => context.graph.sections(id).map((section) => {
+      const wire = wireOf(context, id, section, new Reader(context));
+      return wire && columnAmpacityA(wire, terminalsOf(context, id, null, 75).lowest);
+    }));
+    return values.length === 0 || values.some((value) => value === null) ? null : Math.min(...values.map((value) => value ?? 0));
+  });
 }
 
 /** Sources, converters and loads at the ends of a circuit's run, for the list of elements. */
