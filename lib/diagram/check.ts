@@ -104,6 +104,7 @@ function referenceFaults(drawing: Drawing): DocumentFault[] {
   for (const [id, sensor] of Object.entries(drawing.sensors)) {
     need("circuits", sensor.circuit, pointer("sensors", id, "circuit"));
     need("equipment", sensor.reads, pointer("sensors", id, "reads"));
+    need("circuits", sensor.lead ?? null, pointer("sensors", id, "lead"));
   }
   for (const [id, interlock] of Object.entries(drawing.interlocks)) {
     for (const member of Object.keys(interlock.switches)) {

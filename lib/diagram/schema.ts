@@ -311,6 +311,13 @@ export const sensorSchema = z.strictObject({
   leadLimitFt: z.number().min(0).max(2000).nullable(),
   /** Equipment that reads it. */
   reads: idSchema.nullable(),
+  /** What one sensor measures by the instruction: the conductor it encloses, or the whole circuit from that one. */
+  covers: z.enum(["its conductor", "all conductors"]).nullable().optional(),
+  /** Primary current set in the equipment that reads it, A. */
+  settingA: z.number().min(0).max(10000).nullable().optional(),
+  /** Data circuit drawn as its lead; where none is drawn, the length of the lead inside the enclosure, ft. */
+  lead: idSchema.nullable().optional(),
+  leadLengthFt: z.number().min(0).max(2000).nullable().optional(),
   /** Page of the maker's instruction that fixes its place. */
   instruction: sourceSchema.nullable(),
   at: pointSchema,
@@ -339,6 +346,14 @@ export const statementSchema = z.strictObject({
 });
 /** Distance between two pieces of equipment, ft, and whether one is seen from the other. */
 export const distanceSchema = z.strictObject({ a: idSchema, b: idSchema, ft: z.number().min(0).max(5000).nullable(), inSight: z.boolean().nullable() });
+/** Tightening torque of one terminal as it was applied: value asked for, value reached, and the tool. */
+export const torqueSchema = z.strictObject({
+  equipment: idSchema, port: z.string().max(24),
+  specifiedLbfIn: z.number().min(0.5).max(5000).nullable(), achievedLbfIn: z.number().min(0).max(5000).nullable(),
+  /** Range that the maker states about the value; null where only the value is stated. */
+  tolerancePercent: z.number().min(0).max(50).nullable(),
+  tool: words(80), toolDueOn: z.iso.date().nullable(), on: z.iso.date(), by: words(80),
+});
 export const textSchema = z.strictObject({ at: pointSchema, lines: words(600), style: z.enum(["note", "heading", "compartment"]), keynote: words(4).nullable(), vertical: z.boolean() });
 
 export const drawingSchema = z.strictObject({
@@ -356,6 +371,7 @@ export const drawingSchema = z.strictObject({
   texts: z.record(idSchema, textSchema),
   statements: z.record(idSchema, statementSchema).optional(),
   distances: z.record(idSchema, distanceSchema).optional(),
+  torques: z.record(idSchema, torqueSchema).optional(),
 });
 
 export type Drawing = z.infer<typeof drawingSchema>;
@@ -376,6 +392,7 @@ export type Bond = z.infer<typeof bondSchema>;
 export type Interlock = z.infer<typeof interlockSchema>;
 export type Sensor = z.infer<typeof sensorSchema>;
 export type Statement = z.infer<typeof statementSchema>;
+export type Torque = z.infer<typeof torqueSchema>;
 export type Distance = z.infer<typeof distanceSchema>;
 export type Acceptance = z.infer<typeof acceptanceSchema>;
 export type Endpoint = z.infer<typeof endpointSchema>;

@@ -74,9 +74,9 @@ export function addDataAndGround(drawing: DrawingBuilder): void {
 
 /** Current sensors: exchange at the interconnection and at the generator. */
 export function addSensors(drawing: DrawingBuilder): void {
-  const common = { arrow: "from" as const, reads: "inv-1", leadLimitFt: 33, rotation: 0 as const };
+  const common = { arrow: "from" as const, reads: "inv-1", covers: "its conductor" as const, leadLimitFt: 33, rotation: 0 as const };
   for (const [n, pole] of [[1, "L1"], [2, "L2"]] as const) {
-    drawing.sensor(`CT-${n}`, { ...common, circuit: "f1b", pole, purpose: "interconnect exchange", ratio: "200 A : 0.333 V", ratingA: 200, instruction: { document: "HB-78 data sheet", page: "H22" }, at: { x: 33, y: 20 } });
-    drawing.sensor(`CT-${n + 2}`, { ...common, circuit: "f5", pole, purpose: "generator exchange", ratio: "100 A : 0.333 V", ratingA: 100, instruction: { document: "HB-78 data sheet", page: "H23" }, at: { x: 50, y: 20 } });
+    drawing.sensor(`CT-${n}`, { ...common, circuit: "f1b", pole, purpose: "interconnect exchange", ratio: "200 A : 0.333 V", ratingA: 200, settingA: 200, lead: "k-4", instruction: { document: "HB-78 data sheet", page: "H22" }, at: { x: 33, y: 20 } });
+    drawing.sensor(`CT-${n + 2}`, { ...common, circuit: "f5", pole, purpose: "generator exchange", ratio: "100 A : 0.333 V", ratingA: 100, settingA: 100, lead: "k-5", instruction: { document: "HB-78 data sheet", page: "H23" }, at: { x: 50, y: 20 } });
   }
 }

@@ -23,7 +23,7 @@ function renamed(drawing: Drawing): Drawing {
   const ids = new Map(maps.flatMap((map) => Object.keys(drawing[map]).map((id, index) => [id, `z${map.slice(0, 2)}${index}`] as const)));
   const text = JSON.stringify(drawing, (key, value: unknown) => {
     const name = (id: string): string => ids.get(id) ?? id;
-    if (typeof value === "string" && ["parent", "equipment", "raceway", "circuit", "from", "to", "reads", "sharesGroundOf"].includes(key)) return name(value);
+    if (typeof value === "string" && ["parent", "equipment", "raceway", "circuit", "from", "to", "reads", "lead", "sharesGroundOf"].includes(key)) return name(value);
     if (typeof value === "object" && value !== null && !Array.isArray(value) && ([...maps, "switches"] as string[]).includes(key)) {
       return Object.fromEntries(Object.entries(value).map(([id, each]) => [name(id), each] as const).reverse());
     }

@@ -14,6 +14,9 @@ export interface RuleCase {
   finds?: readonly string[];
   /** Ids of the elements of which it asks a missing value. */
   asks?: readonly string[];
+  /** Declared rules: ids of the elements whose question is open, and of those that somebody answered. */
+  open?: readonly string[];
+  stated?: readonly string[];
   /** True where nothing but the way conductors, routes, devices or bonds run was changed. */
   moved?: boolean;
 }
@@ -51,19 +54,25 @@ export const lengthFt = (drawing: Drawing, raceway: string, feet: number | null)
   stretch.lengthFt = feet;
 };
 
-export interface Said { finds: string[]; asks: string[] }
+export interface Said { finds: string[]; asks: string[]; open: string[]; stated: string[] }
+/** What a person states about an element under a rule, on an invented day. */
+export function state(drawing: Drawing, rule: string, anchor: string, value: "yes" | "no" | "not applicable", on = "2026-04-20"): void {
+  (drawing.statements ??= {})[`${rule}-${Object.keys(drawing.statements ?? {}).length + 1}`] = { rule, anchor, value, by: "T. Wrenfield", on, note: "" };
+}
 /** What one rule alone says of the clean farm system after an edit. */
 export function say(rule: string, edit: (drawing: Drawing) => void): Said {
   const found = rules.find((each) => each.meta.id === rule);
   if (!found) throw new Error(`there is no rule ${rule}`);
   const drawing = cleanDrawing();
   edit(drawing);
-  const { findings } = check(drawing, { rules: [found] });
+  const { findings, declarations } = check(drawing, { rules: [found] });
   const broken = findings.find((finding) => finding.variant === "engine-error");
   if (broken) throw new Error(broken.message);
   return {
     finds: findings.filter((finding) => finding.kind === "finding" && finding.rule === rule).map((finding) => finding.anchor.id).sort(),
     asks: [...new Set(findings.filter((finding) => finding.kind === "needs-data").map((finding) => finding.anchor.id))].sort(),
+    open: declarations.filter((one) => one.statement === null).map((one) => one.anchor.id).sort(),
+    stated: declarations.filter((one) => one.statement !== null).map((one) => one.anchor.id).sort(),
   };
 }
 

@@ -20,6 +20,7 @@ export function SensorForm({ id }: { id: string }) {
   const sensor = graph.drawing.sensors[id] as Sensor;
   const { readOnly, set, take, mark } = useEdit({ collection: "sensors", id });
   const circuits = Object.fromEntries(Object.keys(graph.drawing.circuits).map((each) => [each, `${tagOf(graph, { collection: "circuits", id: each })}, ${circuitEnd(graph, each, "from")} to ${circuitEnd(graph, each, "to")}`]));
+  const leads = Object.fromEntries(Object.entries(circuits).filter(([each]) => graph.drawing.circuits[each]?.system === "data"));
   const readers = Object.fromEntries(Object.keys(graph.drawing.equipment).filter((each) => graph.ports(each).some((port) => port.system === "data")).map((each) => [each, tagOf(graph, { collection: "equipment", id: each })]));
   return (
     <FieldGroup title="Sensor">
@@ -29,6 +30,10 @@ export function SensorForm({ id }: { id: string }) {
       <ChoiceField label="Conductor" value={sensor.pole ?? ""} options={["L1", "L2", "L3"]} readOnly={readOnly} mark={mark("pole")} onCommit={(value) => set("pole", value || null)} />
       <TextField label="Ratio" value={sensor.ratio ?? ""} readOnly={readOnly} mark={mark("ratio")} onCommit={(text) => set("ratio", text.trim() || null)} />
       <TextField label="Rating" unit="A" value={showValue(sensor.ratingA)} readOnly={readOnly} mark={mark("ratingA")} onCommit={(text) => take("ratingA", readNumber(text, "A", 0, 10000))} />
+      <TextField label="Rating as set in the reader" unit="A" value={showValue(sensor.settingA ?? null)} readOnly={readOnly} mark={mark("settingA")} onCommit={(text) => take("settingA", readNumber(text, "A", 0, 10000))} />
+      <ChoiceField label="One sensor measures" wide value={sensor.covers ?? ""} options={["its conductor", "all conductors"]} readOnly={readOnly} mark={mark("covers")} onCommit={(value) => set("covers", value || null)} />
+      <ChoiceField label="Lead" wide value={sensor.lead ?? ""} options={byTag(leads)} words={leads} readOnly={readOnly} mark={mark("lead")} onCommit={(value) => set("lead", value || null)} />
+      {!sensor.lead && <TextField label="Lead inside the enclosure" unit="ft" value={showValue(sensor.leadLengthFt ?? null)} readOnly={readOnly} mark={mark("leadLengthFt")} onCommit={(text) => take("leadLengthFt", readNumber(text, "ft", 0, 2000))} />}
       <TextField label="Leads at most" unit="ft" value={showValue(sensor.leadLimitFt)} readOnly={readOnly} mark={mark("leadLimitFt")} onCommit={(text) => take("leadLimitFt", readNumber(text, "ft", 0, 2000))} />
       <ChoiceField label="Read by" wide value={sensor.reads ?? ""} options={byTag(readers)} words={readers} readOnly={readOnly} mark={mark("reads")} onCommit={(value) => set("reads", value || null)} />
       <TextField label="Instruction, page" wide value={sensor.instruction ? `${sensor.instruction.document}, p. ${sensor.instruction.page}` : ""} readOnly={readOnly} mark={mark("instruction")} onCommit={(text) => {

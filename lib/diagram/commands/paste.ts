@@ -63,7 +63,7 @@ export const paste: Recipe<"paste"> = (draft, { content, ids, dx, dy }) => {
   for (const [id, each] of Object.entries(content.interlocks)) {
     draft.interlocks[fresh(id)] = { ...copy(each), tag: tag(each.tag, "IL-"), at: each.at ? move(each.at) : null, switches: Object.fromEntries(Object.keys(each.switches).map((member) => [fresh(member), true as const])) };
   }
-  for (const [id, each] of Object.entries(content.sensors)) draft.sensors[fresh(id)] = { ...copy(each), tag: tag(each.tag, "CT-"), circuit: fresh(each.circuit), reads: inside(each.reads), at: move(each.at) };
+  for (const [id, each] of Object.entries(content.sensors)) draft.sensors[fresh(id)] = { ...copy(each), tag: tag(each.tag, "CT-"), circuit: fresh(each.circuit), reads: inside(each.reads), ...(each.lead ? { lead: Object.hasOwn(content.circuits, each.lead) ? fresh(each.lead) : null } : {}), at: move(each.at) };
   for (const [id, each] of Object.entries(content.texts)) draft.texts[fresh(id)] = { ...copy(each), at: move(each.at) };
   const count = Object.keys(content.equipment).length + Object.keys(content.raceways).length;
   return `paste ${count} element${count === 1 ? "" : "s"}`;

@@ -24,6 +24,7 @@ export const deleteElements: Recipe<"deleteElements"> = (draft, { refs }, say) =
   for (const [id, sensor] of Object.entries(draft.sensors)) {
     if (circuits.has(sensor.circuit)) drop({ collection: "sensors", id });
     else if (sensor.reads && equipment.has(sensor.reads)) sensor.reads = null;
+    if (sensor.lead && circuits.has(sensor.lead)) sensor.lead = null;
   }
   for (const [id, bond] of Object.entries(draft.bonds)) if (equipment.has(bond.equipment)) drop({ collection: "bonds", id });
   for (const [id, interlock] of Object.entries(draft.interlocks)) {

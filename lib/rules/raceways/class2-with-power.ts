@@ -32,7 +32,7 @@ export const class2WithPower: Rule = {
     statement: "Class 2 and 3 conductors may not share a raceway, cable or enclosure with power conductors unless a barrier or a listed permission parts them.",
     risk: "A damaged power conductor puts line voltage on data wiring that people touch.",
     citations: sections(["725.136(A)", "read"], ["725.136(A)", "agreed"], ["725.136(A)", "agreed"]), mustFixAllowed: MUST_FIX_TO_2023, limits: {},
-    reads: ["circuits.system", "circuits.sections.cable.class", "circuits.sections.route", "raceways.compartments", "raceways.kind"], absorbs: [],
+    reads: ["circuits.system", "circuits.sections.cable.class", "circuits.sections.route", "raceways.compartments", "raceways.kind"], absorbs: ["ct-in-power-raceway"],
   },
   subjects: ({ drawing }) => Object.keys(drawing.raceways).sort().map(racewayRef),
   evaluate: ({ id }, context): Outcome => {

@@ -2,6 +2,7 @@ import type { Sensor } from "@/lib/diagram/schema";
 import { NEVER_MUST_FIX, notCode } from "@/lib/rules/engine/meta";
 import type { CheckContext, FindingDraft, Rule, Suggestion } from "@/lib/rules/engine/types";
 import { circuitRef, found, nameOf, names, NOT_APPLICABLE, PASS, Reader, sensorRef } from "@/lib/rules/shared/outcome";
+import { sensorsTogether as together } from "@/lib/rules/shared/sensors";
 import { powerCircuits, topology, type Side } from "@/lib/rules/shared/topology";
 
 type Purpose = NonNullable<Sensor["purpose"]>;
@@ -29,15 +30,6 @@ function fits(context: CheckContext, purpose: Purpose, circuit: string): { towar
     return unit === null ? { toward: null, reason: "no inverter lies on one side of it alone" } : { toward: null, reason: null };
   }
   return { toward: null, reason: null };
-}
-
-/** Sensors of one purpose on one circuit are one fault: the first speaks for all. */
-function together(context: CheckContext, id: string): readonly string[] {
-  const own = context.drawing.sensors[id];
-  return Object.keys(context.drawing.sensors).sort().filter((other) => {
-    const each = context.drawing.sensors[other];
-    return each !== undefined && own !== undefined && each.circuit === own.circuit && each.purpose === own.purpose && each.reads === own.reads;
-  });
 }
 
 export const ctWrongSide: Rule = {

@@ -34,6 +34,11 @@ const BY_SERVICE: Readonly<Record<(typeof SERVICE_SYSTEMS)[number], { volts: num
   "480Y/277 V, 4-wire": { volts: 480, phases: 3 }, "120 V, 2-wire": { volts: 120, phases: 1 },
 };
 
+/** Line-to-line voltage of the service, V; null where no utility is drawn or its system is not known. */
+export function serviceVolts(context: Context): number | null {
+  const known = sourcesOf(context).utilities.flatMap((one) => one.volts ?? []);
+  return known.length === 0 ? null : Math.max(...known);
+}
 /** Available fault current stated at a service, A: at the utility or for the site; the larger where both are. Null: nobody said. */
 export function statedFaultA({ drawing }: Pick<CheckContext, "drawing">, utility: string): number | null {
   const stated = [numberOf({ drawing }, utility, "availableFaultCurrentA"), drawing.site.availableFaultCurrentA].filter((value): value is number => value !== null && value > 0);
