@@ -36,7 +36,7 @@ function Shell({ id, label, unit, mark, wide, bare, children, refusal, hint }: S
 }
 
 /** Field that is taken over on Enter or when it is left; Esc gives back what was there. */
-export function TextField({ label, value, unit, readOnly, mark, hint, wide, bare, empty = "not known", onCommit, list }: FieldProps & { list?: readonly string[] }) {
+export function TextField({ label, value, unit, readOnly, mark, hint, wide, bare, empty = "not known", onCommit, list, suggestions }: FieldProps & { list?: readonly string[]; /** Id of a datalist that several fields share. */ suggestions?: string }) {
   const id = useId();
   const [typed, setTyped] = useState<string | null>(null);
   const [refusal, setRefusal] = useState<string | null>(null);
@@ -50,7 +50,7 @@ export function TextField({ label, value, unit, readOnly, mark, hint, wide, bare
   return (
     <Shell id={id} label={label} refusal={refusal} unit={unit} mark={mark} wide={wide} bare={bare} hint={hint}>
       <input
-        id={id} className={FIELD} value={typed ?? value} readOnly={readOnly} placeholder={empty} list={list ? `${id}-list` : undefined} autoComplete="off"
+        id={id} className={FIELD} value={typed ?? value} readOnly={readOnly} placeholder={empty} list={list ? `${id}-list` : suggestions} autoComplete="off"
         aria-invalid={refusal !== null} title={mark?.message}
         onChange={(event) => setTyped(event.target.value)} onBlur={commit}
         onKeyDown={(event) => {

@@ -27,7 +27,7 @@ export function FileList({ files, place }: { files: readonly FileAnswer[]; place
   };
   return (
     <>
-      <ul aria-label="Files">{files.map((file) => <FileRow key={file.id} file={file} onRemove={() => setRemoving(file)} />)}</ul>
+      <ul aria-label="Files" className="@container">{files.map((file) => <FileRow key={file.id} file={file} onRemove={() => setRemoving(file)} />)}</ul>
       <Dialog
         open={removing !== null} onOpenChange={(open) => !open && close()} title={`Remove ${removing?.name ?? ""}`}
         description="It is taken off this list for everyone. What was sealed with it keeps it."
@@ -45,7 +45,7 @@ export function FileList({ files, place }: { files: readonly FileAnswer[]; place
 function FileRow({ file, onRemove }: { file: FileAnswer; onRemove: () => void }) {
   const picture = file.contentType !== "application/pdf";
   return (
-    <li className="grid grid-cols-[56px_minmax(0,1fr)_auto] items-center gap-4 border-b border-g2 px-5 py-3 last:border-b-0 phone:grid-cols-[56px_minmax(0,1fr)]">
+    <li className="grid grid-cols-[56px_minmax(0,1fr)_auto] items-center gap-4 border-b border-g2 px-5 py-3 last:border-b-0 @max-[480px]:grid-cols-[56px_minmax(0,1fr)]">
       {picture
         ? <FilePicture file={file} alt="" className="size-14 object-cover shadow-[0_0_0_1px_var(--g1)]" />
         : <span aria-hidden="true" className="grid h-14 w-11 place-items-center justify-self-center border border-ink bg-paper font-lettering text-label">PDF</span>}
@@ -54,7 +54,7 @@ function FileRow({ file, onRemove }: { file: FileAnswer; onRemove: () => void })
         <p className="text-body text-ink2"><span className="first-letter:uppercase inline-block">{file.purpose}</span>. {fileFacts(file)}.</p>
         <p className="text-label text-ink3">{file.uploadedBy}, {dateWords(file.uploadedAt)}</p>
       </div>
-      <div className="flex gap-2 phone:col-start-2">
+      <div className="flex gap-2 @max-[480px]:col-start-2">
         <a href={fileUrl(file.id)} className={`${buttonClass("plain", "bar")} hover:bg-paper`} aria-label={`Download ${file.name}`}>Download</a>
         {file.may.remove && <Button size="bar" look="quiet" aria-label={`Remove ${file.name}`} onClick={onRemove}>Remove</Button>}
       </div>

@@ -47,7 +47,7 @@ export function LibraryTable({ entries, total, chosenId, onChoose, scroller, onE
           <th className={`${HEAD} w-[190px] narrow:w-[150px]`}>Key rating</th>
           <th className={`${HEAD} w-[140px] narrow:w-[120px]`}>Ratings</th>
           <th className={`${HEAD} w-[76px] text-right`}>Version</th>
-          <th className={`${HEAD} w-[132px] pr-5 text-right narrow:w-[116px]`}>Changed</th>
+          <th className={`${HEAD} w-[132px] pr-5 text-right`}>Changed</th>
         </tr>
       </thead>
       <tbody>
