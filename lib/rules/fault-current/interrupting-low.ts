@@ -2,8 +2,8 @@ import { shown } from "@/lib/calc";
 import { MUST_FIX_TO_2023, sameSection } from "@/lib/rules/engine/meta";
 import type { CheckContext, Rule } from "@/lib/rules/engine/types";
 import { circuitsTo, FAULT_CONVENTION, faultSteps, totalA, type FaultRow } from "@/lib/rules/shared/faultCurrent";
-import { answerOf, failingTogether, higherRating, judgeFault, type FaultVerdict } from "@/lib/rules/shared/faultJudgment";
-import { circuitRef, equipmentRef, found, names, NOT_APPLICABLE, numberOf } from "@/lib/rules/shared/outcome";
+import { answerOf, failingTogether, fewNames, higherRating, judgeFault, type FaultVerdict } from "@/lib/rules/shared/faultJudgment";
+import { circuitRef, equipmentRef, found, NOT_APPLICABLE, numberOf } from "@/lib/rules/shared/outcome";
 
 /** A series rating stated for the device is judged by its own rule; the rating alone need not carry the current then. */
 const seriesStated = (context: CheckContext, { equipment, point, ratingKA }: FaultRow): boolean =>
@@ -33,7 +33,7 @@ export const interruptingLow: Rule = {
     const current = totalA(row.point);
     return found({
       variant: "below-fault-current", anchor, field: "props.interruptingKA", related: [...group.slice(1).map(equipmentRef), ...(parent ? [equipmentRef(parent)] : []), ...circuitsTo(row.point).map(circuitRef)],
-      message: `${names(context, group.map(equipmentRef))} interrupt${group.length === 1 ? "s" : ""} ${ratings.map((each) => shown(each)).join(" and ")} kA; ${shown(current, 0)} A can flow into a fault at the line side. The interrupting rating must not be lower.`,
+      message: `${fewNames(context, group)} interrupt${group.length === 1 ? "s" : ""} ${ratings.map((each) => shown(each)).join(" and ")} kA; ${shown(current, 0)} A can flow into a fault at the line side. The interrupting rating must not be lower.`,
       steps: [...faultSteps(context, row.point), { symbol: "Ir", expression: "not below the fault current", substituted: `${shown((ratings[0] ?? 0) * 1000, 0)} A ≥ ${shown(current, 0)} A`, result: "fails", unit: "" }, { symbol: "Note", expression: FAULT_CONVENTION, substituted: "", result: "", unit: "" }],
     });
   },

@@ -5,7 +5,8 @@ import type { CheckContext, Rule } from "@/lib/rules/engine/types";
 import { ratingRule } from "@/lib/rules/families/rating";
 import { outputA } from "@/lib/rules/shared/currents";
 import { circuitsTo, faultCurrents, faultRows, faultSteps, FAULT_CONVENTION, statedFaultA, totalA } from "@/lib/rules/shared/faultCurrent";
-import { circuitRef, equipmentRef, found, names, nameOf, NOT_APPLICABLE, numberOf, PASS, propertyLabel, Reader } from "@/lib/rules/shared/outcome";
+import { fewNames } from "@/lib/rules/shared/faultJudgment";
+import { circuitRef, equipmentRef, found, nameOf, NOT_APPLICABLE, numberOf, PASS, propertyLabel, Reader } from "@/lib/rules/shared/outcome";
 
 const utilitiesOf = ({ drawing, graph }: CheckContext): readonly string[] => Object.keys(drawing.equipment).sort().filter((id) => graph.kind(id).capabilities.source === "utility");
 
@@ -54,14 +55,14 @@ export const faultAttenuation: Rule = {
     const stated = statedFaultA(context, anchor.id);
     const reader = new Reader(context);
     if (stated === null) { reader.ask(anchor, "props.availableFaultCurrentA", propertyLabel(context, anchor.id, "availableFaultCurrentA")); return reader.outcome(); }
-    const leaning = faultRows(context).filter(({ point, ratingKA }) => point.source?.id === anchor.id && ratingKA !== null && circuitsTo(point).length > 0
-      && ratingKA * 1000 < stated + point.invertersA && ratingKA * 1000 >= totalA(point));
+    const leaning = faultRows(context).filter(({ point, ratingKA }) => ratingKA !== null && ratingKA * 1000 < stated + point.invertersA && ratingKA * 1000 >= totalA(point)
+      && point.source?.id === anchor.id && circuitsTo(point).length > 0);
     const [first] = leaning;
     if (!first) return NOT_APPLICABLE;
     if (context.drawing.sheet.tables["fault-current"]) return PASS;
     return found({
       variant: "not-shown", anchor, related: [...leaning.map((row) => equipmentRef(row.equipment)), ...circuitsTo(first.point).map(circuitRef)],
-      message: `${names(context, leaning.map((row) => equipmentRef(row.equipment)))} ${leaning.length === 1 ? "is" : "are"} rated below the ${shown(stated, 0)} A of the service and ${leaning.length === 1 ? "holds" : "hold"} by the length of conductors. The computation should be on the sheet.`,
+      message: `${fewNames(context, leaning.map((row) => row.equipment))} ${leaning.length === 1 ? "is" : "are"} rated below the ${shown(stated, 0)} A of the service and ${leaning.length === 1 ? "holds" : "hold"} by the length of conductors. The computation should be on the sheet.`,
       steps: [...faultSteps(context, first.point), { symbol: "Note", expression: FAULT_CONVENTION, substituted: "", result: "", unit: "" }],
     });
   },

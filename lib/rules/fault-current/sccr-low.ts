@@ -2,8 +2,8 @@ import { shown } from "@/lib/calc";
 import { MUST_FIX_TO_2023, sameSection } from "@/lib/rules/engine/meta";
 import type { CheckContext, Rule } from "@/lib/rules/engine/types";
 import { circuitsTo, deviceAhead, FAULT_CONVENTION, faultSteps, totalA, type FaultRow } from "@/lib/rules/shared/faultCurrent";
-import { answerOf, failingTogether, higherRating, isOfMarking, judgeFault, type FaultVerdict } from "@/lib/rules/shared/faultJudgment";
-import { circuitRef, equipmentRef, found, nameOf, names, NOT_APPLICABLE, numberOf, textOf } from "@/lib/rules/shared/outcome";
+import { answerOf, failingTogether, fewNames, higherRating, isOfMarking, judgeFault, type FaultVerdict } from "@/lib/rules/shared/faultJudgment";
+import { circuitRef, equipmentRef, found, nameOf, NOT_APPLICABLE, numberOf, textOf } from "@/lib/rules/shared/outcome";
 
 /** A rating stated with the device that is really installed ahead carries the current. */
 function withDevice(context: CheckContext, { equipment, point }: FaultRow): boolean {
@@ -38,7 +38,7 @@ export const sccrLow: Rule = {
     const other = marking !== null && ahead !== null && !isOfMarking(context, ahead, marking) ? ` Its ${shown(numberOf(context, anchor.id, "shortCircuitWithKA") ?? 0)} kA hold behind ${marking} only; ${nameOf(context, equipmentRef(ahead))} is another.` : "";
     return found({
       variant: "below-fault-current", anchor, field: "props.shortCircuitKA", related: [...group.slice(1).map(equipmentRef), ...(ahead ? [equipmentRef(ahead)] : []), ...circuitsTo(row.point).map(circuitRef)],
-      message: `${names(context, group.map(equipmentRef))}: short-circuit rating ${shown(row.ratingKA ?? 0)} kA; ${shown(current, 0)} A can flow into a fault there. The rating must not be lower.${other}`,
+      message: `${fewNames(context, group)}: short-circuit rating ${shown(row.ratingKA ?? 0)} kA; ${shown(current, 0)} A can flow into a fault there. The rating must not be lower.${other}`,
       steps: [...faultSteps(context, row.point), { symbol: "SCCR", expression: "not below the fault current", substituted: `${shown((row.ratingKA ?? 0) * 1000, 0)} A ≥ ${shown(current, 0)} A`, result: "fails", unit: "" }, { symbol: "Note", expression: FAULT_CONVENTION, substituted: "", result: "", unit: "" }],
     });
   },

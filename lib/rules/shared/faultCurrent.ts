@@ -2,7 +2,7 @@ import { faultCurrent, shown, type FaultSegment, type Step } from "@/lib/calc";
 import { equipmentOfNode, nodeKey, type DrawingGraph } from "@/lib/diagram/graph";
 import type { SERVICE_SYSTEMS } from "@/lib/diagram/schema";
 import type { CheckContext } from "@/lib/rules/engine/types";
-import { faultNet, IMPEDANCE_TOLERANCE, ownBranch, stretchesOfCircuit, takeGates, walkFault, type FaultNet, type FaultSource, type FaultWay } from "./faultWalk";
+import { faultNet, IMPEDANCE_TOLERANCE, ownBranch, stretchOf, takeGates, walkFault, type FaultNet, type FaultSource, type FaultWay } from "./faultWalk";
 import { circuitRef, equipmentRef, nameOf, numberOf, propertyLabel, textOf, type Reader } from "./outcome";
 import { topology } from "./topology";
 
@@ -79,25 +79,31 @@ function build(context: Context): Currents {
   }));
   const inverters = inverterReach(context, net.gates);
   const points = new Map<string, FaultPoint | null>();
-  const bestWay = (node: string, ways: ReadonlyMap<string, readonly FaultWay[]>, source: FaultSource): { way: FaultWay; amperes: number | null } | null =>
-    (ways.get(node) ?? []).map((way) => ({ way, amperes: amperesOf(source, way) })).sort((a, b) => (b.amperes ?? Infinity) - (a.amperes ?? Infinity))[0] ?? null;
+  interface Reached { source: FaultSource; way: FaultWay; amperes: number | null }
+  const bestWay = (node: string, { source, ways }: (typeof walks)[number]): Reached | null => {
+    let best: Reached | null = null;
+    for (const way of ways.get(node) ?? []) {
+      const amperes = amperesOf(source, way);
+      if (!best || (amperes ?? Infinity) > (best.amperes ?? Infinity)) best = { source, way, amperes };
+    }
+    return best;
+  };
 
   const at = (node: string): FaultPoint | null => {
     const known = points.get(node);
     if (known !== undefined) return known;
-    const reached = walks.flatMap(({ source, ways }) => {
-      const best = bestWay(node, ways, source);
-      return best ? [{ source, ...best }] : [];
-    });
+    const reached: Reached[] = [];
+    for (const walk of walks) { const best = bestWay(node, walk); if (best) reached.push(best); }
     const unrated = reached.filter((one) => one.amperes === null);
-    const candidates = reached.map(({ source, way, amperes }): FaultPoint => {
-      const added = reached.reduce((sum, one) => sum + (one.source !== source && beside.includes(one.source) ? one.amperes ?? 0 : 0), 0);
+    let point: FaultPoint | null = null;
+    for (const { source, way, amperes } of reached) {
+      const added = beside.length === 0 ? 0 : reached.reduce((sum, one) => sum + (one.source !== source && beside.includes(one.source) ? one.amperes ?? 0 : 0), 0);
       const joined = inverters(node, way.taken);
-      return { node, source, way, sourceA: amperes === null ? null : amperes + added, unrated, inverters: joined.ids, invertersA: joined.amperes };
-    });
-    const alone = inverters(node, new Map());
-    if (candidates.length === 0 && alone.ids.length > 0) candidates.push({ node, source: null, way: null, sourceA: 0, unrated, inverters: alone.ids, invertersA: alone.amperes });
-    const point = candidates.sort(mostFirst)[0] ?? null;
+      const one: FaultPoint = { node, source, way, sourceA: amperes === null ? null : amperes + added, unrated, inverters: joined.ids, invertersA: joined.amperes };
+      if (!point || mostFirst(one, point) < 0) point = one;
+    }
+    const alone = point ? null : inverters(node, new Map());
+    if (alone && alone.ids.length > 0) point = { node, source: null, way: null, sourceA: 0, unrated, inverters: alone.ids, invertersA: alone.amperes };
     points.set(node, point);
     return point;
   };
@@ -155,7 +161,7 @@ function inverterReach(context: Context, gates: FaultNet["gates"]): (node: strin
   const answers = new Map<string, { ids: readonly string[]; amperes: number }>();
   return (node, taken) => {
     const block = root(node);
-    const key = `${block} ${[...taken].sort(([a], [b]) => (a < b ? -1 : 1)).join(";")}`;
+    const key = taken.size === 0 ? block : `${block} ${[...taken].sort(([a], [b]) => (a < b ? -1 : 1)).join(";")}`;
     let answer = answers.get(key);
     if (!answer) {
       const seen = new Set([block]);
@@ -243,7 +249,7 @@ export function faultSteps(context: Context, point: FaultPoint): readonly Step[]
     for (const at of pathOf(way)) {
       const { edge, before } = at;
       if (edge?.by === "circuit" && before?.counted && context.drawing.circuits[edge.id]?.wiring === "field") {
-        segments.push(...stretchesOfCircuit(context.graph, edge.id).flatMap((part) => (part ? [{ ...part, label: nameOf(context, circuitRef(edge.id)) }] : [])));
+        segments.push(...context.graph.sections(edge.id).flatMap((section) => { const part = stretchOf(context.graph, section); return part ? [{ ...part, label: nameOf(context, circuitRef(edge.id)) }] : []; }));
       } else if (edge?.by === "converter" && at.volts !== null) {
         flush();
         const loopV = at.phases === 3 ? at.volts / Math.sqrt(3) : at.volts;
@@ -271,8 +277,11 @@ export function faultRows(context: Context): readonly FaultRow[] {
       const { properties } = context.graph.kind(equipment);
       const ratingField = Object.hasOwn(properties, "interruptingKA") ? "interruptingKA" : Object.hasOwn(properties, "shortCircuitKA") ? "shortCircuitKA" : null;
       if (ratingField === null) return [];
-      const points = context.graph.ports(equipment).filter((port) => port.system === "ac").map((port) => at(nodeKey(equipment, port.id))).filter((point) => point !== null);
-      const worst = points.sort(mostFirst)[0];
+      let worst: FaultPoint | null = null;
+      for (const port of context.graph.ports(equipment)) {
+        const point = port.system === "ac" ? at(nodeKey(equipment, port.id)) : null;
+        if (point && (!worst || mostFirst(point, worst) < 0)) worst = point;
+      }
       return worst ? [{ equipment, node: worst.node, point: worst, ratingKA: numberOf(context, equipment, ratingField), ratingField }] : [];
     });
   });

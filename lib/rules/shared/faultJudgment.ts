@@ -1,6 +1,6 @@
 import type { CheckContext, Outcome, Suggestion } from "@/lib/rules/engine/types";
 import { compareFault, faultRows, type FaultRow } from "./faultCurrent";
-import { equipmentRef, nameOf, NOT_APPLICABLE, numberOf, PASS, propertyLabel, Reader, textOf } from "./outcome";
+import { equipmentRef, nameOf, names, NOT_APPLICABLE, numberOf, PASS, propertyLabel, Reader, textOf } from "./outcome";
 
 /** Ratings in which devices and equipment are offered, kA: common practice, no published source. */
 const OFFERED_KA = [5, 10, 14, 18, 22, 25, 42, 65, 100, 200];
@@ -62,5 +62,9 @@ export function higherRating(context: CheckContext, rows: readonly FaultRow[], k
   if (rating === undefined || !first) return [];
   const where = list.length === 1 ? nameOf(context, equipmentRef(first.equipment)) : `${nameOf(context, equipmentRef(first.equipment))} and ${list.length - 1} more`;
   return [{ label: `Use ${what} of ${rating} kA for ${where}`, also, patches: list.map((row) => ({ op: "replace" as const, path: `/equipment/${row.equipment}/props/${row.ratingField}`, value: rating })) }];
+}
+/** Names of a few, or the first and how many more: a panel may hold dozens of devices. */
+export function fewNames(context: CheckContext, ids: readonly string[]): string {
+  return ids.length > 4 ? `${nameOf(context, equipmentRef(ids[0] ?? ""))} and ${ids.length - 1} others` : names(context, ids.map(equipmentRef));
 }
 export const answerOf = (verdict: FaultVerdict | undefined): Outcome | null => (verdict === undefined ? NOT_APPLICABLE : verdict.outcome === "fails" ? null : verdict.outcome);

@@ -1,6 +1,7 @@
 import { stretchLoopOhm, type FaultSegment } from "@/lib/calc";
 import { hasAcImpedance, MATERIAL_BY_SYMBOL } from "@/lib/code";
 import { equipmentOfNode, type ConductionEdge, type DrawingGraph } from "@/lib/diagram/graph";
+import type { Section } from "@/lib/diagram/schema";
 import { holds } from "@/lib/states";
 import { isConductorSize } from "@/lib/units";
 import { topology } from "./topology";
@@ -11,6 +12,7 @@ import { topology } from "./topology";
  * one transfer switch, are never taken together. Where conductors form a loop, the better way counts alone.
  */
 
+type SizedStretch = Extract<FaultSegment, { size: unknown }>;
 export interface FaultSource {
   id: string;
   node: string;
@@ -36,34 +38,41 @@ export interface FaultWay {
   /** Position taken at every throw and interlock, by its id. */
   taken: ReadonlyMap<string, string>;
 }
+const OPEN: readonly (readonly [string, string])[] = [];
 const NOTHING: ReadonlyMap<string, string> = new Map();
 const wayKey = (taken: ReadonlyMap<string, string>): string => (taken.size === 0 ? "" : [...taken].sort(([a], [b]) => (a < b ? -1 : 1)).map((each) => each.join("=")).join(";"));
 /** Transformers weaken less than their plate says: makers may miss the impedance by a tenth. Common practice, no published source. */
 export const IMPEDANCE_TOLERANCE = 0.9;
 
-/** Conductors of a circuit as stretches of a fault path; null for one whose size, metal or length is not known. */
-export function stretchesOfCircuit(graph: DrawingGraph, id: string): readonly (FaultSegment | null)[] {
-  return graph.sections(id).map((section): FaultSegment | null => {
-    const { ungrounded, lengthFt, parallelSets } = section;
-    if (!ungrounded || !isConductorSize(ungrounded.size) || ungrounded.metal === null || lengthFt === null) return null;
-    const material = MATERIAL_BY_SYMBOL[ungrounded.metal];
-    // A size that the table leaves out is taken for no length at all: the current is never taken too small.
-    if (!hasAcImpedance(ungrounded.size, material)) return { label: "", lengthFt: 0, size: "1/0 AWG", material, conduit: "pvc" };
-    const steel = section.route.length > 0 && section.route.every((step) => {
-      const raceway = graph.drawing.raceways[step.raceway];
-      return raceway !== undefined && (raceway.type === null ? raceway.metal === true : ["EMT", "IMC", "RMC", "FMC", "LFMC"].includes(raceway.type) && raceway.metal !== false);
-    });
-    return { label: "", lengthFt, sets: parallelSets, size: ungrounded.size, material, conduit: steel ? "steel" : "pvc" };
+const STEEL = new Set<string | null>(["EMT", "IMC", "RMC", "FMC", "LFMC"]);
+/** Conductors of a section as a stretch of a fault path; null where size, metal or length is not known. */
+export function stretchOf(graph: DrawingGraph, { ungrounded, lengthFt, parallelSets, route }: Section): SizedStretch | null {
+  if (!ungrounded || !isConductorSize(ungrounded.size) || ungrounded.metal === null || lengthFt === null) return null;
+  const material = MATERIAL_BY_SYMBOL[ungrounded.metal];
+  // A size that the table leaves out is taken for no length at all: the current is never taken too small.
+  if (!hasAcImpedance(ungrounded.size, material)) return { label: "", lengthFt: 0, size: "1/0 AWG", material, conduit: "pvc" };
+  const steel = route.length > 0 && route.every((step) => {
+    const raceway = graph.drawing.raceways[step.raceway];
+    return raceway !== undefined && (raceway.type === null ? raceway.metal === true : STEEL.has(raceway.type) && raceway.metal !== false);
   });
+  return { label: "", lengthFt, sets: parallelSets, size: ungrounded.size, material, conduit: steel ? "steel" : "pvc" };
+}
+/** Ω of one conductor of 1,000 ft, looked up once for a size, metal and conduit. */
+const perThousandFt = new Map<string, number>();
+function oneWayOhm(part: SizedStretch): number {
+  const key = `${part.size} ${part.material} ${part.conduit}`;
+  let ohm = perThousandFt.get(key);
+  if (ohm === undefined) { ohm = stretchLoopOhm({ ...part, lengthFt: 1000, sets: 1 }, 3, true); perThousandFt.set(key, ohm); }
+  return (ohm * part.lengthFt) / 1000 / (part.sets ?? 1);
 }
 
 /** Gate that an edge passes, as id and position: a throw, or a switch of an interlock that holds. */
 export function gatesOf(graph: DrawingGraph): (edge: ConductionEdge) => readonly (readonly [string, string])[] {
-  const locks = new Map<string, string[]>();
+  const locks = new Map<string, (readonly [string, string])[]>();
   for (const [id, interlock] of Object.entries(graph.drawing.interlocks)) {
-    if (holds(interlock)) for (const one of Object.keys(interlock.switches)) locks.set(one, [...(locks.get(one) ?? []), id]);
+    if (holds(interlock)) for (const one of Object.keys(interlock.switches)) locks.set(one, [...(locks.get(one) ?? []), [id, one]]);
   }
-  return (edge) => edge.by === "throw" ? [[edge.id, edge.position ?? ""]] : edge.by === "switch" ? (locks.get(edge.id) ?? []).map((lock) => [lock, edge.id] as const) : [];
+  return (edge) => edge.by === "throw" ? [[edge.id, edge.position ?? ""]] : edge.by === "switch" ? locks.get(edge.id) ?? OPEN : OPEN;
 }
 /** What has been taken with the gates of one more edge, or null where these shut each other out. */
 export function takeGates(taken: ReadonlyMap<string, string>, gates: readonly (readonly [string, string])[]): ReadonlyMap<string, string> | null {
@@ -99,9 +108,13 @@ export function faultNet(graph: DrawingGraph): FaultNet {
   const ohmOf = (id: string): Ohms => {
     let known = ohms.get(id);
     if (!known) {
-      const parts = stretchesOfCircuit(graph, id).filter((part) => part !== null);
-      const three = parts.reduce((total, part) => total + stretchLoopOhm(part, 3, true), 0);
-      known = { one: three * 2, three, two: Object.values(graph.drawing.circuits[id]?.sections ?? {}).some((section) => section.ungrounded !== null && section.ungrounded.count < 3) };
+      let [three, two] = [0, false];
+      for (const section of Object.values(graph.drawing.circuits[id]?.sections ?? {})) {
+        const part = stretchOf(graph, section);
+        if (part) three += oneWayOhm(part);
+        if (section.ungrounded !== null && section.ungrounded.count < 3) two = true;
+      }
+      known = { one: three * 2, three, two };
       ohms.set(id, known);
     }
     return known;
@@ -123,6 +136,7 @@ export function walkFault(net: FaultNet, source: FaultSource, closed: ReadonlySe
     const own = ways.get(way.node);
     if (!own) { ways.set(way.node, [way]); return true; }
     const key = wayKey(way.taken);
+    // Most nodes are reached by one way.
     const at = own.findIndex((one) => wayKey(one.taken) === key);
     const known = own[at];
     if (known && known.loopOhm <= way.loopOhm + 1e-12) return false;
@@ -147,7 +161,7 @@ export function walkFault(net: FaultNet, source: FaultSource, closed: ReadonlySe
 }
 
 function step({ graph, ohmOf, counts }: FaultNet, way: FaultWay, edge: ConductionEdge, node: string, taken: ReadonlyMap<string, string>): FaultWay | null {
-  const next: FaultWay = { ...way, node, edge, before: way, taken };
+  const next: FaultWay = { node, loopOhm: way.loopOhm, volts: way.volts, phases: way.phases, twoOfThree: way.twoOfThree, counted: way.counted, before: way, edge, taken };
   if (edge.by === "converter") return graph.kind(edge.id).capabilities.transformer ? throughTransformer(graph, way, edge, next) : null;
   if (edge.by === "circuit") {
     const circuit = graph.drawing.circuits[edge.id];
