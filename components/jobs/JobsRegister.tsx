@@ -1,40 +1,47 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { useEffect, useMemo, useRef, useState } from "react";
-import type { JobLine } from "@/lib/api";
-import { useJobs, useMe } from "@/lib/client/queries";
-import { LinkButton } from "@/components/ui/Button";
+import { useCallback, useMemo, useRef, useState, type UIEvent } from "react";
+import type { JobLine, JobTab } from "@/lib/api";
+import { useJobs } from "@/lib/client/jobsApi";
+import { useMe } from "@/lib/client/queries";
+import { useRegisterKeys } from "@/lib/client/useRegisterKeys";
+import { useSettled } from "@/lib/client/useSettled";
+import { LicenseLine } from "@/components/people/LicenseLine";
+import { Button, LinkButton } from "@/components/ui/Button";
 import { EmptyNote, ErrorNote, Skeleton } from "@/components/ui/Notes";
+import { JobFiltersRow, NO_FILTERS, askedBy, type JobFilters } from "./JobFilters";
 import { JobPreview } from "./JobPreview";
 import { JobsTable } from "./JobsTable";
 import { OfficeBar } from "./OfficeBar";
 import { paths } from "./paths";
 
-const TABS: readonly { id: string; label: string; holds: (job: JobLine) => boolean }[] = [
-  { id: "all", label: "All", holds: () => true },
-  { id: "mine", label: "Waits for me", holds: (job) => job.waitsFor?.mine ?? false },
-  { id: "draft", label: "Draft", holds: (job) => job.state === "draft" || job.state === "returned" },
-  { id: "review", label: "In review", holds: (job) => job.state === "in review" || job.state === "sealing" },
-  { id: "sealed", label: "Sealed", holds: (job) => job.state === "sealed" || job.state === "void" },
+const TABS: readonly { id: JobTab; label: string }[] = [
+  { id: "all", label: "All" }, { id: "mine", label: "Waits for me" }, { id: "draft", label: "Draft" }, { id: "review", label: "In review" }, { id: "sealed", label: "Sealed" },
 ];
-
-const matches = (job: JobLine, words: string) =>
-  words.toLowerCase().split(/\s+/).every((word) => `${job.number} ${job.name} ${job.addressLines} ${job.parcel} ${job.permitNumber} ${job.jurisdiction ?? ""}`.toLowerCase().includes(word));
+const NO_JOBS: readonly JobLine[] = [];
 
 /** All jobs of the person, with the chosen one shown beside. */
 export function JobsRegister() {
-  const jobs = useJobs();
+  const router = useRouter();
   const me = useMe();
-  const [tab, setTab] = useState("all");
+  const [tab, setTab] = useState<JobTab>("all");
   const [words, setWords] = useState("");
+  const [filters, setFilters] = useState<JobFilters>(NO_FILTERS);
   const [chosenId, setChosenId] = useState<string | null>(null);
   const find = useRef<HTMLInputElement>(null);
-  const all = useMemo(() => jobs.data?.jobs ?? [], [jobs.data]);
-  const shown = useMemo(() => all.filter((job) => (TABS.find((each) => each.id === tab)?.holds(job) ?? true) && matches(job, words)), [all, tab, words]);
+  const jobs = useJobs({ q: useSettled(words.trim(), 150), tab, ...askedBy(filters) });
+  const [first] = jobs.data?.pages ?? [];
+  const shown = useMemo(() => jobs.data?.pages.flatMap((page) => page.jobs) ?? NO_JOBS, [jobs.data]);
+  const untouched = words === "" && tab === "all" && filters === NO_FILTERS;
   const chosen = shown.find((job) => job.id === chosenId) ?? shown[0] ?? null;
   const mayCreate = me.data?.companies.some((each) => each.may.createJobs) ?? false;
-  useRegisterKeys(shown, chosen, setChosenId, find, mayCreate);
+  const ids = useMemo(() => shown.map((job) => job.id), [shown]);
+  const open = useCallback((id: string) => router.push(paths.job(id)), [router]);
+  const make = useCallback(() => router.push(paths.newJob), [router]);
+  useRegisterKeys({ ids, chosen: chosen?.id ?? null, onChoose: setChosenId, onOpen: open, onNew: mayCreate ? make : null, find });
+  const more = () => { if (jobs.hasNextPage && !jobs.isFetchingNextPage) void jobs.fetchNextPage(); };
+  const nearEnd = ({ currentTarget: { scrollTop, clientHeight, scrollHeight } }: UIEvent<HTMLElement>) => { if (scrollHeight - scrollTop - clientHeight < 400) more(); };
 
   return (
     <div className="flex h-full flex-col">
@@ -42,7 +49,7 @@ export function JobsRegister() {
         <label className="flex w-[300px] items-center gap-2 border-l border-desk2 px-2.5 text-ink2 focus-within:bg-vellum">
           <svg viewBox="0 0 18 18" className="size-4 shrink-0" aria-hidden="true"><circle cx="7.5" cy="7.5" r="4.8" fill="none" stroke="currentColor" strokeWidth="1.7" /><path d="M11 11L15.5 15.5" stroke="currentColor" strokeWidth="1.7" /></svg>
           <span className="sr-only">Find job, permit or address</span>
-          <input ref={find} value={words} onChange={(event) => setWords(event.target.value)} placeholder="Find job, permit or address" className="min-w-0 flex-1 bg-transparent text-body text-ink outline-none placeholder:text-ink2" />
+          <input ref={find} value={words} maxLength={120} onChange={(event) => setWords(event.target.value)} placeholder="Find job, permit or address" className="min-w-0 flex-1 bg-transparent text-body text-ink outline-none placeholder:text-ink2" />
           <kbd className="font-sans border border-rule px-1 text-small stretch-label">Ctrl F</kbd>
         </label>
       </OfficeBar>
@@ -56,22 +63,30 @@ export function JobsRegister() {
                   key={each.id} type="button" aria-pressed={tab === each.id} onClick={() => setTab(each.id)}
                   className={`-ml-px border border-b-0 border-ink px-3.5 text-text whitespace-nowrap first:ml-0 ${tab === each.id ? "h-9 bg-paper font-heading" : "mb-[1.5px] h-[34px] bg-vellum text-ink2"}`}
                 >
-                  {each.label} <span className="ml-0.5 font-normal text-ink3">{all.filter(each.holds).length}</span>
+                  {each.label} <span className="ml-0.5 font-normal text-ink3">{first?.tabs[each.id] ?? ""}</span>
                 </button>
               ))}
             </div>
           </div>
-          <div className="min-h-0 flex-1 overflow-y-auto">
+          <JobFiltersRow filters={filters} onChange={setFilters} jurisdictions={first?.jurisdictions ?? []} />
+          <div className={`min-h-0 flex-1 overflow-y-auto ${jobs.isPlaceholderData ? "opacity-70" : ""}`} aria-busy={jobs.isFetching || undefined} onScroll={nearEnd}>
             {jobs.isPending && <Skeleton lines={6} />}
             {jobs.isError && <div className="p-5"><ErrorNote error={jobs.error} onRetry={() => void jobs.refetch()} /></div>}
-            {jobs.data && all.length === 0 && (
+            {first && shown.length === 0 && untouched && (
               <EmptyNote title="No jobs yet" action={mayCreate && <LinkButton href={paths.newJob} look="primary">New job</LinkButton>}>
                 {mayCreate ? "A job is one site: its address, the code that was adopted there, the people, and one drawing from which everything else follows." : "You are not on a job yet. Its administrator puts you on it."}
               </EmptyNote>
             )}
-            {all.length > 0 && shown.length === 0 && <EmptyNote title="Nothing found">No job here fits. Clear what you typed, or look under All.</EmptyNote>}
+            {first && shown.length === 0 && !untouched && <EmptyNote title="Nothing found">No job here fits. Clear what you typed and the filters, or look under All.</EmptyNote>}
             {shown.length > 0 && <JobsTable jobs={shown} chosenId={chosen?.id ?? null} onChoose={setChosenId} />}
+            {jobs.hasNextPage && (
+              <div className="flex items-center gap-3 px-5 py-3 text-body text-ink2">
+                <Button size="bar" busy={jobs.isFetchingNextPage} onClick={more}>Show more</Button>
+                {shown.length} of {first?.total}
+              </div>
+            )}
           </div>
+          <LicenseLine className="shrink-0 border-t border-g1 px-5 py-2" />
           <p className="flex shrink-0 items-center gap-1.5 px-5 py-3 text-body text-ink2 phone:hidden" aria-hidden="true">
             {chosen && <><Key>↑</Key><Key>↓</Key> choose <Key>Enter</Key> open </>}
             {mayCreate && <><Key>N</Key> new job</>}
@@ -84,34 +99,3 @@ export function JobsRegister() {
 }
 
 const Key = ({ children }: { children: string }) => <kbd className="font-sans border border-rule bg-vellum px-1.5 text-label font-strong [&:not(:first-child)]:ml-2">{children}</kbd>;
-
-/** Arrows choose, Enter opens, N makes a job, Ctrl F finds; never while somebody types or a control has the focus. */
-function useRegisterKeys(
-  shown: readonly JobLine[], chosen: JobLine | null, choose: (id: string) => void, find: React.RefObject<HTMLInputElement | null>, mayCreate: boolean,
-) {
-  const router = useRouter();
-  useEffect(() => {
-    const onKey = (event: KeyboardEvent) => {
-      if ((event.ctrlKey || event.metaKey) && event.key.toLowerCase() === "f") {
-        event.preventDefault();
-        find.current?.focus();
-        return;
-      }
-      if (event.ctrlKey || event.metaKey || event.altKey) return;
-      const target = event.target as HTMLElement;
-      const inFind = target === find.current;
-      if (!inFind && target !== document.body) return;
-      const at = shown.findIndex((job) => job.id === chosen?.id);
-      const step = event.key === "ArrowDown" ? 1 : event.key === "ArrowUp" ? -1 : 0;
-      const next = step === 0 ? undefined : shown[Math.min(shown.length - 1, Math.max(0, at + step))];
-      if (next) {
-        event.preventDefault();
-        choose(next.id);
-      } else if (event.key === "Enter" && chosen) router.push(paths.job(chosen.id));
-      else if (event.key.toLowerCase() === "n" && !inFind && mayCreate) router.push(paths.newJob);
-      else if (event.key === "Escape" && inFind) find.current?.blur();
-    };
-    window.addEventListener("keydown", onKey);
-    return () => window.removeEventListener("keydown", onKey);
-  }, [shown, chosen, choose, find, mayCreate, router]);
-}

@@ -4,6 +4,7 @@ import type { JobLine } from "@/lib/api";
 import { whenWords } from "@/lib/client/dates";
 import { RedlineCounts } from "@/components/ui/RedlineMark";
 import { StateStamp } from "@/components/ui/StateStamp";
+import { Due } from "./Due";
 import { paths } from "./paths";
 
 interface JobsTableProps { jobs: readonly JobLine[]; chosenId: string | null; onChoose: (id: string) => void }
@@ -22,6 +23,7 @@ export function JobsTable({ jobs, chosenId, onChoose }: JobsTableProps) {
           <th className={HEAD}>State</th>
           <th className={HEAD}>Open redlines</th>
           <th className={`${HEAD} narrow:hidden`}>Permit</th>
+          <th className={HEAD}>Due</th>
           <th className={HEAD}>Waits for</th>
           <th className={`${HEAD} pr-5 text-right`}>Changed</th>
         </tr>
@@ -47,8 +49,9 @@ function JobRow({ job, chosen, onChoose }: { job: JobLine; chosen: boolean; onCh
       </td>
       <td className={cell}>{job.revision ?? "–"}</td>
       <td className={cell}><StateStamp state={job.state} /></td>
-      <td className={cell}><RedlineCounts counts={job.counts} /></td>
+      <td className={cell}>{job.counts ? <RedlineCounts counts={job.counts} /> : <span className="text-ink3">counting</span>}</td>
       <td className={`${cell} narrow:hidden`}>{job.permitNumber || <span className="text-ink3">not yet</span>}</td>
+      <td className={cell}><Due dueOn={job.dueOn} officeStatus={job.officeStatus} /></td>
       <td className={`${cell} max-w-[220px] truncate ${job.waitsFor?.mine ? "font-heading" : ""}`}>{job.waitsFor?.text ?? "Nobody"}</td>
       <td className={`${cell} pr-5 text-right text-ink2`}>{whenWords(job.changedAt)}</td>
     </tr>

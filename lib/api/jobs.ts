@@ -33,7 +33,8 @@ export const jurisdictionInput = z.strictObject({ name: filledLine(120), edition
 
 export const jobInput = z.strictObject({
   companyId: z.uuid(),
-  number: filledLine(40),
+  /** Left out: the next of the company's scheme. */
+  number: filledLine(40).optional(),
   ...placeFields,
   /** An authority that is known, or a new one that is entered with the job. */
   jurisdiction: z.union([z.strictObject({ id: z.uuid() }), jurisdictionInput]),
@@ -65,15 +66,19 @@ export const jobsQuery = z.strictObject({
   q: line(120).default(""), tab: z.enum(JOB_TABS).default("all"), sort: z.enum(JOB_SORTS).default("changed"),
   /** `late`: due before today. `soon`: due within two weeks, late ones included. */
   due: z.enum(["any", "late", "soon"]).default("any"),
+  /** The day where the person is; without it the server's, which is UTC. */
+  today: day.optional(),
   status: z.enum(["any", ...OFFICE_STATUSES]).default("any"),
   jurisdiction: z.uuid().optional(), archived: z.enum(["yes", "no"]).default("no"),
   limit: z.coerce.number().int().min(1).max(200).default(50), offset: z.coerce.number().int().min(0).max(1_000_000).default(0),
 });
 export type JobsQuery = z.output<typeof jobsQuery>;
-export const duplicateInput = z.strictObject({ number: filledLine(40), name: filledLine(120), drawing: z.boolean().default(true), people: z.boolean().default(false) });
+export const duplicateInput = z.strictObject({ number: filledLine(40).optional(), name: filledLine(120), drawing: z.boolean().default(true), people: z.boolean().default(false) });
 export type DuplicateInput = z.input<typeof duplicateInput>;
 export const archiveInput = z.strictObject({ archived: z.boolean() });
 export const historyQuery = z.strictObject({ before: z.coerce.number().int().min(1).optional(), limit: z.coerce.number().int().min(1).max(100).default(30) });
+export interface HistoryAnswer { entries: HistoryLine[]; more: boolean }
+export interface NextNumberAnswer { number: string; scheme: string }
 /** Something that was done, in words. `id` orders the list and asks for what came before. */
 export interface HistoryLine { id: number; at: string; by: string | null; what: string; detail: string | null }
 

@@ -1,5 +1,5 @@
 import type {
-  CounterAnswer, CounterLine, DrawingAnswer, IssueInput, JobAnswer, JobChange, JobInput, JobLine, JournalEntry, JurisdictionAnswer, LicenseAnswer,
+  CounterAnswer, CounterLine, DrawingAnswer, IssueInput, JobAnswer, JobChange, JobInput, JournalEntry, JurisdictionAnswer, LicenseAnswer,
   LicenseInput, MeAnswer, PasswordInput, PersonAnswer, PersonInput, ProblemBody, RevisionAnswer, RevisionLine, RevisionStatus, SaveAnswer, SaveInput, SetupInput,
 } from "@/lib/api";
 import type { Role } from "@/lib/policy";
@@ -71,7 +71,6 @@ export const api = {
   removePerson: (companyId: string, id: string) => request<undefined>("DELETE", `/api/companies/${at(companyId)}/people/${at(id)}`),
 
   jurisdictions: () => get<{ jurisdictions: JurisdictionAnswer[] }>("/api/jurisdictions"),
-  jobs: () => get<{ jobs: JobLine[] }>("/api/jobs"),
   createJob: (input: JobInput) => post<{ id: string }>("/api/jobs", input),
   job: (jobId: string) => get<JobAnswer>(`/api/jobs/${at(jobId)}`),
   changeJob: (jobId: string, change: JobChange) => request<JobAnswer>("PATCH", `/api/jobs/${at(jobId)}`, change),

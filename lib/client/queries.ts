@@ -19,7 +19,6 @@ export const keys = {
 
 export const useMe = () => useQuery({ queryKey: keys.me, queryFn: api.me, staleTime: 60_000 });
 export const useLicense = () => useQuery({ queryKey: keys.license, queryFn: api.license });
-export const useJobs = () => useQuery({ queryKey: keys.jobs, queryFn: api.jobs, refetchInterval: 30_000 });
 export const useJob = (jobId: string) => useQuery({ queryKey: keys.job(jobId), queryFn: () => api.job(jobId) });
 export const useMembers = (jobId: string, enabled = true) => useQuery({ queryKey: keys.members(jobId), queryFn: () => api.members(jobId), enabled });
 export const useRevisions = (jobId: string) => useQuery({ queryKey: keys.revisions(jobId), queryFn: () => api.revisions(jobId) });

@@ -1,29 +1,19 @@
 import "server-only";
 import { randomUUID } from "node:crypto";
-import { UniqueConstraintError } from "sequelize";
+import { Op } from "sequelize";
 import type { z } from "zod";
 import type { HistoryLine, JobAnswer, duplicateInput, historyQuery } from "@/lib/api";
 import { emptyDrawing } from "@/lib/diagram/new";
 import type { Drawing as DrawingDocument } from "@/lib/diagram/schema";
 import type { Role } from "@/lib/policy";
-import { nextJobNumber } from "@/lib/workflow/jobNumber";
-import { conflict, notFound } from "@/lib/server/http/problem";
+import { notFound } from "@/lib/server/http/problem";
 import { companyAccess, jobAccess, type Actor } from "./actor";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
 import { historyWords } from "./historyWords";
+import { numberTaken, takeNumber } from "./jobNumbers";
 import { getJob } from "./jobs";
-import { today } from "./licenses";
 import { touchJob } from "./touch";
-
-/** What the next job may be called by the company's scheme. Nothing is reserved; the number is taken when the job is made. */
-export async function suggestedNumber(actor: Actor, companyId: string): Promise<{ number: string; scheme: string }> {
-  await companyAccess(actor, companyId, "jobs.create");
-  const { Company, Job } = database();
-  const company = await Company.findByPk(companyId, { rejectOnEmpty: true });
-  const jobs = await Job.findAll({ where: { companyId }, attributes: ["number"], raw: true });
-  return { number: nextJobNumber(company.jobNumberScheme, jobs.map((each) => each.number), today()), scheme: company.jobNumberScheme };
-}
 
 /** The drawing as a new job starts with it: nothing that was decided or granted for the old one comes along. */
 function copyOf(document: DrawingDocument, name: string, number: string, whole: boolean): DrawingDocument {
@@ -44,11 +34,12 @@ export async function duplicateJob(actor: Actor, jobId: string, input: z.output<
       const roles = await companyAccess(actor, job.companyId, "jobs.create", transaction);
       const drawing = await Drawing.findOne({ where: { jobId }, transaction });
       if (!drawing) throw notFound();
+      const { number } = await takeNumber(job.companyId, input.number, transaction);
       const made = await Job.create(
-        { id: randomUUID(), companyId: job.companyId, number: input.number, name: input.name, jurisdictionId: job.jurisdictionId, createdBy: actor.id }, { transaction },
+        { id: randomUUID(), companyId: job.companyId, number, name: input.name, jurisdictionId: job.jurisdictionId, createdBy: actor.id }, { transaction },
       );
       await Drawing.create(
-        { jobId: made.id, document: copyOf(drawing.document, input.name, input.number, input.drawing), checkedSequence: null, checkedRuleSet: null, checkCounts: null, updatedBy: actor.id }, { transaction },
+        { jobId: made.id, document: copyOf(drawing.document, input.name, number, input.drawing), checkedSequence: null, checkedRuleSet: null, checkCounts: null, updatedBy: actor.id }, { transaction },
       );
       const own: Role[] = roles.includes("designer") ? ["administrator", "designer"] : ["administrator"];
       const others = input.people ? await JobMember.findAll({ where: { jobId }, transaction }) : [];
@@ -60,7 +51,7 @@ export async function duplicateJob(actor: Actor, jobId: string, input: z.output<
       return { id: made.id };
     });
   } catch (error) {
-    throw error instanceof UniqueConstraintError ? conflict("number-taken", "Another job of the company has this number.", { field: "number" }) : error;
+    throw numberTaken(error);
   }
 }
 
@@ -79,9 +70,9 @@ export async function archiveJob(actor: Actor, jobId: string, archived: boolean)
 /** What was done to a job, newest first, in words. Saves of one person in a row are one line. */
 export async function jobHistory(actor: Actor, jobId: string, { before, limit }: z.output<typeof historyQuery>): Promise<{ entries: HistoryLine[]; more: boolean }> {
   await jobAccess(actor, jobId, "history.view");
-  const { AuditEntry, User, sequelize } = database();
+  const { AuditEntry, User } = database();
   const rows = await AuditEntry.findAll({
-    where: { jobId, ...(before === undefined ? {} : { id: sequelize.literal(`id < ${before}`) as unknown as string }) },
+    where: { jobId, ...(before === undefined ? {} : { id: { [Op.lt]: String(before) } }) },
     order: [["id", "DESC"]], limit: 4 * limit + 1,
   });
   const people = new Map((await User.findAll({ where: { id: [...new Set(rows.flatMap((row) => row.actorId ?? []))] }, attributes: ["id", "name"] })).map((user) => [user.id, user.name]));

@@ -1,6 +1,5 @@
 import "server-only";
 import { randomUUID } from "node:crypto";
-import { UniqueConstraintError } from "sequelize";
 import type { z } from "zod";
 import type { JobAnswer, jobChange, jobInput } from "@/lib/api";
 import { protectedPatches, siteFrom } from "@/lib/diagram/jurisdiction";
@@ -15,32 +14,30 @@ import { audit } from "./audit";
 import { database, inTransaction } from "./database";
 import { shownCounts } from "./counts";
 import { jobChanges } from "./jobChanges";
+import { numberTaken, takeNumber } from "./jobNumbers";
 import { writeSave } from "./journal";
 import { jurisdictionAnswer, makeJurisdiction, visibleJurisdiction } from "./jurisdictions";
 import { draftLetter } from "./letters";
 
-const numberTaken = (error: unknown) =>
-  error instanceof UniqueConstraintError ? conflict("number-taken", "Another job of the company has this number.", { field: "number" }) : error;
-
 /** Makes a job with an empty drawing; who makes it is its administrator, and designer where they design in the company. */
 export async function createJob(actor: Actor, input: z.output<typeof jobInput>): Promise<{ id: string }> {
-  const { Company, Drawing, Job, JobMember } = database();
+  const { Drawing, Job, JobMember } = database();
   try {
     return await inTransaction(async (transaction) => {
       const roles = await companyAccess(actor, input.companyId, "jobs.create", transaction);
-      const company = await Company.findByPk(input.companyId, { transaction, rejectOnEmpty: true });
+      const { company, number } = await takeNumber(input.companyId, input.number, transaction);
       const jurisdiction = "id" in input.jurisdiction
         ? await visibleJurisdiction(input.jurisdiction.id, input.companyId, transaction)
         : await makeJurisdiction(actor, input.companyId, input.jurisdiction, transaction);
       const site: Site = { ...input.site, ...siteFrom(jurisdiction) };
       const empty = emptyDrawing(site, {
-        jobName: input.name, jobNumber: input.number, addressLines: input.addressLines, parcel: input.parcel, owner: input.owner,
+        jobName: input.name, jobNumber: number, addressLines: input.addressLines, parcel: input.parcel, owner: input.owner,
         designedBy: roles.includes("designer") ? actor.name : "", checkedBy: "", preparer: input.preparer, contractor: input.contractor || company.name,
         permitNumber: input.permitNumber, codes: codesLine(site, jurisdiction), scope: input.scope,
       });
       const document = { ...empty, sheet: { ...empty.sheet, size: jurisdiction.exportProfile.sheetSize } };
       const job = await Job.create(
-        { companyId: company.id, number: input.number, name: input.name, jurisdictionId: jurisdiction.id, createdBy: actor.id }, { transaction },
+        { companyId: company.id, number, name: input.name, jurisdictionId: jurisdiction.id, createdBy: actor.id }, { transaction },
       );
       await Drawing.create({ jobId: job.id, document, checkedSequence: null, checkedRuleSet: null, checkCounts: null, updatedBy: actor.id }, { transaction });
       const own: Role[] = roles.includes("designer") ? ["administrator", "designer"] : ["administrator"];

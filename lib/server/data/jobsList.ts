@@ -7,6 +7,7 @@ import type { RevisionState } from "@/lib/workflow";
 import type { Actor } from "./actor";
 import { countsOfRows, type CountedRow } from "./counts";
 import { database } from "./database";
+import { today } from "./licenses";
 import { waitsFor } from "./waitsFor";
 
 /** Roles with which a job stands in the register. */
@@ -38,7 +39,7 @@ with visible as (
   where v.my_roles && array[:office]::text[] and (v.archived_at is not null) = :archived
     and (:status = 'any' or v.office_status = :status)
     and (:jurisdiction = '' or v.jurisdiction_id::text = :jurisdiction)
-    and (:due = 'any' or (v.due_on is not null and v.office_status <> 'closed' and v.due_on < case :due when 'late' then current_date else current_date + 14 end))
+    and (:due = 'any' or (v.due_on is not null and v.office_status <> 'closed' and v.due_on < case :due when 'late' then :today::date else :today::date + 15 end))
     and lower(concat_ws(' ', v.number, v.name, d.address_lines, d.parcel, d.owner_name, d.permit_number, u.name)) like all (array[:words]::text[])
 )`;
 const TABS: Readonly<Record<JobsQuery["tab"], string>> = {
@@ -63,7 +64,7 @@ const patterns = (q: string): string[] => {
 export async function listJobs(actor: Actor, query: JobsQuery): Promise<JobsAnswer> {
   const { sequelize } = database();
   const replacements = {
-    me: actor.id, office: OFFICE, archived: query.archived === "yes", status: query.status, jurisdiction: query.jurisdiction ?? "", due: query.due,
+    me: actor.id, office: OFFICE, archived: query.archived === "yes", status: query.status, jurisdiction: query.jurisdiction ?? "", due: query.due, today: query.today ?? today(),
     words: patterns(query.q), limit: query.limit, offset: query.offset,
   };
   const [rows, [tabs], jurisdictions] = await Promise.all([

@@ -14,6 +14,7 @@ import { conflict, notFound } from "@/lib/server/http/problem";
 import { jobAccess, type Actor } from "./actor";
 import { audit } from "./audit";
 import { database, inTransaction } from "./database";
+import { refuseArchived } from "./jobs";
 import { writeSave } from "./journal";
 import { today } from "./licenses";
 
@@ -69,6 +70,7 @@ export async function takeJurisdiction(actor: Actor, jobId: string, { version, e
   const { Drawing, Jurisdiction } = database();
   await inTransaction(async (transaction) => {
     const { job } = await jobAccess(actor, jobId, "job.edit", { transaction });
+    refuseArchived(job);
     const drawing = await Drawing.findOne({ where: { jobId }, transaction, lock: transaction.LOCK.UPDATE });
     const row = job.jurisdictionId ? await Jurisdiction.findByPk(job.jurisdictionId, { transaction, lock: transaction.LOCK.SHARE }) : null;
     if (!drawing) throw notFound();

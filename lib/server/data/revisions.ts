@@ -27,6 +27,7 @@ export async function lockRevision(actor: Actor, revisionId: string, action: Job
   demand(roles, "revision.view", revision.state);
   // A role that may never do it is refused here; a state in which nobody may is named by the workflow.
   demand(roles, action, "in review");
+  refuseArchived(job);
   return { revision, job, roles };
 }
 

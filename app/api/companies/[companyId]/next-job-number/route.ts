@@ -1,4 +1,4 @@
-import { suggestedNumber } from "@/lib/server/data/jobLife";
+import { suggestedNumber } from "@/lib/server/data/jobNumbers";
 import { handle } from "@/lib/server/http/handle";
 import { companyParams as params } from "@/lib/server/http/params";
 
