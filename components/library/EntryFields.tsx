@@ -32,8 +32,8 @@ export function EntryFields({ kind, draft, onDraft, nameError, ...sources }: Ent
   };
   const place = groups.find((group) => group.id === "place");
   return (
-    <div className="px-6 pb-6 phone:px-4">
-      <TextField label="Name" name="name" className="mt-5 max-w-[520px]" value={draft.name} maxLength={120} error={nameError} readOnly={sources.readOnly} placeholder="As your company calls it" onChange={(event) => onDraft((now) => ({ ...now, name: event.target.value }))} />
+    <div className="px-6 pt-5 pb-6 phone:px-4">
+      <TextField label="Name" name="name" className="max-w-[520px]" value={draft.name} maxLength={120} error={nameError} readOnly={sources.readOnly} placeholder="As your company calls it" onChange={(event) => onDraft((now) => ({ ...now, name: event.target.value }))} />
       {!sources.readOnly && <SourceAll kind={kind} draft={draft} onDraft={onDraft} datasheets={sources.datasheets} />}
       {groups.filter((group) => group !== place).map((group) => <Group key={group.id} group={group} draft={draft} editing={editing} />)}
       {ports.length > 0 && <p className="mt-5 text-body text-ink2">Ports: ratings and terminals as marked. A drawing asks for them where a conductor lands.</p>}

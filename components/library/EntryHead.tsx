@@ -18,7 +18,7 @@ export function EntryHead({ entry }: { entry: LibraryEntryAnswer }) {
         <div className="min-w-0 flex-1 basis-[480px]">
           <h1 className="text-[34px] leading-tight font-heading stretch-heading tracking-[-0.015em] break-words narrow:text-title">{entry.name}</h1>
           <p className="mt-1 flex flex-wrap items-center gap-x-3 text-text text-ink2">
-            {isKindId(entry.kind) && <span className="-ml-2"><PartIcon part={entry.kind} /></span>}
+            {isKindId(entry.kind) && <span className="-mx-4"><PartIcon part={entry.kind} /></span>}
             <span>{kindTitle(entry.kind)}</span>
             {entry.keyRating && <span>{entry.keyRating}</span>}
             <span>Version {entry.version}, changed {whenInSentence(entry.changedAt)}</span>

@@ -85,10 +85,10 @@ function EntryForm({ entry }: { entry: LibraryEntryAnswer }) {
           <Caution compact className="mt-5" />
         </div>
         <div className="grid min-w-0 gap-5 narrow:gap-4">
-          <PicturesPanel files={files} edit={edit} name={entry.name} />
           <DatasheetsPanel files={files} edit={edit} />
           <VersionsPanel entry={entry} onTakeUp={(version, data) => { state.setDraft((now) => ({ ...now, data })); state.setNote(`As in version ${version}`); window.scrollTo({ top: 0 }); }} />
           <UsedOnPanel entry={entry} />
+          <PicturesPanel files={files} edit={edit} name={entry.name} />
         </div>
       </div>
       <LeaveDialog unsaved={edit && state.changed} what="What you typed on this entry is" />

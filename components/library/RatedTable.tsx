@@ -65,7 +65,7 @@ function Row({ name, property, draft, documents, readOnly, onProperty, onSource,
         </div>
       </td>
       {value === null
-        ? <td className={`${CELL} text-label text-ink3`} colSpan={3}>not known, so nothing rests on it</td>
+        ? <td className={CELL} colSpan={3} />
         : (
           <>
             <td className={CELL}><TextField bare label={`Document of ${label}`} value={source?.document ?? ""} empty="datasheet or manual" suggestions={documents} readOnly={readOnly} onCommit={(typed) => (typed.trim().length > 120 ? "at most 120 characters" : set({ document: typed.trim() }))} /></td>
