@@ -114,6 +114,7 @@ function referenceFaults(drawing: Drawing): DocumentFault[] {
       if (kind && !kindDefinition(kind).capabilities.switching) faults.push({ path, message: "does not switch anything" });
     }
   }
+  for (const [id, torque] of Object.entries(drawing.torques ?? {})) need("equipment", torque.equipment, pointer("torques", id, "equipment"));
   for (const [id, label] of Object.entries(drawing.labels)) {
     for (const place of Object.keys(label.places)) {
       if (!Object.hasOwn(drawing.equipment, place) && !Object.hasOwn(drawing.raceways, place)) {

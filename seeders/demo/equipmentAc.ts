@@ -5,7 +5,7 @@ const PLANT = place("A", "plant room", "indoor dry", 40);
 const WORKSHOP = place("A", "plant room east wall", "indoor dry", 40);
 
 const acBreaker = (ratingA: number, interruptingKA: number, mount: string, position: "main" | "branch" = "branch") => ({
-  current: "ac", ratingA, poles: 2, interruptingKA, voltageV: 240, mount, position, family: "LK", lineLoadMarked: false, listedHundredPercent: false,
+  current: "ac", ratingA, poles: 2, interruptingKA, voltageV: 240, mount, position, family: "LK", slashRated: true, lineLoadMarked: false, listedHundredPercent: false,
   trip: "fixed", lockable: false, auxiliaryContact: false,
 });
 /** Both ports of a breaker or switch with the same terminal. */

@@ -17,6 +17,8 @@ export const breaker = defineKind({
     mount: choice("Mounting", ["bolt-on", "plug-on", "plug-on with hold-down", "stud"]),
     position: choice("Place", ["main", "branch"]),
     family: text("Family", 20),
+    slashRated: flag("Slash rating, such as 120/240 V", { rated: true }),
+    poleJoin: choice("Poles open", ["common trip", "identified handle ties", "each by itself"], { rated: true }),
     lineLoadMarked: flag("Marked line and load", { rated: true }),
     listedHundredPercent: flag("Listed for 100 % continuous duty", { rated: true }),
     lockable: flag("Lockable open"),

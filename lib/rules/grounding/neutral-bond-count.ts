@@ -52,7 +52,7 @@ export const neutralBondCount: Rule = {
     citations: sections(["250.24(A)(5), 250.30(A)(1)", "read"], ["250.24(A)(5), 250.30(A)(1)", "read"], ["250.24(B), 250.30(A)(1)", "read"]),
     mustFixAllowed: MUST_FIX_TO_2023, limits: {},
     reads: ["bonds.equipment", "bonds.fitted", "bonds.closes", "circuits.sections.grounded", "circuits.from", "circuits.to", "interlocks"],
-    absorbs: ["generator-bond-vs-transfer", "inverter-bond-relay", "neutral-bond-missing"],
+    absorbs: ["generator-bond-vs-transfer", "inverter-bond-relay", "neutral-bond-missing", "slash-rated-breaker"],
   },
   subjects: ({ drawing, graph }) => Object.keys(drawing.equipment).sort().filter((id) => { const { source } = graph.kind(id).capabilities; return source === "utility" || source === "generator"; }).slice(0, 1).map(equipmentRef),
   evaluate: (_ref, context) => {

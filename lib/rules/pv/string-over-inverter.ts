@@ -11,7 +11,7 @@ export const stringOverInverter: Rule = {
     risk: "One cold morning destroys the inverter, and its warranty does not cover it.",
     citations: sameSection("690.7(A)"), mustFixAllowed: MUST_FIX_TO_2023, limits: {},
     reads: ["equipment.props.modules", "equipment.props.openCircuitV", "equipment.props.openCircuitPercentPerC", "equipment.props.pvMaximumV", "site.recordLowC", "circuits.from", "circuits.to"],
-    absorbs: ["string-over-building-cap"],
+    absorbs: ["insulation-voltage-class", "string-over-building-cap"],
   },
   subjects: (context) => pvStrings(context).map(equipmentRef),
   evaluate: ({ id }, context) => {

@@ -113,12 +113,20 @@ export function largerConductor(context: CheckContext, circuit: string, permits:
   for (const section of context.graph.sections(circuit)) {
     const wire = wireOf(context, circuit, section, new Reader(context));
     if (!wire || permits(section, wire)) continue;
-    const size = CONDUCTOR_SIZES.find((one) => compareSizes(one, wire.size) > 0 && buildingSize(one) && permits(section, { ...wire, size: one }));
+    const size = CONDUCTOR_SIZES.find((one) => compareSizes(one, wire.size) > 0 && buildingSize(one) && fitsTerminals(context, circuit, one) && permits(section, { ...wire, size: one }));
     if (size === undefined) return null;
     patches.push(...sizePatches(circuit, section, size));
     label = size;
   }
   return patches.length === 0 ? null : { label: `Enlarge ${nameOf(context, circuitRef(circuit))} to ${label}`, also, patches };
+}
+/** True where the marked wire ranges at both ends take a size; what is not marked is left to the reader. */
+export function fitsTerminals(context: CheckContext, circuit: string, size: ConductorSize): boolean {
+  const { from, to } = context.drawing.circuits[circuit] ?? {};
+  return [from, to].every((end) => {
+    const most = end && context.graph.port(end.equipment, end.port)?.data.terminal?.largest;
+    return !isConductorSize(most) || compareSizes(size, most) <= 0;
+  });
 }
 const buildingSize = (size: ConductorSize): boolean => !["18 AWG", "16 AWG"].includes(size);
 function sizePatches(circuit: string, section: SectionOf, size: ConductorSize): PatchOperation[] {

@@ -1,0 +1,125 @@
+import { voltageDrop, type CalcResult, type VoltageDropDetail } from "@/lib/calc";
+import { VOLTAGE_DROP_BRANCH_PCT, VOLTAGE_DROP_TOTAL_PCT } from "@/lib/code/tables/source-constants";
+import { nodeKey } from "@/lib/diagram/graph";
+import type { Circuit } from "@/lib/diagram/schema";
+import { NEVER_MUST_FIX, sections } from "@/lib/rules/engine/meta";
+import type { CheckContext, Outcome, Rule } from "@/lib/rules/engine/types";
+import { wireOf, type SectionOf, type Wire } from "@/lib/rules/shared/conductors";
+import { carriedBy, loadA, type Carried } from "@/lib/rules/shared/currents";
+import { circuitRef, found, nameOf, NOT_APPLICABLE, numberOf, PASS, Reader } from "@/lib/rules/shared/outcome";
+import { comparison, compact, largerConductor } from "@/lib/rules/shared/protection";
+import { motorCircuit, powerCircuits, topology } from "@/lib/rules/shared/topology";
+import { acVoltageV, serviceSystem } from "@/lib/rules/shared/voltage";
+
+interface Flow { amperes: number; volts: number; kind: Carried["kind"] }
+/** Current that flows for hours and the voltage at which it does; null where nothing tells. */
+function flowOf(context: CheckContext, id: string, reader: Reader): Flow | null {
+  const { system } = context.drawing.circuits[id] as Circuit;
+  const { side } = topology(context.graph);
+  const sides = [side(id, "from"), side(id, "to")];
+  const carried = carriedBy(context, id, new Reader(context));
+  if (system === "ac") {
+    const motors = !carried && motorCircuit(context.graph, id) ? sides.find((one) => one.utilities.length + one.converters.length + one.generators.length === 0)?.loads ?? [] : [];
+    const amperes = carried?.required.detail.maximumA ?? motors.reduce((sum, load) => sum + (loadA(context, load) ?? 0), 0);
+    const volts = amperes > 0 ? acVoltageV(context, id, reader) : null;
+    return volts === null ? null : { amperes, volts, kind: carried?.kind ?? "motor" };
+  }
+  if (!carried) return null;
+  if (system === "battery-dc") {
+    const volts = [...new Set(sides.flatMap((one) => one.batteries))].map((battery) => numberOf(context, battery, "nominalV")).find((value) => value !== null) ?? null;
+    return volts === null ? null : { amperes: carried.required.detail.maximumA, volts, kind: "storage" };
+  }
+  const string = carried.from[0] ?? "";
+  const [modules, volts, amperes] = [numberOf(context, string, "modules"), numberOf(context, string, "maximumPowerV"), numberOf(context, string, "maximumPowerA")];
+  return modules === null || volts === null || amperes === null ? null : { amperes: amperes * carried.from.length, volts: modules * volts, kind: "pv" };
+}
+function sectionDrop(context: CheckContext, id: string, section: SectionOf, wire: Wire, flow: Flow): CalcResult<number, VoltageDropDetail> {
+  const dc = context.drawing.circuits[id]?.system !== "ac";
+  const raceway = section.route.map((step) => context.drawing.raceways[step.raceway]).find((one) => one?.kind === "conduit");
+  const conduit = raceway?.metal === true ? (raceway.type === "EMT" || raceway.type === "RMC" || raceway.type === "IMC" ? "steel" : "aluminum") : "pvc";
+  return voltageDrop({ edition: context.edition, system: dc ? "dc" : serviceSystem(context)?.phases === 3 ? "ac 3-phase" : "ac 1-phase", currentA: flow.amperes, voltageV: flow.volts, lengthFt: section.lengthFt ?? 0, size: wire.size, material: wire.material, sets: wire.sets, ...(dc ? {} : { conduit }) });
+}
+interface Drop { percent: number; flow: Flow; steps: CalcResult<number, VoltageDropDetail>["steps"]; missing: Reader["missing"] }
+/** Drop along every power circuit, worked out once; circuits of which nothing tells are left out. */
+const drops = (context: CheckContext): ReadonlyMap<string, Drop> => context.once("voltage drop of circuits", () => new Map(powerCircuits(context.graph).flatMap((id): [string, Drop][] => {
+  const reader = new Reader(context);
+  const flow = flowOf(context, id, reader);
+  if (!flow) return [];
+  const parts = context.graph.sections(id).flatMap((section) => {
+    const wire = wireOf(context, id, section, reader);
+    if (section.lengthFt === null) reader.ask(circuitRef(id), `sections.${section.id}.lengthFt`, `length of ${nameOf(context, circuitRef(id))}`);
+    return wire && section.lengthFt !== null ? [sectionDrop(context, id, section, wire, flow)] : [];
+  });
+  return [[id, { percent: parts.reduce((sum, part) => sum + part.detail.dropPct, 0), flow, steps: parts.flatMap((part) => part.steps), missing: reader.missing }]];
+})));
+/** Sum of the drops from the utility to the far end of each circuit, with the largest single one on the way. One walk from the service. */
+const totals = (context: CheckContext): ReadonlyMap<string, { percent: number; worst: number; path: readonly string[] }> => context.once("voltage drop from the service", () => {
+  const { graph, drawing } = context;
+  const reached = new Map<string, { percent: number; worst: number; path: readonly string[] }>();
+  const seen = new Set<string>();
+  const queue = Object.keys(drawing.equipment).sort().filter((id) => graph.kind(id).capabilities.source === "utility").flatMap((id) => graph.ports(id)).map((port) => ({ node: nodeKey(port.equipment, port.id), percent: 0, worst: 0, path: [] as readonly string[] }));
+  for (let i = 0; i < queue.length; i += 1) {
+    const at = queue[i];
+    if (!at || seen.has(at.node)) continue;
+    seen.add(at.node);
+    for (const edge of graph.edgesAt(at.node)) {
+      const next = edge.a === at.node ? edge.b : edge.a;
+      if (edge.by === "converter" || seen.has(next)) continue;
+      // The utility's own drop is not the customer's; a source's circuit is no load.
+      const drop = edge.by === "circuit" ? drops(context).get(edge.id) : undefined;
+      const own = drop && drop.flow.kind !== "inverter output" && drop.flow.kind !== "generator" ? drop.percent : 0;
+      const step = { node: next, percent: at.percent + own, worst: Math.max(at.worst, own), path: own > 0 ? [...at.path, edge.id] : at.path };
+      if (edge.by === "circuit" && own > 0) reached.set(edge.id, step);
+      queue.push(step);
+    }
+  }
+  return reached;
+});
+const limitOf = (context: CheckContext, kind: Carried["kind"]): number => context.limit(kind === "inverter output" ? "sourcePercent" : "segmentPercent");
+
+export const voltageDropAdvice: Rule = {
+  meta: {
+    id: "voltage-drop-advice", group: "Conductors and overcurrent", severity: "advice", evidence: "derived",
+    statement: "Long runs should keep the voltage drop near 3 % a circuit and 5 % in all, and the rise toward an inverter near 2 %, so that it does not trip on high voltage.",
+    risk: "Motors start badly, energy is lost, and inverters drop out on sunny days.",
+    citations: sections(["210.19(A)(1) note 4, 215.2(A)(1) note 2", "unconfirmed"], ["210.19(A) note 3, 215.2(A)(1) note 2", "unconfirmed"], ["210.19 note, 215.2(A)(2) note 2", "unconfirmed"]), mustFixAllowed: NEVER_MUST_FIX,
+    limits: {
+      segmentPercent: { value: VOLTAGE_DROP_BRANCH_PCT, unit: "%", source: "informational notes of 210.19 and 215.2" }, totalPercent: { value: VOLTAGE_DROP_TOTAL_PCT, unit: "%", source: "informational notes of 210.19 and 215.2" },
+      sourcePercent: { value: 2, unit: "% rise", source: "common practice, no published source" },
+    },
+    reads: ["circuits.sections.lengthFt", "circuits.sections.ungrounded", "circuits.load", "equipment.props.currentA", "equipment.props.continuousA", "equipment.props.systemVoltage", "site.serviceSystem", "circuits.from", "circuits.to"], absorbs: [],
+  },
+  subjects: (context) => powerCircuits(context.graph).map(circuitRef),
+  evaluate: (anchor, context): Outcome => {
+    const drop = drops(context).get(anchor.id);
+    if (!drop) return NOT_APPLICABLE;
+    const most = limitOf(context, drop.flow.kind);
+    const what = drop.flow.kind === "inverter output" ? "rise" : "drop";
+    if (drop.percent > most + 1e-9) {
+      return found({
+        variant: what, anchor, field: "sections.ungrounded.size", related: [],
+        message: `${nameOf(context, anchor)}: voltage ${what} ${drop.percent.toFixed(1)} % at ${Math.round(drop.flow.amperes * 10) / 10} A; it should stay near ${most} %.`,
+        steps: [...drop.steps, comparison("Vd%", drop.percent, most, "%", false)],
+      });
+    }
+    const total = totals(context).get(anchor.id);
+    const inAll = context.limit("totalPercent");
+    if (total && total.percent > inAll + 1e-9 && total.percent - drop.percent <= inAll + 1e-9 && total.worst <= context.limit("segmentPercent") + 1e-9) {
+      return found({
+        variant: "in-all", anchor, field: "sections.ungrounded.size", related: total.path.filter((id) => id !== anchor.id).map(circuitRef),
+        message: `From the service to the end of ${nameOf(context, anchor)} the voltage drops ${total.percent.toFixed(1)} %; it should stay near ${inAll} % in all.`,
+        steps: [...drop.steps, comparison("ΣVd%", total.percent, inAll, "%", false)],
+      });
+    }
+    return drop.missing.length > 0 ? { outcome: "needs-data", fields: drop.missing } : PASS;
+  },
+  suggest: ({ anchor: { id }, variant }, context) => {
+    const drop = drops(context).get(id);
+    const total = totals(context).get(id);
+    if (!drop) return [];
+    const most = variant === "in-all" && total ? drop.percent - (total.percent - context.limit("totalPercent")) : limitOf(context, drop.flow.kind);
+    const count = context.graph.sections(id).length;
+    return most <= 0 ? [] : compact([largerConductor(context, id, (section, wire) => sectionDrop(context, id, section, wire, drop.flow).detail.dropPct <= most / count, "Check the raceway fill, the terminals and the equipment grounding conductor, which grows with it.")]);
+  },
+  examples: { violates: "40 A at 240 V over 130 ft of 8 AWG copper: 3.4 %.", passes: "6 AWG copper: 2.1 %." },
+};
