@@ -1,46 +1,47 @@
+import { useId } from "react";
 import { OFFICE_STATUSES } from "@/lib/api";
-import type { JobsAsked } from "@/lib/client/jobsApi";
 import { Button } from "@/components/ui/Button";
+import { EVERYTHING, unusual, type JobsChoice } from "./useJobsChoice";
 
-export interface JobFilters { due: NonNullable<JobsAsked["due"]>; status: NonNullable<JobsAsked["status"]>; jurisdiction: string; archived: boolean; sort: NonNullable<JobsAsked["sort"]> }
-export const NO_FILTERS: JobFilters = { due: "any", status: "any", jurisdiction: "", archived: false, sort: "changed" };
+interface JobFiltersProps { choice: JobsChoice; onChange: (part: Partial<JobsChoice>) => void; jurisdictions: readonly { id: string; name: string }[] }
 
-/** Filters as the server is asked for them; what is at its usual value is not asked for. */
-export const askedBy = ({ due, status, jurisdiction, archived, sort }: JobFilters): JobsAsked => ({
-  ...(due === "any" ? {} : { due }), ...(status === "any" ? {} : { status }), ...(jurisdiction ? { jurisdiction } : {}), ...(archived ? { archived: "yes" as const } : {}), ...(sort === "changed" ? {} : { sort }),
-});
-
-interface JobFiltersRowProps { filters: JobFilters; onChange: (filters: JobFilters) => void; jurisdictions: readonly { id: string; name: string }[] }
-
-const SELECT = "h-8 max-w-[220px] border border-rule bg-paper px-2 text-body text-ink";
-const DUE: Readonly<Record<JobFilters["due"], string>> = { any: "any day", soon: "within two weeks", late: "late" };
-const SORT: Readonly<Record<JobFilters["sort"], string>> = { changed: "last changed", due: "due", number: "number", name: "name" };
+const DUE: Readonly<Record<JobsChoice["due"], string>> = { any: "any day", soon: "within two weeks", late: "late" };
+const SORT: Readonly<Record<JobsChoice["sort"], string>> = { changed: "last change", due: "due date", number: "number", name: "name" };
+const STATUS = { any: "any", ...Object.fromEntries(OFFICE_STATUSES.map((each) => [each, each])) } as Record<JobsChoice["status"], string>;
 
 /** What of the register is shown, and in which order. */
-export function JobFiltersRow({ filters, onChange, jurisdictions }: JobFiltersRowProps) {
-  const set = (change: Partial<JobFilters>) => onChange({ ...filters, ...change });
-  const dirty = Object.keys(askedBy(filters)).length > 0;
+export function JobFilters({ choice, onChange, jurisdictions }: JobFiltersProps) {
+  const { q: _, tab: __, ...filters } = choice;
+  const narrowed = Object.keys(unusual({ ...EVERYTHING, ...filters })).length > 0;
   return (
-    <div className="flex shrink-0 flex-wrap items-center gap-x-5 gap-y-2 border-b border-g2 bg-vellum px-5 py-2 text-body text-ink2">
-      <Choice label="Due" value={filters.due} options={DUE} onChange={(due) => set({ due })} />
-      <Choice label="Office status" value={filters.status} options={{ any: "any", ...Object.fromEntries(OFFICE_STATUSES.map((each) => [each, each])) } as Record<JobFilters["status"], string>} onChange={(status) => set({ status })} />
+    <div className="flex min-h-[50px] shrink-0 flex-wrap items-center gap-x-4 gap-y-2 border-b border-g2 bg-vellum px-5 py-2 text-body text-ink2">
+      <Choice label="Due" value={choice.due} options={DUE} onChange={(due) => onChange({ due })} />
+      <Choice label="Status" value={choice.status} options={STATUS} onChange={(status) => onChange({ status })} />
       {jurisdictions.length > 1 && (
-        <Choice label="Jurisdiction" value={filters.jurisdiction} options={{ "": "any", ...Object.fromEntries(jurisdictions.map((each) => [each.id, each.name])) }} onChange={(jurisdiction) => set({ jurisdiction })} />
+        <Choice label="Jurisdiction" value={choice.jurisdiction} options={{ "": "any", ...Object.fromEntries(jurisdictions.map((each) => [each.id, each.name])) }} onChange={(jurisdiction) => onChange({ jurisdiction })} />
       )}
-      <Choice label="In order of" value={filters.sort} options={SORT} onChange={(sort) => set({ sort })} />
-      <label className="flex items-center gap-2"><input type="checkbox" checked={filters.archived} onChange={(event) => set({ archived: event.target.checked })} className="size-4 accent-[var(--ink)]" />Archive</label>
-      {dirty && <Button size="bar" look="quiet" onClick={() => onChange(NO_FILTERS)}>Clear filters</Button>}
+      <label className="flex h-8 items-center gap-2">
+        <input type="checkbox" checked={choice.archived === "yes"} onChange={(event) => onChange({ archived: event.target.checked ? "yes" : "no" })} className="size-4 accent-[var(--ink)]" />
+        Archived
+      </label>
+      {narrowed && <Button size="bar" look="quiet" onClick={() => onChange({ ...EVERYTHING, q: choice.q, tab: choice.tab })}>Clear</Button>}
+      <span className="ml-auto"><Choice label="Order" value={choice.sort} options={SORT} onChange={(sort) => onChange({ sort })} /></span>
     </div>
   );
 }
 
-function Choice<Value extends string>({ label, value, options, onChange }: { label: string; value: Value; options: Readonly<Record<Value, string>>; onChange: (value: Value) => void }) {
+interface ChoiceProps<Value extends string> { label: string; value: Value; options: Readonly<Record<Value, string>>; onChange: (value: Value) => void }
+
+/** A small list to choose from; another than the usual, which comes first, stands out. */
+function Choice<Value extends string>({ label, value, options, onChange }: ChoiceProps<Value>) {
+  const entries = Object.entries(options) as [Value, string][];
+  const id = useId();
   return (
-    <label className="flex items-center gap-2">
-      {label}
-      <select value={value} onChange={(event) => onChange(event.target.value as Value)} className={`${SELECT} ${value === Object.keys(options)[0] ? "" : "border-ink font-strong"}`}>
-        {(Object.entries(options) as [Value, string][]).map(([id, words]) => <option key={id} value={id}>{words}</option>)}
+    <span className="inline-flex items-center gap-2">
+      <label htmlFor={id}>{label}</label>
+      <select id={id} value={value} onChange={(event) => onChange(event.target.value as Value)} className={`h-8 max-w-[200px] border bg-paper px-2 text-body text-ink ${value === entries[0]?.[0] ? "border-rule" : "border-ink font-strong"}`}>
+        {entries.map(([id, words]) => <option key={id} value={id}>{words}</option>)}
       </select>
-    </label>
+    </span>
   );
 }

@@ -1,8 +1,10 @@
+import type { ReactNode } from "react";
 import type { JobLine } from "@/lib/api";
 import { editionName } from "@/lib/code/adoption";
 import { LinkButton } from "@/components/ui/Button";
 import { RedlineMark, type MarkKind } from "@/components/ui/RedlineMark";
 import { Caution } from "@/components/ui/Caution";
+import { Due } from "./Due";
 import { PlaceLine } from "./PlaceLine";
 import { SheetPicture } from "./SheetPicture";
 import { paths } from "./paths";
@@ -16,6 +18,8 @@ export function JobPreview({ job }: { job: JobLine }) {
       <p className="mt-1 text-finding text-ink2 narrow:text-text"><PlaceLine addressLines={job.addressLines} parcel={job.parcel} empty="No address yet" /></p>
       <dl className="mt-4 grid grid-cols-[86px_minmax(0,1fr)] border-t border-ink text-text">
         <Fact name="Code">{`${editionName(job.edition)}${job.jurisdiction ? `, ${job.jurisdiction}` : ""}`}</Fact>
+        <Fact name="Permit">{job.permitNumber || "not yet"}</Fact>
+        {job.dueOn && <Fact name="Due"><Due dueOn={job.dueOn} officeStatus={job.officeStatus} line /></Fact>}
         <Fact name="Licensee">{job.licensees.join(", ") || "none on the job yet"}</Fact>
         <Fact name="You are">{job.roles.join(", ")}</Fact>
       </dl>
@@ -29,7 +33,7 @@ export function JobPreview({ job }: { job: JobLine }) {
   );
 }
 
-function Fact({ name, children }: { name: string; children: string }) {
+function Fact({ name, children }: { name: string; children: ReactNode }) {
   return (
     <>
       <dt className="border-b border-desk2 py-2 text-ink2">{name}</dt>

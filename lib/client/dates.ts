@@ -36,6 +36,10 @@ export function daysUntil(isoDate: string, now: Date = new Date()): number {
   const [year = 0, month = 1, day = 1] = isoDate.split("-").map(Number);
   return Math.round((new Date(year, month - 1, day).getTime() - startOfDay(now)) / DAY_MS);
 }
+/** The reader's calendar date: 2027-12-31. */
+export function localDay(now: Date = new Date()): string {
+  return [now.getFullYear(), now.getMonth() + 1, now.getDate()].map((part) => String(part).padStart(2, "0")).join("-");
+}
 /** A file size: 254 kB, 3.1 MB (powers of ten). */
 export function sizeWords(bytes: number): string {
   return bytes < 1_000_000 ? `${Math.max(1, Math.round(bytes / 1000))} kB` : `${(bytes / 1_000_000).toFixed(1)} MB`;
