@@ -1,5 +1,6 @@
 "use client";
 
+import { useEffect, useRef } from "react";
 import { Button } from "@/components/ui/Button";
 import { valueWords, Differences } from "./Differences";
 import type { Merge } from "./entryDraft";
@@ -8,14 +9,17 @@ interface ConflictPanelProps {
   merge: Merge; version: number;
   /** Parts where their side was chosen. */
   theirs: ReadonlySet<string>; onSide: (part: string, theirs: boolean) => void;
-  busy: boolean; onSave: () => void;
+  busy: boolean; onSave: () => void; onGiveUp: () => void;
 }
 
 /** Somebody kept a version while this one was typed: both sides of every value that both changed, and what only they changed. */
-export function ConflictPanel({ merge, version, theirs, onSide, busy, onSave }: ConflictPanelProps) {
+export function ConflictPanel({ merge, version, theirs, onSide, busy, onSave, onGiveUp }: ConflictPanelProps) {
+  const heading = useRef<HTMLHeadingElement>(null);
+  // The button that was pressed is gone, and this may be far below it.
+  useEffect(() => heading.current?.focus(), [version]);
   return (
     <section aria-labelledby="conflict-heading" className="border-t-[3px] border-ochre bg-vellum px-6 py-4 phone:px-4">
-      <h2 id="conflict-heading" className="text-heading font-heading stretch-heading">Version {version} was kept while you typed</h2>
+      <h2 id="conflict-heading" ref={heading} tabIndex={-1} className="scroll-mt-6 outline-none text-heading font-heading stretch-heading">Version {version} was kept while you typed</h2>
       <p className="mt-1 max-w-[72ch] text-text text-ink2">Nothing of yours was written, and nothing is lost. {merge.clashes.length > 0 ? "Where both of you changed the same value, choose one; yours is chosen now." : "You changed different values, so both go together."}</p>
       {merge.clashes.length > 0 && (
         <table className="mt-3 w-full border-separate border-spacing-0" aria-label="Values that both changed">
@@ -43,7 +47,10 @@ export function ConflictPanel({ merge, version, theirs, onSide, busy, onSave }: 
           <div className="mt-2"><Differences lines={merge.taken} /></div>
         </details>
       )}
-      <Button look="primary" className="mt-4" busy={busy} onClick={onSave}>Save on top of version {version}</Button>
+      <div className="mt-4 flex flex-wrap gap-2">
+        <Button look="primary" busy={busy} onClick={onSave}>Save on top of version {version}</Button>
+        <Button disabled={busy} onClick={onGiveUp}>Give up mine</Button>
+      </div>
     </section>
   );
 }

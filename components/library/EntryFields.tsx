@@ -53,7 +53,7 @@ function Group({ group, draft, editing, open = true }: { group: PropertyGroup; d
     <div className="mt-2">
       {rated.length > 0 && (
         <>
-          <h3 className="mt-5 flex items-baseline justify-between border-b border-ink pb-1 text-finding font-heading"><span>{title}</span><span className="text-small font-normal text-ink2">{unknownWords(group.unknown)}</span></h3>
+          <h2 className="mt-5 flex items-baseline justify-between border-b border-ink pb-1 text-finding font-heading"><span>{title}</span><span className="text-small font-normal text-ink2">{unknownWords(group.unknown)}</span></h2>
           <RatedTable caption={group.title} entries={rated} draft={draft} {...editing} />
         </>
       )}

@@ -73,7 +73,7 @@ function EntryForm({ entry }: { entry: LibraryEntryAnswer }) {
           <form ref={form} onSubmit={submit} onKeyDown={onKeyDown} onInput={() => state.setTyping(true)} noValidate aria-label="Values" className="bg-paper shadow-[0_0_0_1px_var(--rule),2px_3px_0_0_var(--hatch)]">
             <EntryFields key={state.round} kind={entry.kind} draft={state.draft} onDraft={state.setDraft} nameError={nameRefused} readOnly={!edit} datasheets={files.datasheets} onUpload={edit ? upload.choose : null} />
             {upload.strip}
-            {state.conflict && state.merge && <ConflictPanel merge={state.merge} version={state.conflict.version} theirs={state.sides} onSide={state.chooseSide} busy={state.busy} onSave={state.saveMerged} />}
+            {state.conflict && state.merge && <ConflictPanel merge={state.merge} version={state.conflict.version} theirs={state.sides} onSide={state.chooseSide} busy={state.busy} onSave={state.saveMerged} onGiveUp={state.takeBack} />}
             {edit && !state.conflict && (
               <SaveBar label="Save as a new version" busy={state.busy} changed={state.changed} note={state.note} onNote={state.setNote} onTakeBack={() => { setWrong(null); state.takeBack(); }}>
                 {wrong && state.changed && <p role="alert" className="text-text font-strong text-red">{wrong}</p>}

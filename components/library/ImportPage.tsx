@@ -123,7 +123,7 @@ function Table({ companyId, kind }: { companyId: string; kind: string }) {
           <div className="mt-4"><GoodRows preview={preview.data} done /></div>
           <div className="mt-4 flex flex-wrap gap-2">
             <LinkButton href={`${paths.library}?kind=${kind}`} look="primary">See them in the library</LinkButton>
-            <Button onClick={() => { setFile(null); confirm.reset(); preview.reset(); }}>Another table</Button>
+            <Button onClick={() => { setFile(null); confirm.reset(); preview.reset(); }}>Import more</Button>
           </div>
         </Step>
       )}

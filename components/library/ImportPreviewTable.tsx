@@ -38,7 +38,7 @@ export function ImportPreviewTable({ preview, busy, blocked, onConfirm }: Import
           <Few items={preview.faults} what="cells">
             {(faults) => (
               <table className="w-full border-separate border-spacing-0" aria-label="Cells that were not understood">
-                <thead><tr><th className={`${HEAD} w-[64px]`}>Row</th><th className={`${HEAD} w-[28%]`}>Column</th><th className={`${HEAD} w-[26%]`}>Value</th><th className={HEAD}>Why it was not taken</th></tr></thead>
+                <thead><tr><th className={`${HEAD} w-[64px]`}>Row</th><th className={`${HEAD} w-[27%]`}>Column</th><th className={`${HEAD} w-[20%]`}>Value</th><th className={HEAD}>Why it was not taken</th></tr></thead>
                 <tbody>
                   {faults.map((fault, index) => (
                     <tr key={`${fault.row} ${fault.column} ${index}`}>

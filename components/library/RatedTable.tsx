@@ -31,7 +31,7 @@ export function RatedTable({ caption, entries, draft, ...editing }: SourceEditin
       <table aria-label={caption} className="w-full table-fixed border-separate border-spacing-0">
         <thead>
           <tr>
-            <th className={`${HEAD} w-[29%]`}>Rating</th>
+            <th className={`${HEAD} w-[29%]`}>{caption === "Ratings" ? "Rating" : "As stated"}</th>
             <th className={`${HEAD} w-[17%]`}>Value</th>
             <th className={HEAD}>Document</th>
             <th className={`${HEAD} w-[64px]`}>Page</th>

@@ -3,6 +3,7 @@ import { kindDefinition } from "@/lib/equipment/registry";
 import type { KindDefinition, PropertyValue } from "@/lib/equipment/define";
 import { libraryDifferences, type DataDifference } from "@/lib/equipment/libraryDifferences";
 import { wholeEquipmentData } from "@/lib/equipment/libraryData";
+import { STARTER_SOURCE } from "@/lib/equipment/starter/entry";
 
 export type Source = LibraryData["sources"][string];
 /** What is being typed about an entry. */
@@ -19,7 +20,11 @@ const alike = (a: unknown, b: unknown): boolean => JSON.stringify(sorted(a)) ===
 /** Whether two drafts say the same. */
 export const sameDraft = (a: EntryDraft, b: EntryDraft): boolean => a.name === b.name && alike(a.data, b.data);
 
-export const withProperty = (draft: EntryDraft, name: string, value: PropertyValue): EntryDraft => ({ ...draft, data: { ...draft.data, props: { ...draft.data.props, [name]: value } } });
+/** Puts a value. An invented one that is replaced takes its source with it: the new one was read somewhere else. */
+export function withProperty(draft: EntryDraft, name: string, value: PropertyValue): EntryDraft {
+  const now = { ...draft, data: { ...draft.data, props: { ...draft.data.props, [name]: value } } };
+  return draft.data.props[name] !== value && draft.data.sources[name]?.document === STARTER_SOURCE.document ? withSource(now, name, { document: "", page: "" }) : now;
+}
 export const withPort = (draft: EntryDraft, port: string, data: LibraryData["ports"][string]): EntryDraft => ({ ...draft, data: { ...draft.data, ports: { ...draft.data.ports, [port]: data } } });
 
 /** Puts a source, or takes it away where it says nothing any more. */

@@ -1,7 +1,8 @@
+import { useQueryClient } from "@tanstack/react-query";
 import { useMemo, useState } from "react";
 import type { LibraryData, LibraryEntryAnswer } from "@/lib/api";
 import { ApiProblem } from "@/lib/client/api";
-import { useChangeEntry } from "@/lib/client/libraryApi";
+import { libraryKeys, useChangeEntry } from "@/lib/client/libraryApi";
 import { kindDefinition } from "@/lib/equipment/registry";
 import { kept, mergeDrafts, sameDraft, withTheirs, type EntryDraft } from "./entryDraft";
 
@@ -30,6 +31,7 @@ export function useEntryForm(entry: LibraryEntryAnswer) {
   // A new number makes new fields: text that was not taken goes with the old ones.
   const [round, setRound] = useState(0);
   const [savedVersion, setSavedVersion] = useState<number | null>(null);
+  const client = useQueryClient();
   const change = useChangeEntry(entry.id);
   const changed = !sameDraft(draft, base.draft);
 
@@ -55,6 +57,8 @@ export function useEntryForm(entry: LibraryEntryAnswer) {
       onError: (error) => {
         const theirs = theirsOf(error);
         if (!theirs) return;
+        // Its list of versions, and the entry to come back to.
+        void client.invalidateQueries({ queryKey: [...libraryKeys.entry(entry.id)] });
         setSides(new Set());
         setConflict(theirs);
       },

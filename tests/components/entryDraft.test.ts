@@ -3,6 +3,7 @@ import {
   documentName, emptyDraft, firstPage, kept, mergeDrafts, sameDraft, sourceForAll, sourceWithFile, unsourced, versionDifferences, withPort, withProperty, withSource, withTheirs, type EntryDraft,
 } from "@/components/library/entryDraft";
 import { kindDefinition } from "@/lib/equipment/registry";
+import { STARTER_SOURCE } from "@/lib/equipment/starter";
 
 const breaker = kindDefinition("breaker");
 const inverter = kindDefinition("string-inverter");
@@ -26,6 +27,13 @@ describe("an entry that is being typed", () => {
 
   it("drops a source that says nothing any more", () => {
     expect(withSource(begun(), "ratingA", { document: "", page: "" }).data.sources).toEqual({});
+  });
+
+  it("takes an invented value's source away with the value, and no other one", () => {
+    const invented = withSource(begun(), "poles", { ...STARTER_SOURCE });
+    expect(withProperty(invented, "poles", 2).data.sources["poles"]).toEqual(STARTER_SOURCE);
+    const typed = withProperty(withProperty(invented, "poles", 3), "ratingA", 70);
+    expect(typed.data.sources).toEqual({ ratingA: SHEET });
   });
 
   it("keeps no source of a value that is not known, and no port that its properties do not give", () => {
