@@ -63,6 +63,17 @@ export function voltageDrop(input: VoltageDropInput): CalcResult<number, Voltage
 }
 
 /**
+ * The same drop in percent without its worked lines, at unity power factor, for many circuits at once: Table 8 for dc,
+ * the resistance of Table 9 for ac.
+ * @throws CodeLookupError where the table holds no value.
+ */
+export function voltageDropPct(input: Pick<VoltageDropInput, "system" | "currentA" | "voltageV" | "lengthFt" | "size" | "material" | "sets" | "conduit">): number {
+  const ohm = input.system === "dc" ? dcResistanceOhmPerKft(input.size, input.material) : acImpedance(input.size, input.material, input.conduit ?? "pvc").resistanceOhmPerKft;
+  const k = input.system === "ac 3-phase" ? Math.sqrt(3) : 2;
+  return (k * ohm * input.currentA * input.lengthFt) / (10 * (input.sets ?? 1) * input.voltageV);
+}
+
+/**
  * Voltage rise in V at the output of an inverter: the drop of the same circuit at unity power factor, with the voltage at
  * the inverter for a given voltage at the connection.
  * @throws QuantityError or CodeLookupError naming the field.

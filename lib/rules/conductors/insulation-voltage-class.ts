@@ -15,7 +15,7 @@ const highest = (context: CheckContext): ReadonlyMap<string, { volts: number; ci
   const map = new Map<string, { volts: number; circuit: string }>();
   for (const [id, { volts }] of voltages(context)) {
     if (volts === null) continue;
-    for (const { raceway } of context.graph.racewaysOf(id)) if (volts > (map.get(raceway)?.volts ?? 0)) map.set(raceway, { volts, circuit: id });
+    for (const section of Object.values(context.drawing.circuits[id]?.sections ?? {})) for (const { raceway } of section.route) if (volts > (map.get(raceway)?.volts ?? 0)) map.set(raceway, { volts, circuit: id });
   }
   return map;
 });
@@ -31,6 +31,8 @@ function lowestRatingV(context: CheckContext, id: string, reader: Reader): numbe
   }
   return values.length > 0 ? Math.min(...values) : null;
 }
+/** Lowest rating in the drawing: below this voltage nobody lacks anything. */
+const leastRatingV = (context: CheckContext): number => context.once("lowest voltage rating of conductors", () => Math.min(Infinity, ...[...voltages(context).keys()].map((id) => lowestRatingV(context, id, new Reader(context)) ?? Infinity)));
 
 export const insulationVoltageClass: Rule = {
   meta: {
@@ -52,7 +54,7 @@ export const insulationVoltageClass: Rule = {
     const ratedV = lowestRatingV(context, id, reader);
     const short = ratedV !== null && ratedV < volts - 1e-9 ? [{ id, ratedV }] : [];
     // Each circuit speaks for itself; what its neighbors lack because of it is said once, by the one with the highest voltage.
-    const raceways = [...new Set(context.graph.racewaysOf(id).map((step) => step.raceway))].filter((raceway) => highest(context).get(raceway)?.circuit === id);
+    const raceways = volts <= leastRatingV(context) ? [] : [...new Set(context.graph.racewaysOf(id).map((step) => step.raceway))].filter((raceway) => highest(context).get(raceway)?.circuit === id);
     const neighbors = [...new Set(raceways.flatMap((raceway) => circuitsIn(context.graph.occupants(raceway))))].filter((one) => one !== id && voltages(context).has(one)).sort();
     for (const one of neighbors) {
       const lowest = lowestRatingV(context, one, new Reader(context));

@@ -51,8 +51,11 @@ function unbalanceFloor(context: CheckContext, id: string, section: SectionOf, r
 }
 /** Smallest sizes by both grounds. The fault floor is one of feeders and sources; a branch circuit has only its load. */
 function floorsOf(context: CheckContext, id: string, section: SectionOf, reader: Reader): readonly Floor[] {
+  const { ungrounded, grounded } = section;
+  // As large as the ungrounded conductors it is never below the fault floor.
+  const full = isConductorSize(ungrounded?.size) && isConductorSize(grounded?.size) && compareSizes(grounded.size, ungrounded.size) >= 0 && grounded.metal === ungrounded.metal;
   const { side } = topology(context.graph);
-  const feeder = [side(id, "from"), side(id, "to")].every((one) => one.buses.length + one.converters.length + supplies(one) > 0);
+  const feeder = !full && [side(id, "from"), side(id, "to")].every((one) => one.buses.length + one.converters.length + supplies(one) > 0);
   return [feeder ? faultFloor(context, id, section, reader) : null, unbalanceFloor(context, id, section, reader)].filter((one): one is Floor => one !== null);
 }
 const largest = (floors: readonly Floor[]): Floor | undefined => floors.toSorted((a, b) => compareSizes(b.size, a.size))[0];
@@ -75,6 +78,7 @@ export const neutralTooSmall: Rule = {
       if (!neutral || neutral.count === 0) continue;
       if (neutral.metal === null) reader.ask(anchor, `sections.${section.id}.grounded.metal`, `metal of the neutral of ${nameOf(context, anchor)}`);
       const floor = largest(floorsOf(context, id, section, reader));
+      if (!floor && isConductorSize(neutral.size)) judged = true;
       if (floor && !isConductorSize(neutral.size)) reader.ask(anchor, `sections.${section.id}.grounded.size`, `size of the neutral of ${nameOf(context, anchor)}`);
       if (!floor || !isConductorSize(neutral.size)) continue;
       judged = true;

@@ -1,4 +1,4 @@
-import { voltageDrop, type CalcResult, type VoltageDropDetail } from "@/lib/calc";
+import { voltageDrop, voltageDropPct, type Step, type VoltageDropInput } from "@/lib/calc";
 import { VOLTAGE_DROP_BRANCH_PCT, VOLTAGE_DROP_TOTAL_PCT } from "@/lib/code/tables/source-constants";
 import { nodeKey } from "@/lib/diagram/graph";
 import type { Circuit } from "@/lib/diagram/schema";
@@ -33,13 +33,18 @@ function flowOf(context: CheckContext, id: string, reader: Reader): Flow | null 
   const [modules, volts, amperes] = [numberOf(context, string, "modules"), numberOf(context, string, "maximumPowerV"), numberOf(context, string, "maximumPowerA")];
   return modules === null || volts === null || amperes === null ? null : { amperes: amperes * carried.from.length, volts: modules * volts, kind: "pv" };
 }
-function sectionDrop(context: CheckContext, id: string, section: SectionOf, wire: Wire, flow: Flow): CalcResult<number, VoltageDropDetail> {
+function sectionInput(context: CheckContext, id: string, section: SectionOf, wire: Wire, flow: Flow): VoltageDropInput {
   const dc = context.drawing.circuits[id]?.system !== "ac";
   const raceway = section.route.map((step) => context.drawing.raceways[step.raceway]).find((one) => one?.kind === "conduit");
   const conduit = raceway?.metal === true ? (raceway.type === "EMT" || raceway.type === "RMC" || raceway.type === "IMC" ? "steel" : "aluminum") : "pvc";
-  return voltageDrop({ edition: context.edition, system: dc ? "dc" : serviceSystem(context)?.phases === 3 ? "ac 3-phase" : "ac 1-phase", currentA: flow.amperes, voltageV: flow.volts, lengthFt: section.lengthFt ?? 0, size: wire.size, material: wire.material, sets: wire.sets, ...(dc ? {} : { conduit }) });
+  return { edition: context.edition, system: dc ? "dc" : serviceSystem(context)?.phases === 3 ? "ac 3-phase" : "ac 1-phase", currentA: flow.amperes, voltageV: flow.volts, lengthFt: section.lengthFt ?? 0, size: wire.size, material: wire.material, sets: wire.sets, ...(dc ? {} : { conduit }) };
 }
-interface Drop { percent: number; flow: Flow; steps: CalcResult<number, VoltageDropDetail>["steps"]; missing: Reader["missing"] }
+/** Worked lines of a finding. */
+const stepsOf = (context: CheckContext, id: string, flow: Flow): readonly Step[] => context.graph.sections(id).flatMap((section) => {
+  const wire = wireOf(context, id, section, new Reader(context));
+  return wire && section.lengthFt !== null ? voltageDrop(sectionInput(context, id, section, wire, flow)).steps : [];
+});
+interface Drop { percent: number; flow: Flow; missing: Reader["missing"] }
 /** Drop along every power circuit, worked out once; circuits of which nothing tells are left out. */
 const drops = (context: CheckContext): ReadonlyMap<string, Drop> => context.once("voltage drop of circuits", () => new Map(powerCircuits(context.graph).flatMap((id): [string, Drop][] => {
   const reader = new Reader(context);
@@ -48,9 +53,9 @@ const drops = (context: CheckContext): ReadonlyMap<string, Drop> => context.once
   const parts = context.graph.sections(id).flatMap((section) => {
     const wire = wireOf(context, id, section, reader);
     if (section.lengthFt === null) reader.ask(circuitRef(id), `sections.${section.id}.lengthFt`, `length of ${nameOf(context, circuitRef(id))}`);
-    return wire && section.lengthFt !== null ? [sectionDrop(context, id, section, wire, flow)] : [];
+    return wire && section.lengthFt !== null ? [voltageDropPct(sectionInput(context, id, section, wire, flow))] : [];
   });
-  return [[id, { percent: parts.reduce((sum, part) => sum + part.detail.dropPct, 0), flow, steps: parts.flatMap((part) => part.steps), missing: reader.missing }]];
+  return [[id, { percent: parts.reduce((sum, part) => sum + part, 0), flow, missing: reader.missing }]];
 })));
 /** Sum of the drops from the utility to the far end of each circuit, with the largest single one on the way. One walk from the service. */
 const totals = (context: CheckContext): ReadonlyMap<string, { percent: number; worst: number; path: readonly string[] }> => context.once("voltage drop from the service", () => {
@@ -99,7 +104,7 @@ export const voltageDropAdvice: Rule = {
       return found({
         variant: what, anchor, field: "sections.ungrounded.size", related: [],
         message: `${nameOf(context, anchor)}: voltage ${what} ${drop.percent.toFixed(1)} % at ${Math.round(drop.flow.amperes * 10) / 10} A; it should stay near ${most} %.`,
-        steps: [...drop.steps, comparison("Vd%", drop.percent, most, "%", false)],
+        steps: [...stepsOf(context, anchor.id, drop.flow), comparison("Vd%", drop.percent, most, "%", false)],
       });
     }
     const total = totals(context).get(anchor.id);
@@ -108,7 +113,7 @@ export const voltageDropAdvice: Rule = {
       return found({
         variant: "in-all", anchor, field: "sections.ungrounded.size", related: total.path.filter((id) => id !== anchor.id).map(circuitRef),
         message: `From the service to the end of ${nameOf(context, anchor)} the voltage drops ${total.percent.toFixed(1)} %; it should stay near ${inAll} % in all.`,
-        steps: [...drop.steps, comparison("ΣVd%", total.percent, inAll, "%", false)],
+        steps: [...stepsOf(context, anchor.id, drop.flow), comparison("ΣVd%", total.percent, inAll, "%", false)],
       });
     }
     return drop.missing.length > 0 ? { outcome: "needs-data", fields: drop.missing } : PASS;
@@ -119,7 +124,7 @@ export const voltageDropAdvice: Rule = {
     if (!drop) return [];
     const most = variant === "in-all" && total ? drop.percent - (total.percent - context.limit("totalPercent")) : limitOf(context, drop.flow.kind);
     const count = context.graph.sections(id).length;
-    return most <= 0 ? [] : compact([largerConductor(context, id, (section, wire) => sectionDrop(context, id, section, wire, drop.flow).detail.dropPct <= most / count, "Check the raceway fill, the terminals and the equipment grounding conductor, which grows with it.")]);
+    return most <= 0 ? [] : compact([largerConductor(context, id, (section, wire) => voltageDropPct(sectionInput(context, id, section, wire, drop.flow)) <= most / count, "Check the raceway fill, the terminals and the equipment grounding conductor, which grows with it.")]);
   },
   examples: { violates: "40 A at 240 V over 130 ft of 8 AWG copper: 3.4 %.", passes: "6 AWG copper: 2.1 %." },
 };

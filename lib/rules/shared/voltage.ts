@@ -1,7 +1,7 @@
 import type { CheckContext } from "@/lib/rules/engine/types";
 import { parseSystemVoltage, type SystemVoltage } from "@/lib/units";
-import { equipmentRef, numberOf, textOf, type Reader } from "./outcome";
-import { coldVoltageOf } from "./strings";
+import { equipmentRef, numberOf, Reader, textOf } from "./outcome";
+import { coldVoltage } from "./strings";
 import { topology } from "./topology";
 
 /** System at the service from its words; null where nobody entered it. The high leg of a delta stands higher above ground than half of it. */
@@ -41,7 +41,12 @@ export function acVoltageV(context: CheckContext, id: string, reader: Reader): n
 /** Largest voltage between the conductors of a circuit, V: strings in the cold, batteries full, the ac system. Null where it cannot be worked out; asked for where an entry would do. */
 export function largestVoltageV(context: CheckContext, id: string, reader: Reader): number | null {
   const system = context.drawing.circuits[id]?.system;
-  if (system === "pv-dc") return coldVoltageOf(context, id);
+  if (system === "pv-dc") {
+    const { side } = topology(context.graph);
+    const strings = [...new Set((["from", "to"] as const).flatMap((end) => side(id, end).strings))];
+    const values = strings.map((string) => context.once(`cold voltage of string ${string}`, () => coldVoltage(context, string, new Reader(context))?.value ?? null)).filter((value): value is number => value !== null);
+    return values.length > 0 ? Math.max(...values) : null;
+  }
   if (system === "ac") return acVoltageV(context, id, reader);
   if (system !== "battery-dc") return null;
   const { side } = topology(context.graph);

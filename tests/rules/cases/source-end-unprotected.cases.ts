@@ -46,6 +46,14 @@ export const cases: readonly RuleCase[] = [
     edit: (d) => { set(d, "cb-d2", "ratingA", 225); },
   },
   {
+    name: "conductors of a set landed on the bus: its own breaker protects them", source: "445.12: generator terminals",
+    edit: (d) => { circuitOf(d, "f5").to = { equipment: "ic-200", port: "bus", offset: 3 }; },
+  },
+  {
+    name: "service conductors from the utility to the meter", source: "705.11, 230.90: supply side",
+    edit: (d) => { set(d, "cb-m", "ratingA", 175); },
+  },
+  {
     name: "a panel fed by lugs from a breaker of its own", source: "240.21(B): a feeder protected where it gets its supply",
     edit: (d) => { set(d, "cb-l", "ratingA", 110); },
   },

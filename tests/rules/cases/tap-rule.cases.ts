@@ -71,6 +71,14 @@ export const cases: readonly RuleCase[] = [
     finds: ["p1a"],
   },
   {
+    name: "taken from the bus ahead of every device", source: "230.90, 705.11: supply-side conductors have distances of their own",
+    edit: (d) => { tap(d, "6 AWG", 22, 60); set(d, "cb-f1", "ratingA", 60); for (const id of ["f1a", "cb-m", "j-mtr-1-load-cb-m-line", "j-cb-m-load-mm-225-bus"]) { delete d.circuits[id]; delete d.equipment[id]; } d.circuits["j-main"] = { ...structuredClone(circuitOf(d, "svc")), wiring: "factory", sections: {}, from: { equipment: "mtr-1", port: "load", offset: 0 }, to: { equipment: "mm-225", port: "bus", offset: 0 } }; },
+  },
+  {
+    name: "motors tapped from the bus follow their own article", source: "430.28: motor taps",
+    edit: (d) => { circuitOf(d, "p1a").from = { equipment: "mm-225", port: "bus", offset: 6 }; },
+  },
+  {
     name: "length not known", source: "a missing length is asked for",
     edit: (d) => { tap(d, "4 AWG", 22, 80); sectionOf(d, "n1").lengthFt = null; },
     asks: ["n1"],
