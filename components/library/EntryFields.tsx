@@ -1,6 +1,6 @@
 "use client";
 
-import { useMemo, useState } from "react";
+import { useState } from "react";
 import { kindDefinition } from "@/lib/equipment/registry";
 import { wholeEquipmentData } from "@/lib/equipment/libraryData";
 import { PortFields, PropertyField, propertyGroups, unknownWords, type PropertyGroup } from "@/components/fields/equipmentFields";
@@ -24,7 +24,7 @@ export function EntryFields({ kind, draft, onDraft, nameError, ...sources }: Ent
   const definition = kindDefinition(kind);
   const { props } = draft.data;
   const groups = propertyGroups(definition.properties, props).sort((a, b) => ORDER.indexOf(a.id) - ORDER.indexOf(b.id));
-  const ports = useMemo(() => definition.ports(wholeEquipmentData(definition, { props, sources: {}, ports: {} }).props as never).filter((port) => port.system !== "data"), [definition, props]);
+  const ports = definition.ports(wholeEquipmentData(definition, draft.data).props as never).filter((port) => port.system !== "data");
   const editing: SourceEditing = {
     ...sources,
     onProperty: (name, value) => onDraft((now) => withProperty(now, name, value)),

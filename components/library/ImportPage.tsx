@@ -119,7 +119,7 @@ function Table({ companyId, kind }: { companyId: string; kind: string }) {
       {confirm.data && preview.data && (
         <Step number={3} title="Taken in" text={`${kindTitle(kind)}, from ${file?.name ?? "the table"}.`}>
           <p role="status" className="text-finding font-strong">{resultWords(confirm.data)}</p>
-          {preview.data.faults.length > 0 && <p className="mt-1 text-text text-ink2">{preview.data.total - preview.data.good.length === 1 ? "One row was" : `${preview.data.total - preview.data.good.length} rows were`} left out. Mend them in the table and drop it again: what is the same already stays as it is.</p>}
+          {preview.data.faults.length > 0 && <p className="mt-1 text-text text-ink2">{preview.data.total - preview.data.good.length === 1 ? "One row was left out. Mend it" : `${preview.data.total - preview.data.good.length} rows were left out. Mend them`} in the table and drop it again: what is the same already stays as it is.</p>}
           <div className="mt-4"><GoodRows preview={preview.data} done /></div>
           <div className="mt-4 flex flex-wrap gap-2">
             <LinkButton href={`${paths.library}?kind=${kind}`} look="primary">See them in the library</LinkButton>

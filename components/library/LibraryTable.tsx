@@ -23,6 +23,8 @@ const HEAD = "h-8 border-b border-ink bg-paper px-3 text-left text-body font-med
 
 /** The library's list. Only lines in sight are in the page, so that thousands of entries scroll like ten. */
 export function LibraryTable({ entries, total, chosenId, onChoose, scroller, onEnd }: LibraryTableProps) {
+  // The virtualizer keeps its own state by design; nothing here relies on it being memoized.
+  // eslint-disable-next-line react-hooks/incompatible-library
   const virtual = useVirtualizer({ count: entries.length, getScrollElement: () => scroller.current, estimateSize: () => ROW, overscan: 12, scrollPaddingStart: 32 });
   const shown = virtual.getVirtualItems();
   const last = shown.at(-1)?.index ?? 0;
