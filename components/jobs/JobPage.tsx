@@ -2,7 +2,7 @@
 
 import type { JobAnswer } from "@/lib/api";
 import { ApiProblem } from "@/lib/client/api";
-import { whenInSentence } from "@/lib/client/dates";
+import { dateWords, whenInSentence } from "@/lib/client/dates";
 import { useJob } from "@/lib/client/queries";
 import { DocumentsPanel } from "@/components/files/DocumentsPanel";
 import { BarCell } from "@/components/ui/Bar";
@@ -11,8 +11,12 @@ import { Caution } from "@/components/ui/Caution";
 import { ErrorNote, Skeleton } from "@/components/ui/Notes";
 import { RedlineCounts } from "@/components/ui/RedlineMark";
 import { StateStamp } from "@/components/ui/StateStamp";
+import { Due } from "./Due";
+import { HistoryPanel } from "./HistoryPanel";
+import { JobMenu } from "./JobMenu";
 import { MembersPanel } from "./MembersPanel";
 import { OfficeBar } from "./OfficeBar";
+import { OfficePanel } from "./OfficePanel";
 import { PlaceLine } from "./PlaceLine";
 import { RevisionsPanel } from "./RevisionsPanel";
 import { SheetPicture } from "./SheetPicture";
@@ -40,7 +44,10 @@ function Desk({ job, issueOpen }: { job: JobAnswer; issueOpen: boolean }) {
     <>
       <div className="mb-5 flex flex-wrap items-end justify-between gap-4">
         <div className="min-w-0">
-          <p className="font-lettering text-[16px] text-ink2">{job.number}</p>
+          <p className="flex flex-wrap items-baseline gap-x-5 text-text text-ink2">
+            <span className="font-lettering text-[16px]">{job.number}</span>
+            {(job.dueOn || job.officeStatus !== "open") && <span>{job.dueOn && job.officeStatus !== "closed" && "Due "}<Due dueOn={job.dueOn} officeStatus={job.officeStatus} line /></span>}
+          </p>
           <h1 className="text-[34px] leading-tight font-heading stretch-heading tracking-[-0.015em] narrow:text-title">{job.name}</h1>
           <p className="mt-1 text-finding text-ink2"><PlaceLine addressLines={job.addressLines} parcel={job.parcel} empty="No address yet" /></p>
         </div>
@@ -52,8 +59,10 @@ function Desk({ job, issueOpen }: { job: JobAnswer; issueOpen: boolean }) {
           {job.may.viewDrawing && <LinkButton href={paths.drawing(job.id)} look="primary">Open the drawing</LinkButton>}
           {job.may.viewDrawing && <LinkButton href={paths.visit(job.id)}>Site visit</LinkButton>}
           {job.may.viewDrawing && !job.empty && <LinkButton href={paths.sheets(job.id)}>Sheets</LinkButton>}
+          <JobMenu job={job} />
         </div>
       </div>
+      {job.archivedAt && <p role="status" className="mb-5 border-l-[3px] border-ochre bg-paper px-4 py-3 text-text"><strong className="font-heading">In the archive</strong> since {dateWords(job.archivedAt)}. The job stays as it is.{job.may.archive ? " Under More it is taken out again." : " An administrator can take it out again."}</p>}
       <div className="grid grid-cols-[minmax(0,1fr)_440px] items-start gap-5 narrow:grid-cols-[minmax(0,1fr)_340px] phone:grid-cols-1">
         <div className="grid gap-5">
           <RevisionsPanel job={job} issueOpen={issueOpen} />
@@ -62,7 +71,9 @@ function Desk({ job, issueOpen }: { job: JobAnswer; issueOpen: boolean }) {
         </div>
         <div className="grid gap-5">
           <SheetPicture jobId={job.id} changedAt={job.changedAt} />
+          {job.may.viewDrawing && <OfficePanel job={job} />}
           <MembersPanel job={job} />
+          {job.may.history && <HistoryPanel job={job} />}
           <Caution />
         </div>
       </div>

@@ -9,6 +9,7 @@ import { line } from "@/lib/api";
 import type { JurisdictionAnswer } from "@/lib/api";
 import { ApiProblem, api } from "@/lib/client/api";
 import { editionName } from "@/lib/code/adoption";
+import { useNextNumber } from "@/lib/client/jobsApi";
 import { keys, useChange, useJurisdictions, useMe } from "@/lib/client/queries";
 import { Button, LinkButton } from "@/components/ui/Button";
 import { SelectField, TextField } from "@/components/ui/Field";
@@ -21,7 +22,7 @@ import { paths } from "./paths";
 import { EMPTY_SITE, placeForm, siteForm, siteOfForm } from "./siteForm";
 
 const NEW = "new";
-const schema = z.object({ companyId: z.string(), jurisdictionId: z.string().min(1, "Choose the jurisdiction, or enter a new one."), jurisdictionName: line(120), ordinance: line(160), ...placeForm.shape, ...siteForm.shape })
+const schema = z.object({ companyId: z.string(), jurisdictionId: z.string().min(1, "Choose the jurisdiction, or enter a new one."), jurisdictionName: line(120), ordinance: line(160), ...placeForm.shape, number: line(40), ...siteForm.shape })
   .superRefine((form, context) => {
     if (form.jurisdictionId === NEW && form.jurisdictionName === "") context.addIssue({ code: "custom", path: ["jurisdictionName"], message: "is missing" });
   });
@@ -53,7 +54,8 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
   const [failure, setFailure] = useState<unknown>(null);
   const form = useForm<Form, unknown, z.output<typeof schema>>({ resolver: zodResolver(schema), defaultValues: { ...EMPTY, companyId: companies[0]?.id ?? "" } });
   const { control, register, handleSubmit, setError, setValue, formState: { errors } } = form;
-  const jurisdictionId = useWatch({ control, name: "jurisdictionId" });
+  const [jurisdictionId, companyId] = useWatch({ control, name: ["jurisdictionId", "companyId"] });
+  const next = useNextNumber(companyId).data?.number;
   const known = jurisdictions.find((each) => each.id === jurisdictionId);
 
   const submit = handleSubmit(async (filled) => {
@@ -61,7 +63,7 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
     const { companyId, jurisdictionId: id, jurisdictionName, ordinance, number, name, addressLines, parcel, owner, scope, permitNumber, preparer, contractor, ...site } = filled;
     try {
       const { id: jobId } = await create.mutateAsync({
-        companyId, number, name, addressLines, parcel, owner, scope, permitNumber, preparer, contractor,
+        companyId, ...(number === "" ? {} : { number }), name, addressLines, parcel, owner, scope, permitNumber, preparer, contractor,
         jurisdiction: id === NEW ? { name: jurisdictionName, edition: site.edition, ordinance } : { id }, site: siteOfForm(site),
       });
       router.push(paths.job(jobId));
@@ -86,7 +88,7 @@ function Sheet({ companies, jurisdictions }: { companies: readonly { id: string;
             {companies.map((each) => <option key={each.id} value={each.id}>{each.name}</option>)}
           </SelectField>
         )}
-        <TextField label="Job number" placeholder="26-040" autoFocus error={errors.number?.message} {...register("number")} />
+        <TextField label="Job number" placeholder={next ?? ""} hint={`Left empty: the next of your company's scheme${next ? `, ${next} now` : ""}.`} autoFocus error={errors.number?.message} {...register("number")} />
         <TextField label="Name" placeholder="Place or owner" error={errors.name?.message} {...register("name")} />
         <PlaceFields contractorHint="Left empty: your company." />
       </FormSection>
