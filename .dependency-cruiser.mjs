@@ -44,7 +44,7 @@ export default {
       severity: "error",
       comment: "A rule stands alone: what two rules share is a calculation (lib/calc) or part of the engine.",
       from: { path: "^lib/rules/", pathNot: ["^lib/rules/engine/", "/index[.]ts$", "/registry[.]ts$"] },
-      to: { path: "^lib/rules/", pathNot: ["^lib/rules/engine/", "/shared", "/family"] },
+      to: { path: "^lib/rules/", pathNot: ["^lib/rules/engine/", "/shared", "^lib/rules/families/"] },
     },
     {
       name: "server-and-client-apart",

@@ -131,7 +131,7 @@ async function checkKinds(): Promise<number> {
       if (!(field in kind.properties)) gaps.push(`kind ${id}: schedule field ${field} is not one of its properties`);
     }
   }
-  const folders = readdirSync(path.join(root, "lib/equipment"), { withFileTypes: true }).filter((each) => each.isDirectory() && each.name !== "shared");
+  const folders = readdirSync(path.join(root, "lib/equipment"), { withFileTypes: true }).filter((each) => each.isDirectory() && !["shared", "starter"].includes(each.name));
   for (const { name } of folders) if (!ids.includes(name)) gaps.push(`lib/equipment/${name} is not in the registry`);
   return ids.length;
 }

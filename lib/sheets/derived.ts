@@ -68,8 +68,7 @@ const PATH_WORDS: Readonly<Record<string, string>> = {
   sum: "SUM", "opposite ends": "120 %", "all devices": "ALL DEVICES", "center-fed": "CENTER-FED", "power control": "POWER CONTROL", none: "NO PATH",
 };
 /** Busbars that several sources share: sum against limit on the path each passes by. Null without any that is worked out. */
-export function busTable({ drawing, graph, states }: SheetContext): Table | null {
-  const { edition } = drawing.site;
+export function busTable({ graph, states }: SheetContext): Table | null {
   const rows = busChecks(checkContext(graph, { states })).map((each) => [
     [tag(graph, each.bus), each.primary === "generator" ? "GEN" : "", PATH_WORDS[each.path] ?? each.path].filter(Boolean).join(" "), `${each.sumA.toFixed(2)} A`, `${Math.round(each.limitA * 100) / 100} A`,
   ]);
