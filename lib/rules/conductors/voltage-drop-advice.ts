@@ -1,62 +1,20 @@
-import { voltageDrop, voltageDropPct, type Step, type VoltageDropInput } from "@/lib/calc";
+import { voltageDrop, voltageDropPct, type Step } from "@/lib/calc";
 import { VOLTAGE_DROP_BRANCH_PCT, VOLTAGE_DROP_TOTAL_PCT } from "@/lib/code/tables/source-constants";
 import { nodeKey } from "@/lib/diagram/graph";
-import type { Circuit } from "@/lib/diagram/schema";
 import { NEVER_MUST_FIX, sections } from "@/lib/rules/engine/meta";
 import type { CheckContext, Outcome, Rule } from "@/lib/rules/engine/types";
-import { wireOf, type SectionOf, type Wire } from "@/lib/rules/shared/conductors";
-import { carriedBy, loadA, type Carried } from "@/lib/rules/shared/currents";
-import { circuitRef, found, nameOf, NOT_APPLICABLE, numberOf, PASS, Reader } from "@/lib/rules/shared/outcome";
+import { wireOf } from "@/lib/rules/shared/conductors";
+import type { Carried } from "@/lib/rules/shared/currents";
+import { circuitRef, found, nameOf, NOT_APPLICABLE, PASS, Reader } from "@/lib/rules/shared/outcome";
 import { comparison, compact, largerConductor } from "@/lib/rules/shared/protection";
-import { motorCircuit, powerCircuits, topology } from "@/lib/rules/shared/topology";
-import { acVoltageV, serviceSystem } from "@/lib/rules/shared/voltage";
+import { powerCircuits } from "@/lib/rules/shared/topology";
+import { drops, sectionInput, type Flow } from "@/lib/rules/shared/voltageDrop";
 
-interface Flow { amperes: number; volts: number; kind: Carried["kind"] }
-/** Current that flows for hours and the voltage at which it does; null where nothing tells. */
-function flowOf(context: CheckContext, id: string, reader: Reader): Flow | null {
-  const { system } = context.drawing.circuits[id] as Circuit;
-  const { side } = topology(context.graph);
-  const sides = [side(id, "from"), side(id, "to")];
-  const carried = carriedBy(context, id, new Reader(context));
-  if (system === "ac") {
-    const motors = !carried && motorCircuit(context.graph, id) ? sides.find((one) => one.utilities.length + one.converters.length + one.generators.length === 0)?.loads ?? [] : [];
-    const amperes = carried?.required.detail.maximumA ?? motors.reduce((sum, load) => sum + (loadA(context, load) ?? 0), 0);
-    const volts = amperes > 0 ? acVoltageV(context, id, reader) : null;
-    return volts === null ? null : { amperes, volts, kind: carried?.kind ?? "motor" };
-  }
-  if (!carried) return null;
-  if (system === "battery-dc") {
-    const volts = [...new Set(sides.flatMap((one) => one.batteries))].map((battery) => numberOf(context, battery, "nominalV")).find((value) => value !== null) ?? null;
-    return volts === null ? null : { amperes: carried.required.detail.maximumA, volts, kind: "storage" };
-  }
-  const string = carried.from[0] ?? "";
-  const [modules, volts, amperes] = [numberOf(context, string, "modules"), numberOf(context, string, "maximumPowerV"), numberOf(context, string, "maximumPowerA")];
-  return modules === null || volts === null || amperes === null ? null : { amperes: amperes * carried.from.length, volts: modules * volts, kind: "pv" };
-}
-function sectionInput(context: CheckContext, id: string, section: SectionOf, wire: Wire, flow: Flow): VoltageDropInput {
-  const dc = context.drawing.circuits[id]?.system !== "ac";
-  const raceway = section.route.map((step) => context.drawing.raceways[step.raceway]).find((one) => one?.kind === "conduit");
-  const conduit = raceway?.metal === true ? (raceway.type === "EMT" || raceway.type === "RMC" || raceway.type === "IMC" ? "steel" : "aluminum") : "pvc";
-  return { edition: context.edition, system: dc ? "dc" : serviceSystem(context)?.phases === 3 ? "ac 3-phase" : "ac 1-phase", currentA: flow.amperes, voltageV: flow.volts, lengthFt: section.lengthFt ?? 0, size: wire.size, material: wire.material, sets: wire.sets, ...(dc ? {} : { conduit }) };
-}
 /** Worked lines of a finding. */
 const stepsOf = (context: CheckContext, id: string, flow: Flow): readonly Step[] => context.graph.sections(id).flatMap((section) => {
   const wire = wireOf(context, id, section, new Reader(context));
   return wire && section.lengthFt !== null ? voltageDrop(sectionInput(context, id, section, wire, flow)).steps : [];
 });
-interface Drop { percent: number; flow: Flow; missing: Reader["missing"] }
-/** Drop along every power circuit, worked out once; circuits of which nothing tells are left out. */
-const drops = (context: CheckContext): ReadonlyMap<string, Drop> => context.once("voltage drop of circuits", () => new Map(powerCircuits(context.graph).flatMap((id): [string, Drop][] => {
-  const reader = new Reader(context);
-  const flow = flowOf(context, id, reader);
-  if (!flow) return [];
-  const parts = context.graph.sections(id).flatMap((section) => {
-    const wire = wireOf(context, id, section, reader);
-    if (section.lengthFt === null) reader.ask(circuitRef(id), `sections.${section.id}.lengthFt`, `length of ${nameOf(context, circuitRef(id))}`);
-    return wire && section.lengthFt !== null ? [voltageDropPct(sectionInput(context, id, section, wire, flow))] : [];
-  });
-  return [[id, { percent: parts.reduce((sum, part) => sum + part, 0), flow, missing: reader.missing }]];
-})));
 /** Sum of the drops from the utility to the far end of each circuit, with the largest single one on the way. One walk from the service. */
 const totals = (context: CheckContext): ReadonlyMap<string, { percent: number; worst: number; path: readonly string[] }> => context.once("voltage drop from the service", () => {
   const { graph, drawing } = context;
