@@ -36,7 +36,8 @@ export class DrawingBuilder {
     const { page, book, ...change } = more;
     const made = newEquipment(kind, tag, { x: at[0], y: at[1] });
     const rated = page ? Object.fromEntries(Object.entries(props).filter(([, value]) => typeof value === "number").map(([name]) => [name, { document: book ?? `${tag} data sheet`, page }])) : {};
-    this.equipment[id] = { ...made, ...change, props: { ...made.props, ...props }, sources: { ...rated, ...change.sources } };
+    // Places are shared words of the seed; each piece has its own.
+    this.equipment[id] = { ...made, ...structuredClone(change), props: { ...made.props, ...props }, sources: { ...rated, ...change.sources } };
     return id;
   }
   port(equipment: string, port: string, data: PortData): void {

@@ -37,6 +37,7 @@ export function cleanDrawing(): Drawing {
   const empty = emptyDrawing({
     edition: "2023", occupancy: "accessory building", recordLowC: -24, designHighC: 33, elevationM: 310, utilityName: "Orrin Rural Electric",
     availableFaultCurrentA: 10400, faultCurrentSource: "Letter of Orrin Rural Electric", faultCurrentOn: "2026-03-12", temperatureSource: "Designer's entry, station data on page 1 of the calculation sheet",
+    load: { method: "Article 220, calculation sheet E-606", resultA: 146.4, source: "Load schedule, charging at 25 A included" },
     amendments: {
       "oc-2": { rule: "string-over-building-cap", effect: "limit", limit: 600, unit: "V", severity: null, citation: "County ordinance 26-4, OC-2 (PV dc at most 600 V on or in any building)" },
     },

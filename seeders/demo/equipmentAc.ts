@@ -58,7 +58,7 @@ export function addService(drawing: DrawingBuilder): void {
   const pump = drawing.add("load", "P-1", [29.2, 36.4], { description: "Yard pump 1 hp", use: "motor", powerKW: null, horsepower: 1, currentA: 8, continuous: true, phaseV: 240 }, { page: "Nameplate", status: "existing", rotation: 90, label: { x: 1.7, y: 0, anchor: "start" }, location: place("A", "pump house", "outdoor", 33) });
   drawing.port(pump, "line", terminal(25, ["14 AWG", "8 AWG"], "marking"));
   drawing.add("shutdown-initiator", "RSD-1", [39.4, 36.6], { purpose: "PV rapid shutdown", enclosureType: "4X", circuitVoltage: "24 V, Class 2", listing: "UL 1741" }, { page: "R2", location: OUTSIDE });
-  drawing.add("shutdown-initiator", "ESD-1", [47.6, 36.6], { purpose: "storage emergency stop", enclosureType: "4X", circuitVoltage: "24 V, Class 2" }, { page: "B7", location: OUTSIDE });
+  drawing.add("shutdown-initiator", "ESD-1", [47.6, 36.6], { purpose: "storage emergency stop", listing: "UL 9540, with BT-12", enclosureType: "4X", circuitVoltage: "24 V, Class 2" }, { page: "B7", location: OUTSIDE });
 }
 
 /** Interconnect cabinet, generator and the creamery panel. */

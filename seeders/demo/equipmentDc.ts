@@ -9,7 +9,7 @@ export function addInverters(drawing: DrawingBuilder): void {
   const units = [["INV-1", 97.6, true, "primary", 1], ["INV-2", 58, false, "secondary", 2]] as const;
   for (const [tag, x, mirrored, role, address] of units) {
     const id = drawing.add("hybrid-inverter", tag, [x, 30], {
-      make: "Brackwater", model: "HB-78", listing: "UL 1741 SB, UL 1998", outputKW: 7.8, outputV: 240, continuousA: 32.5, faultA: 60, maximumOvercurrentA: 50, shortCircuitKA: 10,
+      make: "Brackwater", model: "HB-78", listing: "UL 1741 SB, UL 1998", ambientMostC: 45, outputKW: 7.8, outputV: 240, continuousA: 32.5, faultA: 60, maximumOvercurrentA: 50, shortCircuitKA: 10,
       trackers: 2, pvMaximumV: 600, pvLeastV: 130, pvMostV: 500, trackerA: 20, trackerShortCircuitA: 26, pvBackfeedA: 0, arrayRatioMost: 1.5,
       batteryLeastV: 42, batteryMostV: 60, batteryA: 175, batteryShortCircuitKA: 20, listedInteractive: true, listedStandAlone: true, listedGeneratorMode: true, parallelMost: 4,
       role, address, firmware: "4.2.1", firmwareInstruction: "H33", parallelInstruction: "H30", parallelMixed: false, parallelLink: "chain", terminator: true, parallelBank: "one common bank", leadInstruction: "H34", leadTolerancePercent: 5,
@@ -45,7 +45,7 @@ export function addStorage(drawing: DrawingBuilder): void {
   }
   for (const [n, x] of [[1, 83], [2, 80], [3, 77], [4, 74]] as const) {
     drawing.add("battery", `BT-${n}`, [x, 43.4], {
-      make: "Cindle", model: "BT-12", listing: "UL 9540, UL 1973", chemistry: "LFP", energyKWh: 12.5, nominalV: 51.2, leastV: 44, mostV: 58, continuousA: 100, shortCircuitKA: 3.6, firmware: "2.06",
+      make: "Cindle", model: "BT-12", listing: "UL 9540, UL 1973", ambientMostC: 50, chemistry: "LFP", energyKWh: 12.5, nominalV: 51.2, leastV: 44, mostV: 58, continuousA: 100, shortCircuitKA: 3.6, firmware: "2.06",
       leadInstruction: "B8", listedSystem: true, enclosureType: "1", handleHeightIn: 72, clearDepthIn: 48, clearWidthIn: 30, clearHeightIn: 80,
     }, { page: "B1", book: "BT-12 data sheet", location: BAY });
     const bb = drawing.add("breaker", `BB-${n}`, [x, 43.4], { ...dc(125), lockable: true }, { page: "B4", book: "BT-12 data sheet", parent: `bt-${n}`, integral: true, rotation: 270, location: BAY });

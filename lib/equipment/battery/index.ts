@@ -5,6 +5,7 @@ export const battery = defineKind({
   kind: "battery", title: "Battery unit", tagPrefix: "BT", railGroup: "sources",
   properties: {
     ...identity, ...enclosureProperties,
+    ambientMostC: number("Rated ambient, largest", "°C", -20, 90, { rated: true }),
     chemistry: choice("Chemistry", ["LFP", "NMC", "lead-acid", "other"]),
     energyKWh: number("Energy", "kWh", 0.1, 2000, { rated: true }),
     nominalV: number("Nominal voltage", "V", 1, 1500, { rated: true }),

@@ -6,6 +6,7 @@ export const hybridInverter = defineKind({
   kind: "hybrid-inverter", title: "Hybrid inverter", tagPrefix: "INV", railGroup: "convert and distribute",
   properties: {
     ...identity, ...enclosureProperties,
+    ambientMostC: number("Rated ambient, largest", "°C", -20, 90, { rated: true }),
     outputKW: number("Ac output", "kW", 0.1, 500, { rated: true }),
     outputV: number("Ac voltage", "V", 100, 600, { rated: true }),
     continuousA: number("Ac output current, continuous", "A", 0.1, 1000, { rated: true }),
