@@ -38,6 +38,20 @@ export default defineConfig({
         },
       },
       {
+        // Measurements through the route handlers, on services of their own; `npm run bench` runs them.
+        resolve,
+        test: {
+          name: "served",
+          environment: "node",
+          include: ["tests/bench/**/*.served.ts"],
+          env: { TZ: "UTC", AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: "true" },
+          globalSetup: ["tests/api/support/services.ts"],
+          setupFiles: ["tests/api/support/ownDatabase.ts"],
+          testTimeout: 600_000,
+          disableConsoleIntercept: true,
+        },
+      },
+      {
         // Soak, load, large mutation and kill runs, on the product that scripts/testLong.mjs starts.
         resolve,
         test: {

@@ -1,11 +1,12 @@
+import { randomUUID } from "node:crypto";
 import { QueryTypes } from "sequelize";
-import { beforeAll, describe, expect, it } from "vitest";
+import { beforeAll, describe, expect, it, vi } from "vitest";
 import { RULE_SET_VERSION } from "@/lib/rules";
 import { ACTION_WORDS } from "@/lib/server/data/historyWords";
 import { database } from "@/lib/server/data/database";
 import { waitsFor } from "@/lib/server/data/waitsFor";
 import { drawingOf, place, save } from "./support/drawings";
-import { firstAdministrator, inCompany, newJob, ofAnotherCompany, onJob, type Person } from "./support/people";
+import { firstAdministrator, inCompany, jobBody, newJob, ofAnotherCompany, onJob, type Person } from "./support/people";
 import { request } from "./support/server";
 
 let owner: Person & { companyId: string };
@@ -46,6 +47,10 @@ describe("the register", () => {
     await request("PATCH", `/api/jobs/${ids.kiln}`, { as: owner, body: { dueOn: day(40) } });
     expect(await numbers(owner, "?due=late")).toEqual(["26-001"]);
     expect(await numbers(owner, "?due=soon&sort=due")).toEqual(["26-001", "26-002"]);
+    // The evening before in the west is another day than here.
+    expect(await numbers(owner, `?due=late&today=${day(-1)}`)).toEqual([]);
+    expect(await numbers(owner, `?due=soon&sort=due&today=${day(26)}`)).toEqual(["26-001", "26-002", "26-003"]);
+    expect(await numbers(owner, `?due=soon&sort=due&today=${day(25)}`)).toEqual(["26-001", "26-002"]);
     await request("PATCH", `/api/jobs/${ids.barn}`, { as: owner, body: { officeStatus: "closed" } });
     expect(await numbers(owner, "?due=late")).toEqual([]);
     expect(await numbers(owner, "?status=closed")).toEqual(["26-001"]);
@@ -71,6 +76,17 @@ describe("the register", () => {
     expect(rows.filter((row) => row.checkedRuleSet === RULE_SET_VERSION).length).toBeGreaterThan(0);
     const { jobs } = await list(owner);
     expect(jobs.every((job: { counts: unknown }) => job.counts !== null)).toBe(true);
+  });
+  it("names a job whose drawing cannot be checked, without counts, beside the others", async () => {
+    const { sequelize } = database();
+    const [kept] = await sequelize.query<{ document: unknown }>("select document from drawings where job_id = :job", { type: QueryTypes.SELECT, replacements: { job: ids.kiln } });
+    await sequelize.query("update drawings set document = document - 'equipment', check_counts = null, checked_sequence = null where job_id = :job", { replacements: { job: ids.kiln } });
+    const errors = vi.spyOn(console, "error").mockImplementation(() => undefined);
+    const { jobs } = await list(owner, "?sort=number");
+    expect(jobs.map((job: { number: string; counts: unknown }) => [job.number, job.counts === null])).toEqual([["26-003", true], ["26-002", false], ["26-001", false]]);
+    expect(errors).toHaveBeenCalled();
+    errors.mockRestore();
+    await sequelize.query("update drawings set document = :document where job_id = :job", { replacements: { job: ids.kiln, document: JSON.stringify(kept?.document) } });
   });
   it("shows a person of another company none of it, whatever they search", async () => {
     const twin = await ofAnotherCompany();
@@ -104,6 +120,25 @@ describe("a job's office data", () => {
     expect((await request("GET", `/api/companies/${owner.companyId}/next-job-number`, { as: owner })).body).toEqual({ number: `${year}-418`, scheme: "{yy}-{nnn}" });
     const installer = await inCompany(owner, owner.companyId, ["installer"]);
     expect((await request("GET", `/api/companies/${owner.companyId}/next-job-number`, { as: installer })).status).toBe(403);
+  });
+  it("takes numbers one after the other, without a gap, for people who make jobs at once", async () => {
+    const next = async () => Number((await request("GET", `/api/companies/${owner.companyId}/next-job-number`, { as: owner })).body.number.split("-")[1]);
+    const first = await next();
+    const body = (change: Record<string, unknown> = {}) => jobBody(owner.companyId, { number: undefined, name: "At once", ...change });
+    const answers = await Promise.all([
+      ...Array.from({ length: 5 }, () => request("POST", "/api/jobs", { as: owner, body: body() })),
+      // Refused after its number was taken: it may leave no gap.
+      request("POST", "/api/jobs", { as: owner, body: body({ jurisdiction: { id: randomUUID() } }) }),
+    ]);
+    expect(answers.map((answer) => answer.status)).toEqual([201, 201, 201, 201, 201, 422]);
+    const taken = await Promise.all(answers.slice(0, 5).map(async ({ body: { id } }) => (await request("GET", `/api/jobs/${id}`, { as: owner })).body.number));
+    expect(taken.map((number: string) => Number(number.split("-")[1])).sort((a, b) => a - b)).toEqual([0, 1, 2, 3, 4].map((offset) => first + offset));
+    expect(await next()).toBe(first + 5);
+    const [{ body: { id } }] = answers as [(typeof answers)[number]];
+    const drawing = (await drawingOf(owner, id)).drawing;
+    expect(drawing.sheet.titleBlock.jobNumber).toBe(taken[0]);
+    const copy = await request("POST", `/api/jobs/${id}/duplicate`, { as: owner, body: { name: "Copy at once" } });
+    expect((await request("GET", `/api/jobs/${copy.body.id}`, { as: owner })).body.number).toMatch(new RegExp(`-${first + 5}$`));
   });
 });
 
@@ -149,6 +184,17 @@ describe("the archive", () => {
     ]) expect(answer).toMatchObject({ status: 409, body: { code: "job-archived" } });
     await request("POST", `/api/jobs/${id}/archive`, { as: owner, body: { archived: false } });
     expect((await save(owner, drawing.id, 0, place("ds-1", "DS-1"))).status).toBe(200);
+  });
+  it("closes a review with it", async () => {
+    const id = await make("A-3", "In review");
+    await save(owner, (await drawingOf(owner, id)).id, 0, place("ds-1", "DS-1"));
+    const issued = await request("POST", `/api/jobs/${id}/revisions`, { as: owner, body: { purpose: "issued for permit" } });
+    const licensee = await onJob(owner, id, ["licensee"]);
+    const back = () => request("POST", `/api/revisions/${issued.body.id}/return`, { as: licensee, body: { comment: "Once more" } });
+    await request("POST", `/api/jobs/${id}/archive`, { as: owner, body: { archived: true } });
+    expect(await back()).toMatchObject({ status: 409, body: { code: "job-archived" } });
+    await request("POST", `/api/jobs/${id}/archive`, { as: owner, body: { archived: false } });
+    expect((await back()).status).toBe(200);
   });
   it("is for administrators", async () => {
     const id = await make("A-2", "Other");

@@ -14,7 +14,7 @@ const time = (at: number): string => new Date(at).toLocaleTimeString("en-US", { 
 export function Strips({ onTryAgain }: { onTryAgain: () => void }) {
   const save = useEditor((editor) => editor.save);
   const readOnly = useEditor((editor) => editor.readOnly);
-  if (readOnly) return <Strip icon="lock">You can look, copy and find here. Only designers of this job change the drawing.</Strip>;
+  if (readOnly) return <Strip icon="lock">You can look, copy and find here. Only designers of this job change the drawing, and nobody while it is in the archive.</Strip>;
   if (save.kind === "offline") return <Strip icon="offline">You can go on drawing. Issue and review wait for the connection.</Strip>;
   if (save.kind === "failed") {
     return (

@@ -11,8 +11,14 @@ export interface CountedRow {
   id: string; drawingId: string; sequence: number; checkedSequence: number | null; checkedRuleSet: string | null; checkCounts: Counts | null;
   revisionId: string | null; state: string; revisionSequence: number | null; revisionRuleSet: string | null;
 }
-/** Drawings that one list checks before it answers; the rest is worked out after it, so that a list never waits for all. */
-const AT_ONCE = 3;
+/** How long one list checks drawings before it answers, in ms; the rest is worked out after it, so that a list never waits for all. */
+const AT_ONCE_MS = 30;
+/** Rest after each check of the queue, in lengths of that check, so that requests find the core free most of the time. */
+const REST = 8;
+const MOST_FAILURES = 3;
+/** Drawings in the queue, and how many failed in a row. */
+const waiting = new Set<string>();
+let failures = 0;
 
 const holds = (row: Pick<CountedRow, "sequence" | "checkedSequence" | "checkedRuleSet" | "checkCounts">): Counts | null =>
   (row.checkCounts && row.checkedSequence === row.sequence && row.checkedRuleSet === RULE_SET_VERSION ? row.checkCounts : null);
@@ -47,7 +53,7 @@ export async function shownCounts(drawing: Drawing, latest: Pick<Revision, "id" 
 
 /** The same for the lines of a list, by drawing. What is not known yet is left out and worked out after the answer. */
 export async function countsOfRows(rows: readonly CountedRow[]): Promise<Map<string, Counts>> {
-  const { Drawing, FindingAcceptance } = database();
+  const { FindingAcceptance } = database();
   const found = new Map<string, Counts>();
   const issued = rows.filter((row) => row.revisionId !== null && isIssued({ state: row.state, sequence: row.revisionSequence ?? -1, ruleSet: row.revisionRuleSet ?? "" }, row.sequence));
   const accepted = issued.length === 0 ? [] : await FindingAcceptance.findAll({ where: { revisionId: issued.map((row) => row.revisionId as string) } });
@@ -58,28 +64,44 @@ export async function countsOfRows(rows: readonly CountedRow[]): Promise<Map<str
     if (kept) found.set(row.drawingId, kept);
     else unknown.push(row.drawingId);
   }
-  const one = async (id: string): Promise<void> => {
-    const drawing = await Drawing.findByPk(id, { attributes: ["id", "sequence", "document"] });
-    if (drawing) found.set(id, await work(drawing));
-  };
-  for (const id of unknown.slice(0, AT_ONCE)) await one(id);
-  later(unknown.slice(AT_ONCE), one);
+  const started = performance.now();
+  let at = 0;
+  // While the queue works, nothing is checked here: lists of many people would add up to what the queue avoids.
+  while (at < unknown.length && waiting.size === 0 && performance.now() - started < AT_ONCE_MS) {
+    const id = unknown[at++] as string;
+    const counts = await countsOf(id).catch(told(id));
+    if (counts) found.set(id, counts);
+  }
+  later(unknown.slice(at));
   return found;
 }
 
-const waiting = new Set<string>();
-/** One after the other, each in a turn of its own: requests come in between. A failure is told and the next one goes on. */
-function later(ids: readonly string[], one: (id: string) => Promise<void>): void {
+async function countsOf(drawingId: string): Promise<Counts | null> {
+  const drawing = await database().Drawing.findByPk(drawingId, { attributes: ["id", "sequence", "document", "checkedSequence", "checkedRuleSet", "checkCounts"] });
+  return drawing && (holds(drawing) ?? work(drawing));
+}
+
+/** A drawing that cannot be checked must not take the list down with it. */
+const told = (id: string) => (error: unknown): null => {
+  console.error(`counts of drawing ${id}`, error);
+  failures += 1;
+  return null;
+};
+
+/** One after the other, with rests between. Where one failure follows another the queue is given up; the next list asks again. */
+function later(ids: readonly string[]): void {
   const idle = waiting.size === 0;
   for (const id of ids) waiting.add(id);
   if (!idle || waiting.size === 0) return;
-  const next = (): void => {
+  failures = 0;
+  const next = async (): Promise<void> => {
     const [id] = waiting;
     if (id === undefined) return;
-    void one(id).catch((error: unknown) => console.error(`counts of drawing ${id}`, error)).finally(() => {
-      waiting.delete(id);
-      setImmediate(next);
-    });
+    const began = performance.now();
+    if (await countsOf(id).catch(told(id))) failures = 0;
+    waiting.delete(id);
+    if (failures >= MOST_FAILURES) waiting.clear();
+    setTimeout(() => void next(), REST * (performance.now() - began)).unref();
   };
-  setImmediate(next);
+  setImmediate(() => void next());
 }
