@@ -41,7 +41,7 @@ import { labelRules } from "./labels";
 import { completenessRules } from "./completeness";
 
 /** Printed on every sealed sheet and part of the drawing digest. Raised whenever a rule may answer otherwise. */
-export const RULE_SET_VERSION = "2026-1";
+export const RULE_SET_VERSION = "2026-2";
 
 /** Every rule, in the order in which findings of one severity are listed: what kills first. */
 export const rules: readonly Rule[] = [

@@ -2,6 +2,7 @@ import type { Circuit, Conductor, Drawing, Section } from "@/lib/diagram/schema"
 import type { PropertyValue } from "@/lib/equipment/define";
 import { check } from "@/lib/rules/engine/run";
 import { rules } from "@/lib/rules";
+import { secondSystem } from "@/tests/fixtures/secondSystem";
 import { cleanDrawing } from "@/seeders/demo/cleanDrawing";
 
 /** One case of a rule: an edit of the clean farm system, and what this rule alone then says. */
@@ -94,3 +95,14 @@ export function thirdUnit(drawing: Drawing): void {
   drawing.circuits["d3"] = { ...copy(drawing.circuits["d2"]), tag: "D3", from: { equipment: "cb-d3", port: "load", offset: 0 }, to: { equipment: "inv-3", port: "battery", offset: 0 } };
   drawing.circuits["k-12"] = { ...copy(drawing.circuits["k-2"]), tag: "K-12", from: { equipment: "inv-2", port: "data", offset: 0 }, to: { equipment: "inv-3", port: "data", offset: 0 } };
 }
+
+/** Puts the second system, with its transfer switch, in the place of the farm system. */
+export function second(drawing: Drawing): void { Object.assign(drawing, secondSystem()); }
+/** The second system with its generator wired straight to the transfer switch. */
+export function direct(drawing: Drawing): void {
+  second(drawing);
+  circuitOf(drawing, "c3").from = { equipment: "gen", port: "load", offset: 0 };
+  for (const [id, each] of Object.entries(drawing.circuits)) if (each.wiring === "factory" && each.to.equipment === "qg") delete drawing.circuits[id];
+  delete drawing.equipment["qg"];
+}
+export const home = (drawing: Drawing): void => { drawing.site.occupancy = "one- or two-family dwelling"; };

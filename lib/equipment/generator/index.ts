@@ -12,6 +12,8 @@ export const generator = defineKind({
     faultA: number("Fault current contribution", "A", 0, 50000, { rated: true }),
     fuel: choice("Fuel", ["propane", "natural gas", "diesel", "gasoline"]),
     use: choice("Use", ["fixed standby", "portable"]),
+    stopOnEnclosure: flag("Stop on the outside of the enclosure", { rated: true }),
+    overloadPrevented: flag("Built so that it cannot be overloaded", { rated: true }),
     listedParallelWithUtility: flag("Listed and set for parallel operation with the utility", { rated: true }),
   },
   defaults: { use: "fixed standby" },

@@ -4,7 +4,7 @@ import { identity, lines } from "../shared";
 /** Switch that starts rapid shutdown or the storage emergency stop. */
 export const shutdownInitiator = defineKind({
   kind: "shutdown-initiator", title: "Shutdown initiator", tagPrefix: "RSD", railGroup: "switch and protect",
-  properties: { ...identity, purpose: choice("Purpose", ["PV rapid shutdown", "storage emergency stop", "both"]), enclosureType: choice("Enclosure type", ["1", "3R", "4", "4X"]), circuitVoltage: text("Control circuit", 40) },
+  properties: { ...identity, purpose: choice("Purpose", ["PV rapid shutdown", "storage emergency stop", "both", "generator stop"]), enclosureType: choice("Enclosure type", ["1", "3R", "4", "4X"]), circuitVoltage: text("Control circuit", 40) },
   defaults: { purpose: "PV rapid shutdown" },
   capabilities: {},
   symbol: () => "estop",
