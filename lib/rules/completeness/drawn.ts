@@ -1,4 +1,4 @@
-import { MUST_FIX_TO_2023, NEVER_MUST_FIX, notCode, sameSection, sections } from "@/lib/rules/engine/meta";
+import { MUST_FIX_TO_2023, NEVER_MUST_FIX, notCode, sections } from "@/lib/rules/engine/meta";
 import type { CheckContext, Outcome, Rule } from "@/lib/rules/engine/types";
 import type { ElementRef } from "@/lib/diagram/schema";
 import { circuitRef, equipmentRef, found, nameOf, NOT_APPLICABLE, numberOf, PASS, Reader } from "@/lib/rules/shared/outcome";
