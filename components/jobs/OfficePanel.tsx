@@ -45,7 +45,7 @@ export function OfficePanel({ job }: { job: JobAnswer }) {
             <p className="min-w-0 truncate font-lettering text-[15px]">{job.permitNumber || <span className="font-sans text-text text-ink2">no number yet</span>}</p>
           </div>
           <p className="col-span-2 -mt-3 text-label text-ink3">The number stands in the title block and is entered there. The fee is noted for the office; nothing is paid here.</p>
-          <TextField label="Fee" unit="USD" inputMode="decimal" placeholder="412.50" error={errors.permitFeeCents?.message} {...register("permitFeeCents")} />
+          <TextField label="Fee" unit="USD" inputMode="decimal" placeholder={job.may.edit ? "412.50" : ""} error={errors.permitFeeCents?.message} {...register("permitFeeCents")} />
           <TextField label="Paid on" type="date" error={errors.permitFeePaidOn?.message} {...register("permitFeePaidOn")} />
           <TextField label="Receipt number" className="col-span-2" error={errors.permitReceipt?.message} {...register("permitReceipt")} />
         </div>

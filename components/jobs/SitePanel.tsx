@@ -55,7 +55,7 @@ export function SitePanel({ job }: { job: JobAnswer }) {
   });
 
   return (
-    <Panel title="Site and title block" aside={!job.may.edit && <span className="text-label text-ink2">To read; designers and administrators change it</span>}>
+    <Panel title="Site and title block" aside={!job.may.edit && <span className="text-label text-ink2">{job.archivedAt ? "To read; the job is in the archive" : "To read; designers and administrators change it"}</span>}>
       <FormProvider {...form}>
       <form onSubmit={submit} noValidate>
         <FormSection title="Job" text="Number and name stand on every sheet.">

@@ -60,7 +60,7 @@ describe("the records", () => {
     const [line] = await lines("?action=job.edit");
     expect([...(line?.changes ?? [])].sort((a, b) => a.field.localeCompare(b.field))).toEqual([
       { field: "design high, °C", before: "33", after: "35" }, { field: "due on", before: "", after: "2027-01-15" }, { field: "name", before: "Before", after: "After" },
-      { field: "permit fee cents", before: "", after: "12500" },
+      { field: "permit fee, cents", before: "", after: "12500" },
     ]);
   });
 

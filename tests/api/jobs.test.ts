@@ -218,6 +218,12 @@ describe("the history of a job", () => {
     const next = (await request("GET", `/api/jobs/${id}/history?limit=5&before=${first.entries[0].id}`, { as: owner })).body;
     expect(next.entries.map((each: { what: string }) => each.what)).toEqual(["Changed the drawing, 3 saves", "Made the job"]);
   });
+  it("says into the archive or out of it, and which of two came first", async () => {
+    const id = await make("H-2", "Moved");
+    for (const archived of [true, false]) await request("POST", `/api/jobs/${id}/archive`, { as: owner, body: { archived } });
+    const { entries } = (await request("GET", `/api/jobs/${id}/history`, { as: owner })).body;
+    expect(entries.map((each: { what: string }) => each.what)).toEqual(["Took the job out of the archive", "Put the job into the archive", "Made the job"]);
+  });
   it("has words for every action that the code writes", async () => {
     const { readdirSync, readFileSync } = await import("node:fs");
     const { join } = await import("node:path");

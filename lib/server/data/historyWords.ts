@@ -2,7 +2,12 @@ import "server-only";
 import { fieldWords } from "./recordWords";
 
 type Detail = Readonly<Record<string, unknown>>;
-interface Words { what: string; detail: (detail: Detail) => string | null }
+interface Words {
+  what: string;
+  detail: (detail: Detail) => string | null;
+  /** Instead of `what`, where the detail tells which of two it was. */
+  told?: (detail: Detail) => string;
+}
 
 const nothing = (): null => null;
 const text = (value: unknown): string | null => (typeof value === "string" && value !== "" ? value : typeof value === "number" ? String(value) : null);
@@ -20,7 +25,7 @@ export const ACTION_WORDS: Readonly<Record<string, Words>> = {
   "file.add": { what: "Added a file", detail: part("name") },
   "file.remove": { what: "Removed a file", detail: part("name") },
   "finding.accept": { what: "Accepted a finding in writing", detail: part("reason") },
-  "job.archive": { what: "Moved the job into or out of the archive", detail: (d) => (d["archived"] === true ? "into the archive" : "out of the archive") },
+  "job.archive": { what: "Moved the job into or out of the archive", detail: nothing, told: (d) => (d["archived"] === true ? "Put the job into the archive" : "Took the job out of the archive") },
   "job.create": { what: "Made the job", detail: part("number") },
   "job.duplicate": { what: "Made the job as a copy", detail: part("from", "of ") },
   "job.edit": { what: "Changed the job's data", detail: (d) => list(d["fields"]) || null },
@@ -28,7 +33,7 @@ export const ACTION_WORDS: Readonly<Record<string, Words>> = {
   "jurisdiction.create": { what: "Entered a jurisdiction", detail: part("name") },
   "jurisdiction.delete": { what: "Deleted a jurisdiction", detail: part("name") },
   "jurisdiction.edit": { what: "Changed a jurisdiction", detail: (d) => list(d["fields"]) || text(d["name"]) },
-  "library.archive": { what: "Moved a library entry into or out of the archive", detail: (d) => (d["archived"] === true ? "into the archive" : "out of the archive") },
+  "library.archive": { what: "Moved a library entry into or out of the archive", detail: part("name"), told: (d) => (d["archived"] === true ? "Put a library entry into the archive" : "Took a library entry out of the archive") },
   "library.change": { what: "Changed a library entry", detail: (d) => text(d["name"]) ?? text(d["note"]) },
   "library.create": { what: "Added a library entry", detail: part("name") },
   "library.import": { what: "Imported library entries", detail: (d) => [text(d["kind"]), text(d["added"]) && `${text(d["added"])} added`].filter(Boolean).join(", ") || null },
@@ -39,7 +44,7 @@ export const ACTION_WORDS: Readonly<Record<string, Words>> = {
   "member.roles": { what: "Changed somebody's roles in the job", detail: about },
   "password.change": { what: "Changed the password", detail: nothing },
   "person.add": { what: "Added somebody to the company", detail: about },
-  "person.active": { what: "Closed or opened an account", detail: (d) => [text(d["person"]), d["active"] === true ? "opened" : "closed"].filter(Boolean).join(", ") },
+  "person.active": { what: "Closed or opened an account", detail: part("person"), told: (d) => (d["active"] === true ? "Opened an account" : "Closed an account") },
   "person.remove": { what: "Took somebody out of the company", detail: part("person") },
   "person.roles": { what: "Changed somebody's roles in the company", detail: about },
   "records.export": { what: "Exported the records", detail: (d) => (text(d["rows"]) === null ? null : `${text(d["rows"])} rows`) },
@@ -58,5 +63,5 @@ export const ACTION_WORDS: Readonly<Record<string, Words>> = {
 /** One entry of the audit log in words. An action without words shows itself, so that nothing is hidden. */
 export function historyWords(action: string, detail: Detail): { what: string; detail: string | null } {
   const words = Object.hasOwn(ACTION_WORDS, action) ? ACTION_WORDS[action] : undefined;
-  return words ? { what: words.what, detail: words.detail(detail) } : { what: action, detail: null };
+  return words ? { what: words.told?.(detail) ?? words.what, detail: words.detail(detail) } : { what: action, detail: null };
 }

@@ -67,7 +67,13 @@ export async function archiveJob(actor: Actor, jobId: string, archived: boolean)
   return getJob(actor, jobId);
 }
 
-/** What was done to a job, newest first, in words. Saves of one person in a row are one line. */
+/** What people do many times in a row: one line tells how often. */
+const REPEATED: Readonly<Record<string, (times: number) => string>> = {
+  "drawing.save": (times) => `Changed the drawing, ${times} saves`,
+  "visit.edit": (times) => `Changed a site visit, ${times} saves`,
+};
+
+/** What was done to a job, newest first, in words. Saves of one person to one thing in a row are one line. */
 export async function jobHistory(actor: Actor, jobId: string, { before, limit }: z.output<typeof historyQuery>): Promise<{ entries: HistoryLine[]; more: boolean }> {
   await jobAccess(actor, jobId, "history.view");
   const { AuditEntry, User } = database();
@@ -76,22 +82,23 @@ export async function jobHistory(actor: Actor, jobId: string, { before, limit }:
     order: [["id", "DESC"]], limit: 4 * limit + 1,
   });
   const people = new Map((await User.findAll({ where: { id: [...new Set(rows.flatMap((row) => row.actorId ?? []))] }, attributes: ["id", "name"] })).map((user) => [user.id, user.name]));
-  const entries: (HistoryLine & { actorId: string | null; action: string; saves: number })[] = [];
+  const entries: (HistoryLine & { actorId: string | null; action: string; subject: string; saves: number })[] = [];
   let read = 0;
   for (const row of rows.slice(0, 4 * limit)) {
     const last = entries.at(-1);
-    const joins = last && row.action === "drawing.save" && last.action === "drawing.save" && last.actorId === row.actorId;
+    const repeated = REPEATED[row.action];
+    const joins = last && repeated && last.action === row.action && last.subject === row.subject && last.actorId === row.actorId;
     if (!joins && entries.length === limit) break;
     read += 1;
-    if (joins && last) {
+    if (joins) {
       last.saves += 1;
       last.id = Number(row.id);
-      last.what = `Changed the drawing, ${last.saves} saves`;
-      last.detail = null;
+      last.what = repeated(last.saves);
+      if (row.action === "drawing.save") last.detail = null;
       continue;
     }
     const { what, detail } = historyWords(row.action, row.detail);
-    entries.push({ id: Number(row.id), at: row.at.toISOString(), by: row.actorId ? people.get(row.actorId) ?? null : null, what, detail, actorId: row.actorId, action: row.action, saves: 1 });
+    entries.push({ id: Number(row.id), at: row.at.toISOString(), by: row.actorId ? people.get(row.actorId) ?? null : null, what, detail, actorId: row.actorId, action: row.action, subject: row.subject, saves: 1 });
   }
-  return { entries: entries.map(({ actorId: _, action: __, saves: ___, ...line }) => line), more: read < rows.length };
+  return { entries: entries.map(({ actorId: _, action: __, subject: ___, saves: ____, ...line }) => line), more: read < rows.length };
 }

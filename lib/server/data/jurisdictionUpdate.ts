@@ -42,7 +42,7 @@ export async function jurisdictionUpdate(actor: Actor, jobId: string, edition: "
   return {
     jurisdiction: { id: row.id, name: row.name, version: row.version }, changes,
     findings: changes.length === 0 ? { added: [], removed: [], changed: [] } : comparison(document, applyPatches(document, localPatches(document, local))),
-    may: { take: may(roles, "job.edit") },
+    may: { take: may(roles, "job.edit") && job.archivedAt === null },
   };
 }
 

@@ -12,12 +12,12 @@ export function valueWords(value: unknown): string {
 }
 
 /** Units at the end of a field's name, as they are written. */
-const UNITS: Readonly<Record<string, string>> = { a: "A", c: "°C", ft: "ft", in: "in", m: "m", v: "V", w: "W" };
+const UNITS: Readonly<Record<string, string>> = { a: "A", c: "°C", cents: "cents", ft: "ft", in: "in", m: "m", v: "V", w: "W" };
 
 /** A field's name as people read it: `expiresOn` → "expires on", `designHighC` → "design high, °C". */
 export function fieldWords(name: string): string {
   const words = name.replace(/([a-z0-9])([A-Z])/g, (_, before: string, after: string) => `${before} ${after.toLowerCase()}`);
-  const unit = /^(.+) (\w{1,2})$/.exec(words);
+  const unit = /^(.+) (\w{1,5})$/.exec(words);
   const written = unit && Object.hasOwn(UNITS, unit[2] ?? "") ? UNITS[unit[2] ?? ""] : undefined;
   return unit && written ? `${unit[1]}, ${written}` : words;
 }
