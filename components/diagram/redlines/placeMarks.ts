@@ -10,6 +10,8 @@ export interface PlacedMark {
   readonly finding: Finding;
   readonly kind: MarkKind;
   readonly number: number;
+  /** Keys of further findings of the same kind at the same tag: they share the mark, so that a drawing in the making stays readable. */
+  readonly also: readonly string[];
   /** Tag that is underlined, px on the sheet. */
   readonly tag: Box;
   /** Center of the mark. */
@@ -40,7 +42,7 @@ export function placeMarks(graph: DrawingGraph, findings: readonly Finding[], op
   const symbols = Object.keys(graph.drawing.equipment).filter((id) => graph.drawing.equipment[id]?.size === null && isDrawn(graph, id))
     .map((id) => equipmentBox(graph, id)).map((box): Box => ({ x: sheetPx(box.x), y: sheetPx(box.y), width: box.width * PX_PER_UNIT, height: box.height * PX_PER_UNIT }));
   const half = 11 * scale;
-  return numbered(findings).flatMap(({ finding, kind, number }): PlacedMark[] => {
+  return together(numbered(findings)).flatMap(({ finding, kind, number, also }): PlacedMark[] => {
     const tag = tagBox(graph, finding.anchor, options);
     if (!tag) return [];
     const middle = tag.y + tag.height / 2;
@@ -56,6 +58,20 @@ export function placeMarks(graph: DrawingGraph, findings: readonly Finding[], op
     // A mark may touch lettering by a corner; it must not hide it.
     const best = spots.find((spot) => spot.cost < half * half * 0.3) ?? spots.reduce((a, b) => (b.cost < a.cost ? b : a));
     taken.push(best.box);
-    return [{ finding, kind, number, tag, x: best.x, y: best.y }];
+    return [{ finding, kind, number, also, tag, x: best.x, y: best.y }];
   });
+}
+
+type Numbered = ReturnType<typeof numbered>[number];
+/** One mark for all findings of one kind at one element; each must-fix keeps its own. */
+function together(list: readonly Numbered[]): readonly (Numbered & { also: readonly string[] })[] {
+  const groups = new Map<string, Numbered & { also: string[] }>();
+  for (const one of list) {
+    const { anchor, key } = one.finding;
+    const name = one.kind === "must" ? key : `${one.kind} ${anchor.collection}/${anchor.id}`;
+    const known = groups.get(name);
+    if (known) known.also.push(key);
+    else groups.set(name, { ...one, also: [] });
+  }
+  return [...groups.values()];
 }
