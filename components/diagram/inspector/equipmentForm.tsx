@@ -7,6 +7,7 @@ import type { PortInfo } from "@/lib/diagram/graph";
 import type { Property } from "@/lib/equipment/define";
 import { PortFields, PropertyField, propertyGroups, unknownWords } from "@/components/fields/equipmentFields";
 import { ChoiceField, FieldGroup, SourceLine, TextField } from "@/components/fields/fields";
+import { LibraryBlock } from "./libraryBlock";
 import { useEdit } from "./useEdit";
 
 const STATUSES = ["new", "existing", "relocated", "removed"] as const;
@@ -21,6 +22,7 @@ export function EquipmentForm({ id }: { id: string }) {
   const { readOnly, set, take } = useEdit(ref);
   return (
     <>
+      <LibraryBlock id={id} />
       {propertyGroups(properties, equipment.props).map((group) => (
         <FieldGroup key={group.id} title={group.title} note={unknownWords(group.unknown)} open={group.id === "rating" || group.id === "settings" || group.id === "construction"}>
           {group.entries.map(([name, property]) => <SourcedField key={name} id={id} name={name} property={property} />)}

@@ -37,6 +37,34 @@ function portsStillFit(draft: Draft<Drawing>, id: string): void {
   }
 }
 
+export const takeFromLibrary: Recipe<"takeFromLibrary"> = (draft, { id, from }, say) => {
+  const each = need(draft, "equipment", id);
+  if (!from) {
+    delete each.library;
+    return `let go of the library entry of ${nameOf(draft, { collection: "equipment", id })}`;
+  }
+  const definition = kindDefinition(each.kind);
+  for (const [name, value] of Object.entries(from.data.props)) {
+    const property = Object.hasOwn(definition.properties, name) ? definition.properties[name] : undefined;
+    if (!property) throw new Refusal(`${definition.title} has no such value.`, name);
+    const fault = propertyFault(property, value);
+    if (fault) throw new Refusal(`${property.label} ${fault}.`, name);
+    // What the entry does not know, the drawing may: roles, addresses, what was read on site.
+    if (value === null) continue;
+    const before = each.props[name];
+    if (before !== null && before !== undefined && before !== value) say(`${property.label}: ${String(before)} becomes ${String(value)}.`);
+    each.props[name] = value;
+    const source = from.data.sources[name];
+    if (source) each.sources[name] = { ...source };
+    if (each.kind === "hybrid-inverter" && name === "trackers") syncTrackers(draft, id, value);
+  }
+  const ports = new Set(definition.ports(each.props as never).map((port) => port.id));
+  for (const [port, data] of Object.entries(from.data.ports)) if (ports.has(port)) each.ports[port] = { ...each.ports[port], ...data };
+  portsStillFit(draft, id);
+  each.library = { ...from.ref };
+  return `take ${from.name}, version ${from.ref.version}, for ${nameOf(draft, { collection: "equipment", id })}`;
+};
+
 export const setProperty: Recipe<"setProperty"> = (draft, { id, name, value, source }) => {
   const each = need(draft, "equipment", id);
   const definition = kindDefinition(each.kind);

@@ -6,7 +6,7 @@ import { kindDefinition } from "@/lib/equipment/registry";
 import { moveElements, resizeElement, setParent, turnElements } from "./arrange";
 import { addBond, addInterlock, placeSensor, setBond, setInterlock, setSensor } from "./attached";
 import { addToRoute, joinPorts, removeFromRoute, removeSection, routeCircuit, setEnd, setSection, splitSection } from "./circuits";
-import { placeText, removeUnderlay, setField, setPort, setProperty, setSheet, setSite, setTag, setTitleBlock, setUnderlay } from "./fields";
+import { placeText, removeUnderlay, setField, setPort, setProperty, setSheet, setSite, setTag, setTitleBlock, setUnderlay, takeFromLibrary } from "./fields";
 import { paste } from "./paste";
 import { placeEquipment } from "./place";
 import { placeRaceway, removeCompartment, removeStretch, setCompartment, setRaceway, setStretch } from "./raceways";
@@ -21,7 +21,7 @@ export { circuitPrefix, equipmentPrefix, nextTag, racewayPrefix } from "./tags";
 export { nameOf, withParts } from "./lookup";
 
 const recipes: { readonly [T in Exclude<CommandType, "applySuggestion">]: Recipe<T> } = {
-  placeEquipment, moveElements, turnElements, resizeElement, setParent, deleteElements, setProperty, setPort, setField, setTag, joinPorts, setEnd,
+  placeEquipment, moveElements, turnElements, resizeElement, setParent, deleteElements, setProperty, takeFromLibrary, setPort, setField, setTag, joinPorts, setEnd,
   routeCircuit, setSection, splitSection, removeSection, addToRoute, removeFromRoute, placeRaceway, setRaceway, setStretch, removeStretch,
   setCompartment, removeCompartment, placeSensor, setSensor, addBond, setBond, addInterlock, setInterlock, placeText, setSite, setSheet,
   setUnderlay, removeUnderlay, setTitleBlock, paste,

@@ -22,6 +22,8 @@ export type Command =
   | { type: "setParent"; id: string; parent: string | null }
   | { type: "deleteElements"; refs: readonly ElementRef[] }
   | { type: "setProperty"; id: string; name: string; value: PropertyValue; source?: SourceNote | null }
+  /** Copies ratings, their sources and port values from an entry of the library and keeps which version they came from. Null lets go of the entry; the values stay. */
+  | { type: "takeFromLibrary"; id: string; from: { ref: NonNullable<Equipment["library"]>; name: string; data: Pick<Equipment, "props" | "sources" | "ports"> } | null }
   | { type: "setPort"; id: string; port: string; change: Change<PortData> }
   /** One field of one element, for example ["location", "ambientC"]. Lists are set whole. */
   | { type: "setField"; ref: ElementRef; path: readonly string[]; value: unknown }

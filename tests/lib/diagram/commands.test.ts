@@ -19,6 +19,7 @@ const MORE: readonly Command[] = [
   { type: "setParent", id: "pump", parent: "house" },
   { type: "setProperty", id: "inverter", name: "trackers", value: 4 },
   { type: "setProperty", id: "cb-a", name: "ratingA", value: null, source: { document: "HB-78", page: "12" } },
+  { type: "takeFromLibrary", id: "cb-a", from: { ref: { entry: "7d444840-9dc0-41d1-b245-5ffdce74fad2", version: 2 }, name: "Breaker, 60 A", data: { props: { ratingA: 60, interruptingKA: 22, poles: null }, sources: { ratingA: { document: "Breaker sheet", page: "3" } }, ports: { load: { maximumA: 60 } } } } },
   { type: "setPort", id: "inverter", port: "ac", change: { continuousA: 32.5 } },
   { type: "setField", ref: ref("equipment", "cb-a"), path: ["location", "ambientC"], value: 40 },
   { type: "setTag", ref: ref("circuits", "output"), tag: " F20 " },
@@ -67,7 +68,7 @@ describe("every command", () => {
     const elsewhere = ["removeSection", "removeStretch", "removeCompartment", "removeUnderlay", "paste"];
     // The list of types as the union names them; a new one fails here until it has an example.
     const all: Record<Command["type"], true> = {
-      placeEquipment: true, moveElements: true, turnElements: true, resizeElement: true, setParent: true, deleteElements: true, setProperty: true, setPort: true, setField: true,
+      placeEquipment: true, moveElements: true, turnElements: true, resizeElement: true, setParent: true, deleteElements: true, setProperty: true, takeFromLibrary: true, setPort: true, setField: true,
       setTag: true, joinPorts: true, setEnd: true, routeCircuit: true, setSection: true, splitSection: true, removeSection: true, addToRoute: true, removeFromRoute: true,
       placeRaceway: true, setRaceway: true, setStretch: true, removeStretch: true, setCompartment: true, removeCompartment: true, placeSensor: true, setSensor: true,
       addBond: true, setBond: true, addInterlock: true, setInterlock: true, placeText: true, setSite: true, setSheet: true, setUnderlay: true, removeUnderlay: true, setTitleBlock: true, applySuggestion: true, paste: true,
@@ -82,6 +83,26 @@ describe("every command", () => {
     expect(one.drawing.circuits["string"]?.sections["s1"]?.route).toEqual([{ raceway: "way", compartment: "c1" }]);
     expect(one.also).toHaveLength(1);
     expect(run(run(smallDrawing(), { type: "setStretch", raceway: "stub", stretch: "t2", change: {} }), { type: "removeStretch", raceway: "stub", stretch: "t2" })).toEqual(smallDrawing());
+  });
+});
+
+describe("an entry of the library", () => {
+  const ref = { entry: "7d444840-9dc0-41d1-b245-5ffdce74fad2", version: 2 };
+  const take = (props: Record<string, number | string | null>): Command => ({ type: "takeFromLibrary", id: "cb-a", from: { ref, name: "Breaker, 60 A", data: { props, sources: { ratingA: { document: "Breaker sheet", page: "3" } }, ports: { load: { maximumA: 60 }, nowhere: { maximumA: 1 } } } } });
+  it("gives its values with the page behind them, says what it replaced, and leaves what it does not know", () => {
+    const { drawing, also } = done(smallDrawing(), take({ ratingA: 60, interruptingKA: 22, poles: null }));
+    expect(drawing.equipment["cb-a"]).toMatchObject({ library: ref, props: { ratingA: 60, interruptingKA: 22, poles: 2 }, sources: { ratingA: { document: "Breaker sheet", page: "3" } }, ports: { load: { maximumA: 60 } } });
+    expect(drawing.equipment["cb-a"]?.ports["nowhere"]).toBeUndefined();
+    expect(also).toEqual(["Trip rating: 40 becomes 60."]);
+  });
+  it("can be let go of; the values stay", () => {
+    const { drawing } = done(run(smallDrawing(), take({ ratingA: 60 })), { type: "takeFromLibrary", id: "cb-a", from: null });
+    expect(drawing.equipment["cb-a"]).toMatchObject({ props: { ratingA: 60 } });
+    expect(drawing.equipment["cb-a"]?.library).toBeUndefined();
+  });
+  it("is refused where it holds what the kind does not", () => {
+    expect(applyCommand(smallDrawing(), take({ moduleW: 400 }))).toMatchObject({ ok: false, field: "moduleW" });
+    expect(applyCommand(smallDrawing(), take({ ratingA: -1 }))).toMatchObject({ ok: false, field: "ratingA" });
   });
 });
 
