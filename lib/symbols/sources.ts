@@ -30,6 +30,6 @@ export const sourcesSymbols = {
     title: "Inlet, flanged",
     paths: { stroke: "M36 0H22M22 -9H14A9 9 0 0 0 14 9H22ZM6 -4H-2M6 4H-2" },
     texts: [],
-    ports: [{ x: 36, y: 0 }],
+    ports: [{ x: 0, y: 0 }, { x: 36, y: 0 }],
   },
 } as const satisfies Readonly<Record<string, SymbolShape>>;
