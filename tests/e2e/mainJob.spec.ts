@@ -73,7 +73,7 @@ test("designer repairs the planted drawing and issues it, the licensee seals it,
     await signIn(licensee, demoPeople.licensee.email, demoPeople.licensee.password);
     await licensee.goto(revision);
     await expect(licensee.getByRole("button", { name: /^Seal Rev/ })).toBeDisabled();
-    const item = licensee.locator('li[data-rule="rating-unknown"]');
+    const item = licensee.locator('li[data-rule="rating-unknown"]', { hasText: "DS-1" });
     await expect(item).toHaveCount(1);
     await item.getByLabel("Accept in writing").fill("Rating plate to be verified before energizing.");
     await item.getByRole("button", { name: "Accept this one" }).click();

@@ -58,13 +58,14 @@ export function LibraryBlock({ id }: { id: string }) {
         {!readOnly && later && <Button size="bar" onClick={() => take(later)}>Take over version {later.version}</Button>}
         {!readOnly && (
           <div className="flex flex-wrap items-end gap-2">
-            <label className="grid min-w-0 flex-1 gap-1 text-label text-ink2">
-              {equipment.library ? "Another entry" : "Choose from the library"}
-              <select value={chosen} onChange={(event) => setChosen(event.target.value)} className="h-bar-control w-full min-w-0 border border-rule bg-paper px-2 text-body text-ink">
+            <div className="grid min-w-0 flex-1 gap-1 text-label text-ink2">
+              {/* The list stands beside its label, not in it: a label is read with everything inside. */}
+              <span aria-hidden="true">{equipment.library ? "Another entry" : "Choose from the library"}</span>
+              <select aria-label={equipment.library ? "Another entry" : "Choose from the library"} value={chosen} onChange={(event) => setChosen(event.target.value)} className="h-bar-control w-full min-w-0 border border-rule bg-paper px-2 text-body text-ink">
                 <option value="">choose</option>
                 {entries.map((each) => <option key={each.id} value={each.id}>{each.name}</option>)}
               </select>
-            </label>
+            </div>
             <Button size="bar" disabled={!picked} onClick={() => { if (picked) take(picked); setChosen(""); }}>Take its ratings</Button>
           </div>
         )}
